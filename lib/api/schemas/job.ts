@@ -1,0 +1,26 @@
+import { z } from 'zod'
+import { Id, Timestamp, Version } from './common'
+
+export const JobFields = z.strictObject({
+  title: z.string().trim().min(1).max(160),
+  client: z.string().trim().max(160).default(''),
+})
+export const Job = z.object({
+  id: Id,
+  number: z.string(),
+  title: z.string(),
+  client: z.string(),
+  profiles: z.int(),
+  createdAt: Timestamp,
+  updatedAt: Timestamp,
+  binnedAt: Timestamp.nullable(),
+  version: Version,
+})
+export const JobQuery = z.object({
+  q: z.string().max(200).optional(),
+  sort: z.enum(['number', 'title', 'updatedAt']).default('updatedAt'),
+  dir: z.enum(['asc', 'desc']).default('desc'),
+  cursor: z.string().optional(),
+  limit: z.coerce.number().int().min(1).max(200).default(50),
+  bin: z.stringbool().default(false),
+})

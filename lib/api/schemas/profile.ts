@@ -1,0 +1,50 @@
+import { z } from 'zod'
+import { Id, Timestamp, Version } from './common'
+
+export const ProfileFields = z.strictObject({
+  jobId: Id,
+  title: z.string().trim().min(1).max(160),
+  materialId: Id.nullable().default(null),
+  ownerId: Id.optional(),
+  drawingNumber: z.string().trim().max(80).default(''),
+})
+export const ProfileChange = ProfileFields.partial()
+
+/** The figures a list shows and sorts by: those of the newest revision, null before there is one. */
+const Figures = z.object({
+  area: z.number(),
+  mass: z.number().nullable(),
+  ix: z.number(),
+  iy: z.number(),
+  i1: z.number(),
+  i2: z.number(),
+  theta: z.number().nullable(),
+  circle: z.number(),
+})
+export const Profile = z.object({
+  id: Id,
+  number: z.string(),
+  title: z.string(),
+  drawingNumber: z.string(),
+  job: z.object({ id: Id, number: z.string(), title: z.string() }),
+  material: z.object({ id: Id, name: z.string() }).nullable(),
+  owner: z.object({ id: Id, name: z.string() }),
+  latest: z.object({ id: Id, letter: z.string(), state: z.string(), createdAt: Timestamp, figures: Figures }).nullable(),
+  revisions: z.int(),
+  createdAt: Timestamp,
+  updatedAt: Timestamp,
+  binnedAt: Timestamp.nullable(),
+  version: Version,
+})
+/** `q` takes words and conditions on figures: `mullion ix>=40cm4 mass<=2.1`. */
+export const ProfileQuery = z.object({
+  q: z.string().max(200).optional(),
+  jobId: Id.optional(),
+  ownerId: Id.optional(),
+  materialId: Id.optional(),
+  sort: z.enum(['number', 'title', 'updatedAt', 'area', 'mass', 'ix', 'iy', 'circle']).default('updatedAt'),
+  dir: z.enum(['asc', 'desc']).default('desc'),
+  cursor: z.string().optional(),
+  limit: z.coerce.number().int().min(1).max(200).default(50),
+  bin: z.stringbool().default(false),
+})

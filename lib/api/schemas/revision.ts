@@ -1,0 +1,49 @@
+import { z } from 'zod'
+import { Id, Timestamp, Version } from './common'
+import { Finding, SectionAnswer } from './section'
+
+/** How a person confirmed unit and size: a dimension known from elsewhere, or one drawn that agrees. */
+export const SizeConfirmation = z.strictObject({
+  by: z.enum(['typed', 'drawn']),
+  /** the dimension, mm, as known from elsewhere */
+  value: z.number().positive(),
+  /** what the drawing gives for it with this recipe, mm */
+  measured: z.number().positive(),
+  what: z.string().max(200),
+  finished: z.enum(['finished', 'die']),
+})
+
+/** Multipart fields of POST /api/v1/profiles/{id}/revisions beside `file` (or `fileSha256` of one the team has). */
+export const RevisionFields = z.strictObject({
+  drawingRevision: z.string().trim().max(40).default(''),
+  note: z.string().trim().max(2000).default(''),
+  confirmation: SizeConfirmation.nullable().default(null),
+  /** the figures the browser showed; the save is refused where the server's differ beyond rounding */
+  shown: z.record(z.string(), z.number().nullable()).nullable().default(null),
+})
+
+export const Opinion = z.object({ library: z.string(), agrees: z.boolean().nullable(), sentence: z.string() })
+
+export const Revision = z.object({
+  id: Id,
+  profileId: Id,
+  letter: z.string(),
+  state: z.enum(['draft', 'in review', 'released', 'superseded', 'withdrawn']),
+  drawingRevision: z.string(),
+  note: z.string(),
+  confirmation: SizeConfirmation.nullable(),
+  file: z.object({
+    name: z.string(),
+    bytes: z.int(),
+    sha256: z.string(),
+    alsoIn: z.array(z.object({ profileId: Id, number: z.string(), letter: z.string() })),
+  }),
+  answer: SectionAnswer,
+  material: z.object({ id: z.string(), name: z.string(), density: z.number(), source: z.string() }).nullable(),
+  opinions: z.array(Opinion).nullable(),
+  createdAt: Timestamp,
+  createdBy: z.object({ id: Id, name: z.string() }),
+  version: Version,
+})
+/** 422 of an upload that gives no section. */
+export const NoSection = z.object({ findings: z.array(Finding) })

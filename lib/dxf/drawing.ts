@@ -1,0 +1,83 @@
+import type { EdgeTable, Point } from '../geometry/edges'
+import type { Finding } from '../geometry/finding'
+
+export interface Layer {
+  name: string
+  off: boolean
+  frozen: boolean
+  plots: boolean
+  lineType: string
+  /** drawn entities on it, in the space that the recipe takes */
+  entities: number
+}
+
+/** A DXF entity that gave edges (after blocks were opened up: one per placed entity). Columns, one row an entity. */
+export interface EntityColumns {
+  count: number
+  /** index into `Drawing.kinds` */
+  kind: Uint8Array
+  /** index into `Drawing.layers` */
+  layer: Uint32Array
+  /** index into `Drawing.lineTypes`, resolved (BYLAYER and BYBLOCK answered) */
+  lineType: Uint32Array
+  /** index into `Drawing.spaces`; 0 is model space */
+  space: Uint16Array
+  /** index into `Drawing.blocks` + 1 of the outermost INSERT's block; 0 where drawn directly */
+  block: Uint32Array
+  /** index of the placed INSERT (a running number from 1) the entity came from; 0 where drawn directly */
+  insert: Uint32Array
+  /** 1 where the entity closes on itself (CIRCLE, closed polyline, full ellipse, closed spline) */
+  closed: Uint8Array
+  /** 1 where invisible (60), 2 where it is a hatch boundary */
+  flags: Uint8Array
+}
+
+/** A DIMENSION entity: evidence of a size. Places in world coordinates, drawing units. */
+export interface DrawnDimension {
+  kind: 'linear' | 'aligned' | 'angular' | 'diameter' | 'radius' | 'ordinate' | 'arc'
+  /** code 42 where present, else measured from the definition points; degrees for angular */
+  measured: number
+  /** text override as written, '' for none */
+  text: string
+  /** the number read from the text override, in the text's own unit; null where the text names none */
+  textValue: number | null
+  tolerance: { plus: number; minus: number } | null
+  layer: string
+  a: Point
+  b: Point
+  /** angle of a linear dimension, degrees */
+  angle: number
+  at: Point
+}
+
+/** What was read from the file. */
+export interface Drawing {
+  acadVersion: string
+  /** 'none' or the unit's name as $INSUNITS says it: 'mm', 'in', … */
+  declared: string
+  /** mm per drawing unit from $INSUNITS; null for none */
+  declaredMm: number | null
+  measurement: 'metric' | 'english' | null
+  layers: Layer[]
+  lineTypes: string[]
+  spaces: string[]
+  blocks: string[]
+  kinds: string[]
+  entities: EntityColumns
+  edges: EdgeTable
+  /** entities read and entities not turned into edges, by kind, whole file (model space and layouts) */
+  read: Record<string, number>
+  ignored: Record<string, number>
+  dimensions: DrawnDimension[]
+  /** half of the last written digit of the coordinates, drawing units (median over coordinates); 0 if exact */
+  lastDigit: number
+  findings: Finding[]
+}
+
+/** Limits on one file; the figures are named in the finding that a breach gives. */
+export interface ReadLimits {
+  bytes: number
+  entities: number
+  nesting: number
+}
+export const DEFAULT_LIMITS: ReadLimits = { bytes: 64 * 1024 * 1024, entities: 2_000_000, nesting: 32 }

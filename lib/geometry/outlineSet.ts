@@ -1,0 +1,51 @@
+import type { EdgeTable } from './edges'
+import type { Finding } from './finding'
+import type { Repair } from './region'
+
+/**
+ * The closed outlines of a drawing, in drawing units, before the make-up. Outline k is edges
+ * loopStart[k] … loopStart[k + 1] − 1 of `edges`, each running into the next and the last into the
+ * first, counter-clockwise. Ends are snapped: neighbours share their end to the last bit.
+ */
+export interface OutlineSet {
+  edges: EdgeTable
+  loopStart: Uint32Array
+  count: number
+  /** > 0, drawing units² */
+  area: Float64Array
+  /** minX minY maxX maxY of each outline, exact over its curves */
+  bounds: Float64Array
+  /** a point on each outline, by which a recipe names it: x y */
+  at: Float64Array
+  /** index of the entity (drawing.entities) that gave the outline's first edge */
+  source: Uint32Array
+  /**
+   * Nesting depth, 0 outermost, among the outlines of the set; −1 where the outline crosses or
+   * overlaps another, so that nesting says nothing and a person must state the make-up.
+   */
+  depth: Int32Array
+  /** number of the group that lies apart from the others (a detail of the sheet), from 0 */
+  group: Uint32Array
+  /** outlines whose boundaries meet other than at joints they share in passing: arranged together */
+  clusters: number[][]
+  /**
+   * Chains that do not close: edge rows `openStart[k] … openStart[k + 1] − 1` of `openEdges`; shown
+   * on the board, no metal.
+   */
+  openEdges: EdgeTable
+  openStart: Uint32Array
+  repairs: Repair[]
+  findings: Finding[]
+}
+
+/** The four tolerances, in drawing units, each recorded in the section. */
+export interface Tolerances {
+  /** half of the last written digit */
+  lastDigit: number
+  /** ends closer than this are joined */
+  chaining: number
+  /** parallel edges closer than this are one edge drawn twice */
+  duplicate: number
+  /** vertices of the arrangement closer than this are one; 1e-9 × size */
+  snap: number
+}

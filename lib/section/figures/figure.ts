@@ -1,0 +1,64 @@
+import type { OriginKind, Section } from '../types'
+
+/** What kind of quantity a figure is; lib/units knows how each is shown in a team's units. */
+export type Dimension =
+  | 'length'
+  | 'area'
+  | 'modulus'
+  | 'secondMoment'
+  | 'angle'
+  | 'massPerLength'
+  | 'perimeterFactor'
+  | 'ratio'
+  | 'count'
+  | 'warping'
+
+export type FigureGroup = 'size' | 'centroid' | 'bending' | 'principal' | 'plastic'
+
+/** A symbol in parts, so that the screen can lower the subscript: { base: 'W', sub: 'el,x' }. */
+export interface FigureSymbol {
+  base: string
+  sub?: string
+}
+
+/** What the board draws while the figure is hovered. */
+export type Shows =
+  | 'region'
+  | 'outer'
+  | 'inner'
+  | 'circle'
+  | 'extents'
+  | 'centroid'
+  | 'axisX'
+  | 'axisY'
+  | 'axesXY'
+  | 'axis1'
+  | 'axis2'
+  | 'axes12'
+  | 'fibreTop'
+  | 'fibreBottom'
+  | 'fibreRight'
+  | 'fibreLeft'
+  | 'fibre1Left'
+  | 'fibre1Right'
+  | 'fibre2Right'
+  | 'fibre2Left'
+  | 'plasticX'
+  | 'plasticY'
+  | 'plastic1'
+  | 'plastic2'
+  | 'freePlasticX'
+  | 'freePlasticY'
+
+/** One row of the table of figures. Sheet, CSV, JSON and schema walk this table. */
+export interface Figure {
+  /** dotted path of the value in `Section`, also the key in `origin` */
+  key: string
+  group: FigureGroup
+  symbol: { en: FigureSymbol; us: FigureSymbol }
+  word: string
+  dimension: Dimension
+  origin: OriginKind
+  shows: Shows
+  value: (section: Section) => number | null | undefined
+}
