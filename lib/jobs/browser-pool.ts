@@ -1,0 +1,63 @@
+import type { Recipe } from '../geometry/recipe'
+import type { UsedMaterial } from './answer'
+import type { PreviewReply, PreviewRequest, PreviewResult, Stage } from './previewProtocol'
+
+export type { DrawingView, PreviewResult, Role, Stage } from './previewProtocol'
+
+export interface PreviewHandlers {
+  onResult: (result: PreviewResult, seq: number) => void
+  onProgress: (stage: Stage) => void
+  /** the worker itself failed: an error of the product, never of the drawing */
+  onFailure: (message: string) => void
+}
+
+export interface Preview {
+  /** asks for the section of this recipe and returns its number; answers to earlier recipes are dropped */
+  ask: (recipe: Recipe, materials?: Record<string, UsedMaterial>) => number
+  /** ends the running work at once; the next recipe starts afresh */
+  cancel: () => void
+  close: () => void
+}
+
+/** A worker that keeps one file and its drawing, and answers recipes on it. */
+export function openPreview(file: File, { onResult, onProgress, onFailure }: PreviewHandlers): Preview {
+  let worker: Worker | null = null
+  let seq = 0
+
+  function onMessage({ data }: MessageEvent<PreviewReply>): void {
+    if (data.seq !== seq) return
+    if (data.stage === 'done') onResult(data.result, data.seq)
+    else if (data.stage === 'failed') onFailure(data.result.message)
+    else onProgress(data.stage)
+  }
+
+  function started(): Worker {
+    const fresh = new Worker(new URL('./preview.worker.ts', import.meta.url), { type: 'module' })
+    fresh.onmessage = onMessage
+    fresh.onerror = (event) => {
+      stop()
+      onFailure(event.message || 'The worker stopped.')
+    }
+    post(fresh, { kind: 'open', file, name: file.name })
+    return fresh
+  }
+
+  const post = (to: Worker, request: PreviewRequest) => to.postMessage(request)
+
+  function stop(): void {
+    seq++
+    worker?.terminate()
+    worker = null
+  }
+
+  return {
+    ask(recipe, materials = {}) {
+      seq++
+      worker ??= started()
+      post(worker, { kind: 'recipe', seq, recipe, materials })
+      return seq
+    },
+    cancel: stop,
+    close: stop,
+  }
+}

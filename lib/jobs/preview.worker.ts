@@ -1,0 +1,44 @@
+import type { PreviewReply, PreviewRequest } from './previewProtocol'
+import { createTask, previewOf, type SectionTask, tablesOf } from './tasks'
+
+const page = self as DedicatedWorkerGlobalScope
+const send = (reply: PreviewReply, moved: Transferable[] = []) => page.postMessage(reply, moved)
+
+type RecipeRequest = Extract<PreviewRequest, { kind: 'recipe' }>
+
+let file: { blob: Blob; name: string } | null = null
+let task: SectionTask | null = null
+let wanted: RecipeRequest | null = null
+
+async function opened(seq: number, { blob, name }: { blob: Blob; name: string }): Promise<SectionTask> {
+  send({ seq, stage: 'read', result: null })
+  const bytes = new Uint8Array(await blob.arrayBuffer())
+  // no secure context over plain http: the server takes the hash
+  return createTask(bytes, { name, bytes: bytes.length, sha256: '' })
+}
+
+/** Works on the newest recipe only: those that came meanwhile replace each other. */
+async function work(): Promise<void> {
+  const request = wanted
+  wanted = null
+  if (!request || !file) return
+  const { seq, recipe, materials } = request
+  try {
+    task ??= await opened(seq, file)
+    const result = previewOf(task, recipe, materials, (stage) => send({ seq, stage, result: null }))
+    send({ seq, stage: 'done', result }, tablesOf(result))
+  } catch (error) {
+    send({ seq, stage: 'failed', result: { message: error instanceof Error ? error.message : String(error) } })
+  }
+}
+
+page.onmessage = ({ data }: MessageEvent<PreviewRequest>) => {
+  if (data.kind === 'open') {
+    file = { blob: data.file, name: data.name }
+    task = null
+    return
+  }
+  wanted = data
+  // a timer lets the messages that already wait come first
+  setTimeout(work)
+}

@@ -1,0 +1,42 @@
+import type { Drawing } from '../dxf/drawing'
+import type { OutlineSet } from '../geometry/outlineSet'
+import type { Does, Recipe } from '../geometry/recipe'
+import type { Region } from '../geometry/region'
+import type { SectionAnswer } from '../section/types'
+import type { UsedMaterial } from './answer'
+
+/** The steps of a task, in order. */
+export type Stage = 'read' | 'chain' | 'combine' | 'figures'
+
+/** The drawing without its long columns, with counts for the lists a person chooses from. */
+export interface DrawingView extends Omit<Drawing, 'edges' | 'entities'> {
+  entities: number
+  /** placed entities of each line type and each space, in the order of `lineTypes` and `spaces` */
+  lineTypeEntities: number[]
+  spaceEntities: number[]
+}
+
+/** What an outline does in the make-up; null where a person must still say it. */
+export type Role = Does | null
+
+/** All that the page shows for one recipe. */
+export interface PreviewResult {
+  answer: SectionAnswer
+  drawing: DrawingView
+  /** drawing units, before the recipe's turn; null where the reader found nothing to chain */
+  outlines: OutlineSet | null
+  roles: Role[]
+  /** mm, turned: the frame of the figures; null without a section */
+  region: Region | null
+}
+
+/** From page to worker: the file once, then a recipe as often as the person changes something. */
+export type PreviewRequest =
+  | { kind: 'open'; file: Blob; name: string }
+  | { kind: 'recipe'; seq: number; recipe: Recipe; materials: Record<string, UsedMaterial> }
+
+/** From worker to page. A stage without result says that it begins. */
+export type PreviewReply =
+  | { seq: number; stage: Stage; result: null }
+  | { seq: number; stage: 'done'; result: PreviewResult }
+  | { seq: number; stage: 'failed'; result: { message: string } }
