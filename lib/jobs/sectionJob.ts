@@ -10,6 +10,8 @@ export interface SectionJob {
   source: Source
   recipe: Recipe
   materials: Record<string, UsedMaterial>
+  /** who named the unit where no person confirmed it ("the API"): a finding then says so */
+  unconfirmedBy?: string
 }
 
 /** What the other libraries said, with a finding for each disagreement. */

@@ -78,7 +78,7 @@ export function createSectionPool(given: Partial<PoolOptions> = {}): SectionPool
       serialization: 'advanced',
       execArgv: [`--max-old-space-size=${Math.round(options.memoryBytes / 1024 ** 2)}`],
       env,
-      stdio: ['ignore', 'ignore', 'ignore', 'ipc'],
+      stdio: ['ignore', 'ignore', 'inherit', 'ipc'],
     })
     const slot: Slot = { child, built: builtAt(), item: null, timer: null }
     slots.push(slot)

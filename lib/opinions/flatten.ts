@@ -37,7 +37,7 @@ export function flattenOpinion(combination: Combination): Opinion {
       else metal = combine(metal, polygon, does)
     }
   } catch (error) {
-    return { library, agrees: null, sentence: `It could not combine the outlines (${describe(error)}).` }
+    return { library, agrees: null, sentence: `It could not combine the outlines (${textOf(error)}).` }
   }
   const found = (metal?.faces.size ? metal.area() : 0) / scale ** 2
   const allowed =
@@ -83,4 +83,4 @@ function polygonOf({ outlines }: Combination, outline: number, frame: Frame, sca
   return polygon
 }
 
-const describe = (error: unknown) => (error instanceof Error ? error.message : String(error))
+const textOf = (error: unknown) => (error instanceof Error ? error.message : String(error))
