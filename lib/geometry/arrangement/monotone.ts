@@ -1,0 +1,154 @@
+import { ARC, type EdgeTable, ELLIPSE, LINE } from '../edges'
+import { bernsteinRoots } from './bernstein'
+import { endOf, pointAt, startOf } from './curve'
+
+/**
+ * Edges cut where they turn round in x or y. Piece i is edge[i] from parameter t0[i] to t1[i], in the
+ * edge's own direction; `ends` holds x0 y0 x1 y1. The box of a monotone piece is the box of its ends.
+ */
+export interface Pieces {
+  table: EdgeTable
+  count: number
+  edge: Uint32Array
+  t0: Float64Array
+  t1: Float64Array
+  ends: Float64Array
+}
+
+/** All edges of the table as monotone pieces, in the order of the edges. */
+export function monotonePieces(table: EdgeTable, tolerance: number): Pieces {
+  let room = Math.max(16, 2 * table.count)
+  const pieces: Pieces = {
+    table,
+    count: 0,
+    edge: new Uint32Array(room),
+    t0: new Float64Array(room),
+    t1: new Float64Array(room),
+    ends: new Float64Array(4 * room),
+  }
+  const p = new Float64Array(2)
+  for (let e = 0; e < table.count; e++) {
+    const cuts = table.kind[e] === LINE ? [] : turningParameters(table, e, tolerance)
+    while (pieces.count + cuts.length + 1 > room) {
+      room *= 2
+      grow(pieces, room)
+    }
+    let t = startOf(table, e)
+    let x = table.ends[4 * e]
+    let y = table.ends[4 * e + 1]
+    for (let c = 0; c <= cuts.length; c++) {
+      const i = pieces.count++
+      const last = c === cuts.length
+      const next = last ? endOf(table, e) : cuts[c]
+      pieces.edge[i] = e
+      pieces.t0[i] = t
+      pieces.t1[i] = next
+      pieces.ends[4 * i] = x
+      pieces.ends[4 * i + 1] = y
+      if (!last) pointAt(table, e, next, p)
+      x = last ? table.ends[4 * e + 2] : p[0]
+      y = last ? table.ends[4 * e + 3] : p[1]
+      pieces.ends[4 * i + 2] = x
+      pieces.ends[4 * i + 3] = y
+      t = next
+    }
+  }
+  return pieces
+}
+
+function grow(pieces: Pieces, room: number): void {
+  const { edge, t0, t1, ends } = pieces
+  pieces.edge = new Uint32Array(room)
+  pieces.edge.set(edge)
+  pieces.t0 = new Float64Array(room)
+  pieces.t0.set(t0)
+  pieces.t1 = new Float64Array(room)
+  pieces.t1.set(t1)
+  pieces.ends = new Float64Array(4 * room)
+  pieces.ends.set(ends)
+}
+
+/**
+ * Parameters strictly inside edge e, in its direction, where its carrier is level or upright: quadrants
+ * of an arc, extremes of an ellipse or Bézier. Those within the tolerance of an end or of the one before
+ * are left out: the piece is then monotone but for less than the tolerance.
+ */
+export function turningParameters(table: EdgeTable, e: number, tolerance: number): number[] {
+  const start = startOf(table, e)
+  const end = endOf(table, e)
+  const found = table.kind[e] === ARC || table.kind[e] === ELLIPSE ? angles(table, e, start, end) : bezierTurns(table, e)
+  found.sort((a, b) => (end > start ? a - b : b - a))
+  const kept: number[] = []
+  const at = new Float64Array(2)
+  const [x0, y0, x1, y1] = table.ends.subarray(4 * e, 4 * e + 4)
+  let x = x0
+  let y = y0
+  for (const t of found) {
+    pointAt(table, e, t, at)
+    const [px, py] = at
+    if (Math.hypot(px - x, py - y) <= tolerance || Math.hypot(px - x1, py - y1) <= tolerance) continue
+    kept.push(t)
+    x = px
+    y = py
+  }
+  return kept
+}
+
+function angles(table: EdgeTable, e: number, start: number, end: number): number[] {
+  const s = table.shapes
+  const k = table.shape[e]
+  const low = Math.min(start, end)
+  const high = Math.max(start, end)
+  const found: number[] = []
+  const every = (first: number, step: number) => {
+    for (let n = Math.ceil((low - first) / step); first + n * step < high; n++) {
+      const t = first + n * step
+      if (t > low) found.push(t)
+    }
+  }
+  if (table.kind[e] === ARC) every(0, Math.PI / 2)
+  else {
+    every(Math.atan2(s[k + 4], s[k + 2]), Math.PI)
+    every(Math.atan2(s[k + 5], s[k + 3]), Math.PI)
+  }
+  return found
+}
+
+/** Zeros of x′ and y′ of a Bézier: of X′W − XW′ where it is rational, in Bernstein form. */
+function bezierTurns(table: EdgeTable, e: number): number[] {
+  const s = table.shapes
+  const k = table.shape[e] + 2
+  const n = s[k - 2]
+  const rational = s[k - 1] === 1
+  const weights: number[] = []
+  for (let i = 0; i <= n; i++) weights.push(s[k + 3 * i + 2])
+  const found: number[] = []
+  for (let axis = 0; axis < 2; axis++) {
+    const c: number[] = []
+    for (let i = 0; i <= n; i++) c.push(s[k + 3 * i + axis] * (rational ? weights[i] : 1))
+    const slope = difference(c)
+    const zero = rational ? minus(product(slope, weights), product(c, difference(weights))) : slope
+    found.push(...bernsteinRoots(zero))
+  }
+  return found
+}
+
+const difference = (c: number[]) => c.slice(1).map((v, i) => v - c[i])
+const minus = (a: number[], b: number[]) => a.map((v, i) => v - b[i])
+
+/** Product of two polynomials in Bernstein form. */
+function product(a: number[], b: number[]): number[] {
+  const m = a.length - 1
+  const n = b.length - 1
+  const out = new Array<number>(m + n + 1).fill(0)
+  for (let i = 0; i <= m; i++) {
+    for (let j = 0; j <= n; j++) out[i + j] += a[i] * b[j] * choose(m, i) * choose(n, j)
+  }
+  return out.map((v, i) => v / choose(m + n, i))
+}
+
+function choose(n: number, k: number): number {
+  let c = 1
+  for (let i = 1; i <= k; i++) c = (c * (n - k + i)) / i
+  return c
+}
