@@ -1,5 +1,5 @@
+import { bezierXy, turnsOf } from '../bezierXy'
 import { ARC, type EdgeTable, ELLIPSE, LINE } from '../edges'
-import { bernsteinRoots } from './bernstein'
 import { endOf, pointAt, startOf } from './curve'
 
 /**
@@ -114,41 +114,7 @@ function angles(table: EdgeTable, e: number, start: number, end: number): number
   return found
 }
 
-/** Zeros of x′ and y′ of a Bézier: of X′W − XW′ where it is rational, in Bernstein form. */
 function bezierTurns(table: EdgeTable, e: number): number[] {
-  const s = table.shapes
-  const k = table.shape[e] + 2
-  const n = s[k - 2]
-  const rational = s[k - 1] === 1
-  const weights: number[] = []
-  for (let i = 0; i <= n; i++) weights.push(s[k + 3 * i + 2])
-  const found: number[] = []
-  for (let axis = 0; axis < 2; axis++) {
-    const c: number[] = []
-    for (let i = 0; i <= n; i++) c.push(s[k + 3 * i + axis] * (rational ? weights[i] : 1))
-    const slope = difference(c)
-    const zero = rational ? minus(product(slope, weights), product(c, difference(weights))) : slope
-    found.push(...bernsteinRoots(zero))
-  }
-  return found
-}
-
-const difference = (c: number[]) => c.slice(1).map((v, i) => v - c[i])
-const minus = (a: number[], b: number[]) => a.map((v, i) => v - b[i])
-
-/** Product of two polynomials in Bernstein form. */
-function product(a: number[], b: number[]): number[] {
-  const m = a.length - 1
-  const n = b.length - 1
-  const out = new Array<number>(m + n + 1).fill(0)
-  for (let i = 0; i <= m; i++) {
-    for (let j = 0; j <= n; j++) out[i + j] += a[i] * b[j] * choose(m, i) * choose(n, j)
-  }
-  return out.map((v, i) => v / choose(m + n, i))
-}
-
-function choose(n: number, k: number): number {
-  let c = 1
-  for (let i = 1; i <= k; i++) c = (c * (n - k + i)) / i
-  return c
+  const curve = bezierXy(table, e)
+  return [...turnsOf(curve.x, curve), ...turnsOf(curve.y, curve)]
 }
