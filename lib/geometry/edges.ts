@@ -196,8 +196,9 @@ export function pushCopy(table: EdgeTable, from: EdgeTable, i: number): number {
   const n = shapeLength(from, i)
   if (n > 0) {
     const k = roomForShape(table, n)
+    const first = from.shape[i]
     table.shape[j] = k
-    table.shapes.set(from.shapes.subarray(from.shape[i], from.shape[i] + n), k)
+    for (let m = 0; m < n; m++) table.shapes[k + m] = from.shapes[first + m]
   }
   return j
 }

@@ -1,0 +1,122 @@
+import { type Finding, type FindingParams, type FindingRow, makeFinding } from './finding'
+
+const text = (value: FindingParams[string]) => (typeof value === 'number' ? shortNumber(value) : String(value))
+const shortNumber = (value: number) => (Number.isInteger(value) ? String(value) : String(Number(value.toPrecision(6))))
+const plural = (n: FindingParams[string], one: string, many: string) => (n === 1 ? `1 ${one}` : `${text(n)} ${many}`)
+const mm = (value: FindingParams[string]) => `${typeof value === 'number' ? roundedMm(value) : value} mm`
+const roundedMm = (value: number) => (Math.abs(value) >= 0.1 ? value.toFixed(2) : String(Number(value.toPrecision(3))))
+const place = (p: FindingParams) => `(${text(p.x)}, ${text(p.y)})`
+
+/**
+ * What chaining, nesting and grouping can report. Lengths in the sentences are mm, places drawing units.
+ */
+export const GEOMETRY_FINDINGS = {
+  'gaps-within-digits': {
+    severity: 'note',
+    say: (p) =>
+      `${plural(p.count, 'gap', 'gaps')} between ends, at most ${mm(p.widest)}, ${p.count === 1 ? 'is' : 'are'} no wider than the drawing's last digits explain; closed.`,
+  },
+  'gap-closed': {
+    severity: 'warning',
+    say: (p) =>
+      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how}); another reasonable closing would change the area by ${text(p.area)} mm². Check the drawing there.`,
+  },
+  'chain-open': {
+    severity: 'warning',
+    say: (p) =>
+      `${mm(p.gap)} open at ${place(p)}: a chain of ${plural(p.edges, 'edge', 'edges')} ends at (${text(p.x0)}, ${text(p.y0)}) and (${text(p.x1)}, ${text(p.y1)}) and encloses no metal. Raise the tolerance to close it, or close it in the drawing.`,
+  },
+  'ends-ambiguous': {
+    severity: 'error',
+    say: (p) =>
+      `${plural(p.ends, 'end', 'ends')} lie within ${mm(p.width)} at ${place(p)}, wider than the tolerance as a whole: which belong together is not clear, so none was joined. Lower the tolerance, or mend the drawing there.`,
+  },
+  branches: {
+    severity: 'error',
+    say: (p) =>
+      `${plural(p.edges, 'edge', 'edges')} meet in branches at ${place(p)}: more than two edges share an end. Remove the extra edges in the drawing.`,
+  },
+  'face-metal-or-void': {
+    severity: 'error',
+    say: (p) =>
+      `Edges that branch enclose an area of ${text(p.area)} mm² at ${place(p)}: metal or void? Answer on the drawing; until then nothing is computed there.`,
+  },
+  'face-answered': {
+    severity: 'note',
+    say: (p) => `The area of ${text(p.area)} mm² at ${place(p)}, enclosed by branching edges, is ${p.is} by a person's answer.`,
+  },
+  'edges-doubled': {
+    severity: 'warning',
+    say: (p) =>
+      `${plural(p.count, 'edge', 'edges')} drawn twice or on top of one another (${mm(p.length)} in all, the first at ${place(p)}); each was taken once.`,
+  },
+  'edges-without-length': {
+    severity: 'note',
+    say: (p) => `${plural(p.count, 'edge', 'edges')} without length, the first at ${place(p)}; left out.`,
+  },
+  'outlines-coincident': {
+    severity: 'warning',
+    say: (p) =>
+      `${plural(p.count, 'closed outline lies', 'closed outlines lie')} on another one, the first at ${place(p)}; counted once.`,
+  },
+  'outline-without-area': {
+    severity: 'warning',
+    say: (p) =>
+      `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area; left out. Check the drawing there.`,
+  },
+  'outlines-cross': {
+    severity: 'warning',
+    say: (p) =>
+      `${plural(p.count, 'outline crosses', 'outlines cross')} another one, the first at ${place(p)}: nesting cannot tell metal from void there. Say what each outline does.`,
+  },
+  'outlines-touch': {
+    severity: 'note',
+    say: (p) => `${plural(p.count, 'outline touches', 'outlines touch')} another one, the first at ${place(p)}.`,
+  },
+  'outline-crosses-itself': {
+    severity: 'error',
+    say: (p) => `An outline crosses itself at ${place(p)}. Mend it in the drawing, or leave the outline out.`,
+  },
+  'groups-apart': {
+    severity: 'note',
+    say: (p) =>
+      `${plural(p.groups, 'group', 'groups')} of outlines lie apart from one another (details of a sheet?). Pick the one to use, or keep all.`,
+  },
+  'frame-found': {
+    severity: 'warning',
+    say: (p) =>
+      `A rectangle of ${text(p.width)} × ${text(p.height)} mm at ${place(p)} lies round everything and touches nothing: a drawing frame? Leave it out unless it is metal.`,
+  },
+  'title-block-found': {
+    severity: 'warning',
+    say: (p) =>
+      `${plural(p.count, 'rectangle', 'rectangles')} at ${place(p)} ${p.count === 1 ? 'looks' : 'look'} like a title block or table. Leave ${p.count === 1 ? 'it' : 'them'} out unless they are metal.`,
+  },
+  'chords-on-circle': {
+    severity: 'note',
+    say: (p) =>
+      `${plural(p.chords, 'short chord lies', 'short chords lie')} on one circle of radius ${mm(p.radius)} at ${place(p)}: an arc exploded by another program? As an arc the area changes by ${text(p.area)} mm².`,
+  },
+  'arcs-from-chords': {
+    severity: 'note',
+    say: (p) =>
+      `${plural(p.count, 'run', 'runs')} of chords taken as ${p.count === 1 ? 'an arc' : 'arcs'} by a person's choice; the area changes by ${text(p.area)} mm².`,
+  },
+  'arc-run-not-found': {
+    severity: 'warning',
+    say: (p) => `The run of chords accepted as an arc at ${place(p)} is not in the drawing; ignored. Look at it again.`,
+  },
+  'part-not-found': {
+    severity: 'error',
+    say: (p) => `No outline lies at ${place(p)}, where the part was picked. Pick it again.`,
+  },
+} satisfies Record<string, FindingRow>
+
+export type GeometryCode = keyof typeof GEOMETRY_FINDINGS
+
+export const geometryFinding = (
+  code: GeometryCode,
+  params: FindingParams,
+  at?: [number, number],
+  size?: number,
+): Finding<GeometryCode> => makeFinding<Record<GeometryCode, FindingRow>, GeometryCode>(GEOMETRY_FINDINGS, code, params, at, size)
