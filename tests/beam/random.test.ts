@@ -7,7 +7,10 @@ import { random } from '../support/random'
 
 const RUNS = Number(process.env.CAMPAIGN_RUNS ?? 300)
 
-/** A continuous unsymmetric member: two to five supports, up to two stretches, sometimes a hinge, a spring, an overhang. */
+/**
+ * A continuous unsymmetric member: two to five supports, up to two stretches, sometimes a hinge, a spring, an overhang.
+ * No span is shorter than a fortieth of the member: digits go with the cube of the ratio of neighbouring spans.
+ */
 function anyBeam(next: () => number): { beam: Beam; length: number } {
   const between = (low: number, high: number) => low + next() * (high - low)
   const length = between(1000, 12000)
@@ -31,7 +34,7 @@ function anyBeam(next: () => number): { beam: Beam; length: number } {
     next() < 0.5
       ? [{ to: length, stiffness: stiffness() }]
       : [
-          { to: length * between(0.2, 0.8), stiffness: stiffness() },
+          { to: supports[0].at + 0.75 * (supports[1].at - supports[0].at), stiffness: stiffness() },
           { to: length, stiffness: stiffness() },
         ]
   return { beam: { stretches, supports, hinges }, length }
