@@ -8,6 +8,8 @@ export const ERRORS = {
   stale: { status: 412, title: 'Somebody changed this since you opened it. Both versions are shown.' },
   frozen: { status: 409, title: 'This is released and cannot be changed. Make a new revision.' },
   in_progress: { status: 409, title: 'The same upload is still being worked on. Its result will be here in a moment.' },
+  binned: { status: 409, title: 'This is in the bin. Restore it first.' },
+  last_administrator: { status: 409, title: 'A team needs an administrator. Name another one first.' },
   taken: { status: 409, title: 'That is taken already. Choose another.' },
   set_up: { status: 409, title: 'This server is set up already. Sign in.' },
   too_large: { status: 413, title: 'The file is larger than this server takes.' },

@@ -2,6 +2,8 @@ import { z } from 'zod'
 
 /** 128 random bits as 26 lower-case base32 characters. */
 export const Id = z.string().regex(/^[a-z2-7]{26}$/)
+/** The parameters of a route about one thing. */
+export const ById = z.object({ id: Id })
 export const Timestamp = z.iso.datetime({ precision: 3 })
 export const Version = z.int().positive()
 

@@ -1,10 +1,11 @@
 import { z } from 'zod'
 import { Id, Timestamp, Version } from './common'
 
-export const JobFields = z.strictObject({
-  title: z.string().trim().min(1).max(160),
-  client: z.string().trim().max(160).default(''),
-})
+const title = z.string().trim().min(1).max(160)
+const client = z.string().trim().max(160)
+
+export const JobFields = z.strictObject({ title, client: client.default('') })
+export const JobChange = z.strictObject({ title, client }).partial()
 export const Job = z.object({
   id: Id,
   number: z.string(),
@@ -24,3 +25,7 @@ export const JobQuery = z.object({
   limit: z.coerce.number().int().min(1).max(200).default(50),
   bin: z.stringbool().default(false),
 })
+export type JobFields = z.infer<typeof JobFields>
+export type Job = z.infer<typeof Job>
+export type JobQuery = z.infer<typeof JobQuery>
+export type JobChange = z.infer<typeof JobChange>

@@ -19,6 +19,9 @@ export const SetUp = z.strictObject({
   demo: z.boolean().default(false),
 })
 
+/** GET /api/v1/setup. */
+export const SetUpState = z.object({ needed: z.boolean(), code: z.boolean() })
+
 /** How a team shows figures. */
 export const TeamSettings = z.strictObject({
   lengthUnit: z.enum(['mm', 'cm', 'in']),
@@ -73,6 +76,9 @@ export const Invitation = z.object({
   expiresAt: Timestamp,
   url: z.string().optional(),
 })
+export const InvitationToken = z.object({ token: z.string().max(100) })
+/** What the page of an invitation's link shows; `known`: the address has an account, its own password is asked. */
+export const InvitationLookup = Invitation.omit({ id: true, url: true }).extend({ team: z.string(), known: z.boolean() })
 export const AcceptInvitation = z.strictObject({ token: z.string(), name: z.string().trim().min(1).max(120), password })
 
 export const MaterialFields = z.strictObject({
@@ -81,3 +87,18 @@ export const MaterialFields = z.strictObject({
   source: z.string().trim().max(200),
 })
 export const Material = MaterialFields.extend({ id: Id, version: Version })
+export type SetUp = z.infer<typeof SetUp>
+export type TeamSettings = z.infer<typeof TeamSettings>
+export type Team = z.infer<typeof Team>
+export type TeamChange = z.infer<typeof TeamChange>
+export type Me = z.infer<typeof Me>
+export type MeChange = z.infer<typeof MeChange>
+export type Person = z.infer<typeof Person>
+export type PersonChange = z.infer<typeof PersonChange>
+export type Invite = z.infer<typeof Invite>
+export type Invitation = z.infer<typeof Invitation>
+export type AcceptInvitation = z.infer<typeof AcceptInvitation>
+export type MaterialFields = z.infer<typeof MaterialFields>
+export type Material = z.infer<typeof Material>
+export type SetUpState = z.infer<typeof SetUpState>
+export type InvitationLookup = z.infer<typeof InvitationLookup>

@@ -1,14 +1,20 @@
 import { z } from 'zod'
 import { Id, Timestamp, Version } from './common'
 
-export const ProfileFields = z.strictObject({
+const fields = {
   jobId: Id,
   title: z.string().trim().min(1).max(160),
-  materialId: Id.nullable().default(null),
-  ownerId: Id.optional(),
-  drawingNumber: z.string().trim().max(80).default(''),
+  materialId: Id.nullable(),
+  ownerId: Id,
+  drawingNumber: z.string().trim().max(80),
+}
+export const ProfileFields = z.strictObject({
+  ...fields,
+  materialId: fields.materialId.default(null),
+  ownerId: fields.ownerId.optional(),
+  drawingNumber: fields.drawingNumber.default(''),
 })
-export const ProfileChange = ProfileFields.partial()
+export const ProfileChange = z.strictObject(fields).partial()
 
 /** The figures a list shows and sorts by: those of the newest revision, null before there is one. */
 const Figures = z.object({
@@ -48,3 +54,7 @@ export const ProfileQuery = z.object({
   limit: z.coerce.number().int().min(1).max(200).default(50),
   bin: z.stringbool().default(false),
 })
+export type ProfileFields = z.infer<typeof ProfileFields>
+export type ProfileChange = z.infer<typeof ProfileChange>
+export type Profile = z.infer<typeof Profile>
+export type ProfileQuery = z.infer<typeof ProfileQuery>

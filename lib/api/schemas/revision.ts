@@ -47,3 +47,8 @@ export const Revision = z.object({
 })
 /** 422 of an upload that gives no section. */
 export const NoSection = z.object({ findings: z.array(Finding) })
+export type SizeConfirmation = z.infer<typeof SizeConfirmation>
+export type RevisionFields = z.infer<typeof RevisionFields>
+export type Opinion = z.infer<typeof Opinion>
+export type Revision = z.infer<typeof Revision>
+export type NoSection = z.infer<typeof NoSection>

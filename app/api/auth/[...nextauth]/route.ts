@@ -1,0 +1,10 @@
+import NextAuth from 'next-auth'
+import type { NextRequest } from 'next/server'
+import { authOptions } from '@/lib/auth/options'
+
+interface Context {
+  params: Promise<{ nextauth: string[] }>
+}
+const handler = (request: NextRequest, context: Context): Promise<Response> => NextAuth(request, context, authOptions())
+
+export { handler as GET, handler as POST }
