@@ -1,41 +1,36 @@
-import { mutate as revalidate } from 'swr'
+import { mutate } from 'swr'
 import type { z } from 'zod'
-import { type ErrorCode, ERRORS } from './errors'
+import { ERRORS } from './errors'
 import { Problem } from './schemas/common'
 
-/** A problem document as an error: `code` tells what, `title` and `detail` say it, `extra` holds findings, current, issues. */
+/** A refusal of the server; `problem` is its problem document. Told apart by `kind`. */
 export class ProblemError extends Error {
   readonly kind = 'problem'
-  constructor(
-    readonly code: ErrorCode | 'offline',
-    readonly status: number,
-    readonly title: string,
-    readonly detail: string | undefined,
-    readonly requestId: string | undefined,
-    readonly extra: Record<string, unknown>,
-  ) {
-    super(detail ?? title)
+  constructor(readonly problem: Problem) {
+    super(problem.detail ?? problem.title)
   }
 }
 
-export function isProblem(error: unknown): error is ProblemError {
+export function isProblemError(error: unknown): error is ProblemError {
   return typeof error === 'object' && error !== null && 'kind' in error && error.kind === 'problem'
 }
 
-const isCode = (code: string): code is ErrorCode => code in ERRORS
-
-async function problemOf(response: Response): Promise<ProblemError> {
+async function refusalOf(response: Response): Promise<ProblemError> {
   const parsed = Problem.safeParse(await response.json().catch(() => null))
-  if (!parsed.success) return new ProblemError('internal', response.status, ERRORS.internal.title, undefined, undefined, {})
-  const { type: _, title, status, detail, code, requestId, ...extra } = parsed.data
-  return new ProblemError(isCode(code) ? code : 'internal', status, title, detail, requestId, extra)
+  if (parsed.success) return new ProblemError(parsed.data)
+  return new ProblemError({
+    type: 'about:blank',
+    title: ERRORS.internal.title,
+    status: response.status,
+    code: 'internal',
+    requestId: response.headers.get('x-request-id') ?? '',
+  })
 }
 
-async function request(path: string, init?: RequestInit): Promise<Response> {
-  const response = await fetch(path, init).catch(() => null)
-  if (!response)
-    throw new ProblemError('offline', 0, 'The server cannot be reached. Nothing is lost; try again.', undefined, undefined, {})
-  if (!response.ok) throw await problemOf(response)
+/** `fetch` that throws a ProblemError for a refusal and fetch's own TypeError where the server does not answer. */
+export async function request(path: string, init?: RequestInit): Promise<Response> {
+  const response = await fetch(path, init)
+  if (!response.ok) throw await refusalOf(response)
   return response
 }
 
@@ -47,39 +42,39 @@ export const getJson =
 
 export const getBytes = async (path: string): Promise<ArrayBuffer> => (await request(path)).arrayBuffer()
 
-type Method = 'POST' | 'PATCH' | 'DELETE'
 interface Options {
+  /** goes as JSON; FormData goes as multipart */
+  body?: unknown
   /** the version that was seen; needed by every change of an existing row */
   version?: number
+  /** a retry with the same key gets the first one's result */
   idempotencyKey?: string
   signal?: AbortSignal
 }
 
-/** Sends a change; `FormData` goes as multipart, anything else as JSON. Throws `ProblemError`. */
-export async function send<T>(
-  method: Method,
+/** Sends a change and gives the parsed answer (undefined where there is none). Throws ProblemError. */
+export async function sendJson<T>(
+  method: 'POST' | 'PATCH' | 'DELETE',
   path: string,
-  body: unknown,
   schema: z.ZodType<T>,
-  options: Options = {},
+  { body, version, idempotencyKey, signal }: Options = {},
 ): Promise<T> {
   const headers = new Headers()
   const multipart = body instanceof FormData
-  if (!multipart && body !== undefined) headers.set('content-type', 'application/json')
-  if (options.version !== undefined) headers.set('if-match', `"${options.version}"`)
-  if (options.idempotencyKey) headers.set('idempotency-key', options.idempotencyKey)
+  if (body !== undefined && !multipart) headers.set('content-type', 'application/json')
+  if (version !== undefined) headers.set('if-match', `"${version}"`)
+  if (idempotencyKey) headers.set('idempotency-key', idempotencyKey)
   const sent = multipart ? body : body === undefined ? undefined : JSON.stringify(body)
-  const response = await request(path, { method, headers, body: sent, signal: options.signal })
+  const response = await request(path, { method, headers, body: sent, signal })
   return schema.parse(response.status === 204 ? undefined : await response.json())
 }
 
 /** Reads again everything whose key begins so, after a change. */
-export const refresh = (...prefixes: string[]) =>
-  revalidate((key) => typeof key === 'string' && prefixes.some((prefix) => key.startsWith(prefix)))
+export const refresh = (prefix: string) => mutate((key) => typeof key === 'string' && key.startsWith(prefix))
 
-/** Sets the row that a change returned, without reading it again. */
-export const put = <T>(key: string, row: T) => revalidate(key, row, { revalidate: false })
+/** Puts the row that a change returned in its place, without reading it again. */
+export const put = <T>(key: string, row: T) => mutate(key, row, { revalidate: false })
 
-/** A key for one upload: its retry gets the same result. Works over plain http, where crypto.randomUUID does not. */
+/** A key for one upload. Works over plain http too, where crypto.randomUUID does not. */
 export const newIdempotencyKey = () =>
   Array.from(crypto.getRandomValues(new Uint8Array(16)), (byte) => byte.toString(16).padStart(2, '0')).join('')

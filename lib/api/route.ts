@@ -33,7 +33,7 @@ interface Given<A, P, Q, B> {
 type Who = Permission | 'anyone' | 'signed in'
 type ActorFor<W extends Who> = W extends 'anyone' ? Actor | null : Actor
 interface Context {
-  params: Promise<Record<string, string | string[] | undefined>>
+  params: Promise<Record<string, string | string[] | undefined> | undefined>
 }
 export interface Handler {
   (request: Request, context: Context): Promise<Response>
@@ -104,7 +104,7 @@ function toProblem(error: unknown, requestId: string): Response {
 }
 
 async function patternOf({ url }: Request, { params }: Context): Promise<string> {
-  const values = new Map(Object.entries(await params).map(([name, value]) => [String(value), `{${name}}`]))
+  const values = new Map(Object.entries((await params) ?? {}).map(([name, value]) => [String(value), `{${name}}`]))
   return new URL(url).pathname
     .split('/')
     .map((part) => values.get(part) ?? part)

@@ -19,7 +19,7 @@ export async function signIn(email: string, password: string): Promise<void> {
   const refusal = new URL(url, location.origin).searchParams.get('error')
   if (refusal === null) return
   const code = REFUSALS[refusal] ?? 'wrong_password'
-  throw new ProblemError(code, ERRORS[code].status, ERRORS[code].title, undefined, undefined, {})
+  throw new ProblemError({ type: `urn:sectionwright:${code}`, ...ERRORS[code], code, requestId: '' })
 }
 
 export async function signOut(): Promise<void> {

@@ -21,3 +21,4 @@ export const Problem = z
     requestId: z.string(),
   })
   .loose()
+export type Problem = z.infer<typeof Problem>

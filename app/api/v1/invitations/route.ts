@@ -10,5 +10,5 @@ export const GET = route({ permission: 'people.manage' }, async ({ actor }) => (
 
 export const POST = route({ permission: 'people.manage', body: Invite, status: 201 }, async ({ actor, body }) => {
   const { token, ...invitation } = await inTransaction((trx) => invite(trx, actor, body))
-  return { ...invitation, url: `${config().appUrl}/invitation?token=${token}` }
+  return { ...invitation, url: `${config().appUrl}/invite/${token}` }
 })
