@@ -1,7 +1,14 @@
 import { rootsOf } from '../geometry/bernstein'
 import { turning } from '../geometry/bezierXy'
 import { ARC, BEZIER, type EdgeTable } from '../geometry/edges'
-import { addControlsSegment, type Controls, chordCentred, controlsFromChord, controlsPoint, partOfControls } from './bezierSegment'
+import {
+  addControlsSegment,
+  type Controls,
+  chordCentred,
+  controlsFromChord,
+  controlsPoint,
+  partOfControls,
+} from './bezierSegment'
 import type { Frame } from './frame'
 import { addShifted } from './momentArray'
 import { newUnitSegment, unitSegment } from './unitSegment'
@@ -146,4 +153,14 @@ export function addSegment(curve: Curve, t0: number, t1: number, k: number, l: n
     det * (pp * ev * ev + qq * fv * fv),
     det * (pp * eu * ev + qq * fu * fv),
   )
+}
+
+/** Farthest that a curve can reach from its chord's middle: cheap, so that most curves need no search. */
+export function reachOf({ controls, eu, ev, fu, fv }: Curve): number {
+  if (!controls) return 2 * (Math.abs(eu) + Math.abs(ev) + Math.abs(fu) + Math.abs(fv))
+  let reach = 0
+  for (let j = 0; j < controls.w.length; j++) {
+    reach = Math.max(reach, (Math.abs(controls.u[j]) + Math.abs(controls.v[j])) / controls.w[j])
+  }
+  return reach
 }

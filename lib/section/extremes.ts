@@ -1,5 +1,5 @@
 import { type EdgeTable, LINE } from '../geometry/edges'
-import { type Curve, curvePoint, loadCurve, newCurve, newCurvePoint, turnsInV } from './curve'
+import { type Curve, curvePoint, loadCurve, newCurve, newCurvePoint, reachOf, turnsInV } from './curve'
 import type { Frame } from './frame'
 
 /** Extents in a frame's axes. */
@@ -12,16 +12,6 @@ export interface Extremes {
 
 const curve = newCurve()
 const point = newCurvePoint()
-
-/** Farthest that the curve can reach from its chord's middle: cheap, so that most curves need no search for turning points. */
-function reachOf({ controls, eu, ev, fu, fv }: Curve): number {
-  if (!controls) return 2 * (Math.abs(eu) + Math.abs(ev) + Math.abs(fu) + Math.abs(fv))
-  let reach = 0
-  for (let j = 0; j < controls.w.length; j++) {
-    reach = Math.max(reach, (Math.abs(controls.u[j]) + Math.abs(controls.v[j])) / controls.w[j])
-  }
-  return reach
-}
 
 /** Quarter turn: v of the turned curve is u of this one, so one search serves both axes. */
 function swapAxes(c: Curve): Curve {

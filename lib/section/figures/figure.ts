@@ -1,3 +1,4 @@
+import type { Change } from '../change'
 import type { OriginKind, Section } from '../types'
 
 /** What kind of quantity a figure is; lib/units knows how each is shown in a team's units. */
@@ -50,6 +51,17 @@ export type Shows =
   | 'freePlasticX'
   | 'freePlasticY'
 
+/** The kinds of edges that make an otherwise exact figure an iterated one. */
+export type IteratedOn = 'ellipse' | 'bezier'
+
+/** Widths of metal along the plastic neutral axes, mm; 0 in a gap. */
+export interface PlasticWidths {
+  x: number
+  y: number
+  axis1: number
+  axis2: number
+}
+
 /** One row of the table of figures. Sheet, CSV, JSON and schema walk this table. */
 export interface Figure {
   /** dotted path of the value in `Section`, also the key in `origin` */
@@ -58,7 +70,11 @@ export interface Figure {
   symbol: { en: FigureSymbol; us: FigureSymbol }
   word: string
   dimension: Dimension
+  /** at best; a region with edges of a kind in `iteratedOn`, or with a rational spline, makes it 'iterated' */
   origin: OriginKind
+  iteratedOn?: readonly IteratedOn[]
   shows: Shows
   value: (section: Section) => number | null | undefined
+  /** first-order bound of what a change does to the figure, in its own unit; absent for counts */
+  spread?: (section: Section, change: Change, widths: PlasticWidths) => number
 }

@@ -1,0 +1,52 @@
+import type { Region } from '../geometry/region'
+import { extremesOf } from './extremes'
+import type { Frame } from './frame'
+import { type Moments, momentsOf } from './moments'
+import type { PieceSpan } from './plasticGap'
+
+/** Moments of one loop (holes are negative) about (x, y). */
+const loopMoments = ({ edges, loopStart }: Region, loop: number, frame: Frame): Moments =>
+  momentsOf(edges, loopStart[loop], loopStart[loop + 1], frame)
+
+const FIELDS = ['area', 'u', 'v', 'uu', 'vv', 'uv'] as const
+
+/** Moments of every piece in `frame`. */
+export function piecesMoments(region: Region, frame: Frame): Moments[] {
+  const pieces = Array.from({ length: region.pieces }, (): Moments => ({ area: 0, u: 0, v: 0, uu: 0, vv: 0, uv: 0 }))
+  for (let loop = 0; loop < region.piece.length; loop++) {
+    const part = loopMoments(region, loop, frame)
+    const piece = pieces[region.piece[loop]]
+    for (const field of FIELDS) piece[field] += part[field]
+  }
+  return pieces
+}
+
+/** Sums over the pieces of their second moments about their own centroids, without Steiner terms; `frame` along x and y. */
+export function ownMoments(region: Region, frame: Frame): { ix: number; iy: number; ixy: number } {
+  const centres = piecesMoments(region, frame).map(({ area, u, v }) => ({
+    ...frame,
+    x: frame.x + u / area,
+    y: frame.y + v / area,
+  }))
+  const own = { ix: 0, iy: 0, ixy: 0 }
+  for (let loop = 0; loop < region.piece.length; loop++) {
+    const { uu, vv, uv } = loopMoments(region, loop, centres[region.piece[loop]])
+    own.ix += vv
+    own.iy += uu
+    own.ixy += uv
+  }
+  return own
+}
+
+/** What every piece spans along v of `frame`. */
+export function pieceSpans(region: Region, frame: Frame, areas: readonly number[]): PieceSpan[] {
+  const spans = areas.map((area): PieceSpan => ({ min: Number.POSITIVE_INFINITY, max: Number.NEGATIVE_INFINITY, area }))
+  for (let loop = 0; loop < region.piece.length; loop++) {
+    if (region.hole[loop]) continue
+    const { minV, maxV } = extremesOf(region.edges, region.loopStart[loop], region.loopStart[loop + 1], frame)
+    const span = spans[region.piece[loop]]
+    span.min = Math.min(span.min, minV)
+    span.max = Math.max(span.max, maxV)
+  }
+  return spans
+}

@@ -1,0 +1,65 @@
+import { type Finding, makeFinding } from '../geometry/finding'
+import type { Region } from '../geometry/region'
+import { type Extremes, extremesOf } from './extremes'
+import type { PlasticWidths } from './figures/figure'
+import { BENDING_AXES, type BendingAxis } from './figures/spread'
+import { SECTION_FINDINGS } from './findings'
+import { type Frame, frameAt } from './frame'
+import type { Causes } from './origins'
+import { piecesMoments, pieceSpans } from './pieces'
+import { plasticBending } from './plastic'
+import { plasticGap } from './plasticGap'
+import type { Section } from './types'
+
+export interface PlasticFigures {
+  plastic: Section['plastic']
+  widths: PlasticWidths
+  /** moment about the other axis that comes with x and y, mm³ */
+  across: { x: number; y: number }
+  shape: (elastic: Section['elastic']) => Section['plasticShape']
+  findings: Finding[]
+}
+
+/** Frame in which v runs the way the offset of the axis is counted: x along +y, y along +x, 1 along axis 2, 2 along axis 1. */
+function bendingFrame({ x, y }: Frame, theta: number | null, axis: BendingAxis): Frame {
+  const angle = { x: 0, y: -90, axis1: theta ?? 0, axis2: (theta ?? 0) - 90 }[axis]
+  return frameAt(x, y, angle)
+}
+
+const lesser = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : Math.min(a, b))
+const over = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : a / b)
+
+/** Plastic figures about x, y and, unless every axis is principal, about axes 1 and 2. */
+export function plasticFigures(region: Region, frame: Frame, theta: number | null, causes: Causes, area: number): PlasticFigures {
+  const plastic: Section['plastic'] = { x: 0, y: 0, axis1: null, axis2: null, at: { x: 0, y: 0, axis1: null, axis2: null } }
+  const widths: PlasticWidths = { x: 0, y: 0, axis1: 0, axis2: 0 }
+  const across = { x: 0, y: 0 }
+  const findings: Finding[] = []
+  const areas = region.pieces > 1 ? piecesMoments(region, frame).map((piece) => piece.area) : []
+  const tolerance = Math.max(1e-9, (causes.digits?.area ?? 0) / area)
+  for (const axis of BENDING_AXES) {
+    if (theta === null && (axis === 'axis1' || axis === 'axis2')) continue
+    const turned = bendingFrame(frame, theta, axis)
+    const extremes: Extremes = extremesOf(region.edges, 0, region.edges.count, turned)
+    const bending = plasticBending(region.edges, turned, extremes)
+    plastic[axis] = bending.modulus
+    plastic.at[axis] = bending.offset
+    widths[axis] = bending.width
+    if (axis === 'x' || axis === 'y') across[axis] = bending.across
+    const gap = areas.length > 1 ? plasticGap(pieceSpans(region, turned, areas), tolerance) : null
+    if (!gap) continue
+    const [from, to] = gap
+    plastic.at[axis] = 0.5 * (from + to)
+    plastic.atRange = { ...plastic.atRange, [axis]: gap }
+    widths[axis] = 0
+    const places = { axis: axis.replace('axis', 'axis '), from: Number(from.toFixed(3)), to: Number(to.toFixed(3)) }
+    findings.push(makeFinding(SECTION_FINDINGS, 'plastic-axis-in-gap', places))
+  }
+  const shape = (elastic: Section['elastic']): Section['plasticShape'] => ({
+    x: plastic.x / Math.min(elastic.xTop, elastic.xBottom),
+    y: plastic.y / Math.min(elastic.yRight, elastic.yLeft),
+    axis1: over(plastic.axis1, lesser(elastic.axis1Left, elastic.axis1Right)),
+    axis2: over(plastic.axis2, lesser(elastic.axis2Left, elastic.axis2Right)),
+  })
+  return { plastic, widths, across, shape, findings }
+}

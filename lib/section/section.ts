@@ -1,0 +1,156 @@
+import { type Finding, makeFinding } from '../geometry/finding'
+import type { Region, Repair } from '../geometry/region'
+import { type Boundary, boundaryOf } from './boundary'
+import { changeByDisplacement, changeByRepairs } from './change'
+import { circumscribingCircle } from './circle'
+import { extremesOf } from './extremes'
+import { SECTION_FINDINGS } from './findings'
+import { type Frame, frameAt } from './frame'
+import { freeBending, plasticVector } from './freeBending'
+import { momentsOf } from './moments'
+import { type Causes, originsOf } from './origins'
+import { ownMoments } from './pieces'
+import { plasticFigures } from './plasticFigures'
+import { type Principal, principalOf } from './principal'
+import type { Section } from './types'
+
+export interface SectionInputs {
+  /** half of the last written digit of the drawing's coordinates, mm; 0 if exact */
+  lastDigit: number
+  /** repairs in the region's axes, mm */
+  repairs: readonly Repair[]
+  /** kg/m³ of the whole section */
+  density?: number
+  /** several materials: each part's region and density, kg/m³ */
+  parts?: readonly { region: Region; density: number }[]
+}
+
+export interface SectionResult {
+  section: Section | null
+  findings: Finding[]
+}
+
+/** Promise of the engine: 1e-9, or ten units in the last place of the coordinates times the figure's sensitivity. */
+const PROMISE = 1e-9
+const ULPS = 10
+
+function localFrame({ edges }: Region): { frame: Frame; area: number } {
+  const box = extremesOf(edges, 0, edges.count, frameAt(edges.ends[0], edges.ends[1]))
+  const start = frameAt(edges.ends[0] + 0.5 * (box.minU + box.maxU), edges.ends[1] + 0.5 * (box.minV + box.maxV))
+  const { area, u, v } = momentsOf(edges, 0, edges.count, start)
+  return { frame: frameAt(start.x + u / area, start.y + v / area), area }
+}
+
+function massOf(area: number, { density, parts }: SectionInputs): number | undefined {
+  if (!parts) return density === undefined ? undefined : area * density * 1e-6
+  return parts.reduce((sum, part) => {
+    const { edges } = part.region
+    return edges.count === 0 ? sum : sum + localFrame(part.region).area * part.density * 1e-6
+  }, 0)
+}
+
+/**
+ * All figures of a region (mm, turned upright) by exact integrals along its edges. Signs and axes as in `Section`; a region
+ * without metal gives no section but a finding.
+ */
+export function sectionOf(region: Region, inputs: SectionInputs): SectionResult {
+  const { edges } = region
+  const nothing = { section: null, findings: [makeFinding(SECTION_FINDINGS, 'no-metal')] }
+  if (edges.count === 0) return nothing
+  const { frame, area } = localFrame(region)
+  if (!(area > 0)) return nothing
+  const moments = momentsOf(edges, 0, edges.count, frame)
+  const ix = moments.vv - moments.v ** 2 / area
+  const iy = moments.uu - moments.u ** 2 / area
+  const ixy = moments.uv - (moments.u * moments.v) / area
+  const ip = ix + iy
+  const boundary = boundaryOf(region, frame.x, frame.y)
+  const causes = causesOf(region, inputs, boundary, frame)
+  const principal = principalOf(edges, frame, { ix, iy, ixy }, causes)
+  const local = extremesOf(edges, 0, edges.count, frame)
+  const whole = extremesOf(edges, 0, edges.count, frameAt(0, 0))
+  const { plastic, shape, widths, across, findings } = plasticFigures(region, frame, principal.theta, causes, area)
+  const elastic = elasticOf(region, frame, principal, local, ix, iy)
+  const degrees = (radians: number) => (radians * 180) / Math.PI
+  const vectorAt = plasticVector(edges, frame.x, frame.y)
+  const freeX = freeBending(vectorAt, 0, degrees(Math.atan2(ixy, iy)))
+  const freeY = freeBending(vectorAt, -90, degrees(Math.atan2(ix, ixy)) - 90)
+  const mass = massOf(area, inputs)
+  const section: Section = {
+    area,
+    ...(mass === undefined ? {} : { mass }),
+    perimeter: { outer: boundary.outer, inner: boundary.inner },
+    pieces: region.pieces,
+    extents: { minX: whole.minU, minY: whole.minV, maxX: whole.maxU, maxY: whole.maxV },
+    centroid: { x: frame.x, y: frame.y },
+    ix,
+    iy,
+    ixy,
+    ip,
+    i1: principal.i1,
+    i2: principal.i2,
+    theta: principal.theta,
+    rx: Math.sqrt(ix / area),
+    ry: Math.sqrt(iy / area),
+    r1: Math.sqrt(principal.i1 / area),
+    r2: Math.sqrt(principal.i2 / area),
+    elastic,
+    plastic,
+    plasticShape: shape(elastic),
+    freePlastic: {
+      x: freeX.modulus,
+      y: freeY.modulus,
+      angleX: freeX.angle,
+      angleY: freeY.angle,
+      restrainedMyForX: across.x,
+      restrainedMxForY: -across.y,
+    },
+    circle: circumscribingCircle(edges, whole),
+    ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
+    origin: {},
+  }
+  section.origin = originsOf(section, boundary, causes, widths)
+  return { section, findings: [...sayings(section), ...findings] }
+}
+
+function causesOf({ edges }: Region, { lastDigit, repairs }: SectionInputs, boundary: Boundary, { x, y }: Frame): Causes {
+  let largest = 0
+  for (let i = 0; i < 4 * edges.count; i++) largest = Math.max(largest, Math.abs(edges.ends[i]))
+  return {
+    digits: lastDigit > 0 ? changeByDisplacement(boundary, lastDigit) : null,
+    repairs: repairs.length > 0 ? changeByRepairs(repairs, x, y) : null,
+    numerics: changeByDisplacement(boundary, ULPS * Number.EPSILON * largest, PROMISE),
+  }
+}
+
+function elasticOf(
+  { edges }: Region,
+  { x, y }: Frame,
+  { theta, i1, i2 }: Principal,
+  local: { minU: number; maxU: number; minV: number; maxV: number },
+  ix: number,
+  iy: number,
+): Section['elastic'] {
+  const turned = theta === null ? null : extremesOf(edges, 0, edges.count, frameAt(x, y, theta))
+  return {
+    xTop: ix / local.maxV,
+    xBottom: ix / -local.minV,
+    yRight: iy / local.maxU,
+    yLeft: iy / -local.minU,
+    axis1Left: turned && i1 / turned.maxV,
+    axis1Right: turned && i1 / -turned.minV,
+    axis2Right: turned && i2 / turned.maxU,
+    axis2Left: turned && i2 / -turned.minU,
+  }
+}
+
+function sayings({ pieces, theta, plastic, freePlastic }: Section): Finding[] {
+  const findings: Finding[] = []
+  if (theta === null) findings.push(makeFinding(SECTION_FINDINGS, 'all-axes-principal'))
+  if (pieces > 1) findings.push(makeFinding(SECTION_FINDINGS, 'pieces-not-joined', { pieces }))
+  for (const axis of ['x', 'y'] as const) {
+    const part = freePlastic[axis] / plastic[axis]
+    if (part < 0.995) findings.push(makeFinding(SECTION_FINDINGS, 'free-plastic-lower', { axis, part }))
+  }
+  return findings
+}
