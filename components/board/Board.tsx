@@ -1,0 +1,121 @@
+'use client'
+import { type Dispatch, type ReactNode, useEffect, useId, useMemo, useRef } from 'react'
+import { AnnotationLayer } from './AnnotationLayer'
+import { annotate, type Writing } from './annotate'
+import type { BoardAction, BoardState } from './boardState'
+import { CentroidMark } from './CentroidMark'
+import { FindingMarks } from './FindingMarks'
+import { HotLayer } from './HotLayer'
+import { outlineAt } from './hit'
+import type { HoverStore } from './hover'
+import { Legend } from './Legend'
+import { Metal } from './Metal'
+import type { BoardModel } from './model'
+import { ShareLayer } from './ShareLayer'
+import { Strokes } from './Strokes'
+import { Toolbar } from './Toolbar'
+import { useBoardKeys } from './useBoardKeys'
+import { useGestures } from './useGestures'
+import { useLabels } from './useLabels'
+import { useTool } from './useTool'
+import { useView } from './useView'
+import { useViewport } from './useViewport'
+import { toDrawing } from './view'
+import { ZoneMarks } from './ZoneMarks'
+import { sheetAround } from './zones'
+
+/** Room around what is fitted: for axes, their names, dimensions and the zones' marks, px. */
+const INSET = { top: 84, right: 84, bottom: 76, left: 92 }
+const NARROW_INSET = { top: 56, right: 50, bottom: 58, left: 60 }
+/** How near an outline the pointer must be to pick it, px. */
+const REACH = 8
+
+interface Props {
+  model: BoardModel
+  state: BoardState
+  dispatch: Dispatch<BoardAction>
+  hover: HoverStore
+  writing: Writing
+  /** said to those who cannot see it */
+  label: string
+  onPick?: (outlineId: string | null) => void
+  /** the title block, beside the tools */
+  children?: ReactNode
+}
+
+/** The drawing board: the metal, its axes and what a person asks of it. */
+export function Board({ model, state, dispatch, hover, writing, label, onPick, children }: Props) {
+  const svg = useRef<SVGSVGElement>(null)
+  const id = useId()
+  const viewport = useViewport(svg)
+  const inset = viewport.width < 520 ? NARROW_INSET : INSET
+  const control = useView(model.extents, viewport, inset)
+  const { view } = control
+  const sheet = useMemo(() => sheetAround(model.extents), [model.extents])
+  const frame = useMemo(() => ({ view, viewport, extents: model.extents }), [view, viewport, model.extents])
+  const base = useMemo(() => annotate(model.section, frame, state.shown, writing), [model.section, frame, state.shown, writing])
+  const choices = useLabels(base, model, frame, control.moving)
+  const tool = useTool({ model, state, dispatch, view, viewport, writing })
+  const { goTo } = control
+
+  useEffect(() => {
+    if (state.goal) goTo(state.goal.at, state.goal.size)
+  }, [state.goal, goTo])
+
+  const pick = (x: number, y: number) => outlineAt(model.outlines, toDrawing(view, { x, y }), REACH / view.scale)?.id ?? null
+  const gestures = useGestures(svg, {
+    pan: control.pan,
+    zoom: control.zoom,
+    over: (at) => {
+      if (state.tool !== 'look') return tool.over(at)
+      const outline = at && pick(at.x, at.y)
+      hover.set(outline ? { kind: 'outline', id: outline } : null)
+    },
+    click: (at) => (state.tool === 'look' ? onPick?.(pick(at.x, at.y)) : tool.click(at)),
+  })
+  const keys = useBoardKeys({ control, viewport, tool: state.tool, dispatch, toolKey: tool.key })
+
+  return (
+    <div className="grid grid-cols-1 border border-hair bg-sheet">
+      <svg
+        ref={svg}
+        {...gestures}
+        {...keys}
+        role="application"
+        aria-label={label}
+        aria-describedby={`${id}-keys`}
+        viewBox={`0 0 ${viewport.width} ${viewport.height}`}
+        className={`block h-[22rem] w-full select-none -outline-offset-2 md:h-[min(68vh,46rem)] ${
+          state.tool === 'look' ? 'touch-pan-y' : 'touch-none cursor-crosshair'
+        }`}
+      >
+        <Metal id={`${id}-metal`} path={model.metal} origin={model.origin} view={view} viewport={viewport} />
+        <Strokes strokes={model.strokes} origin={model.origin} view={view} />
+        <ZoneMarks sheet={sheet} view={view} viewport={viewport} />
+        <AnnotationLayer annotations={base} choices={choices} />
+        <HotLayer {...{ model, hover, frame, base, choices, writing }} shown={state.shown} />
+        {tool.layer}
+        {model.section && <CentroidMark at={model.section.centroid} view={view} />}
+        {state.share && <ShareLayer model={model} axis={state.share} frame={frame} />}
+        <FindingMarks marks={model.marks} view={view} hover={hover} />
+      </svg>
+      <p id={`${id}-keys`} className="sr-only">
+        Arrow keys move the drawing, plus and minus zoom, F fits it, M measures, U places an axis of your own, Escape ends a tool.
+      </p>
+      {tool.readout}
+      <div className="flex flex-wrap items-stretch justify-between border-t border-hair">
+        <Toolbar
+          state={state}
+          dispatch={dispatch}
+          hasSection={model.section !== null}
+          zoom={(factor) => control.zoom({ x: viewport.width / 2, y: viewport.height / 2 }, factor)}
+          fit={control.fit}
+        />
+        {children}
+      </div>
+      <div className="border-t border-line px-3 py-1.5">
+        <Legend model={model} shown={state.shown} names={writing.names} />
+      </div>
+    </div>
+  )
+}

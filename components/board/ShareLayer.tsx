@@ -1,0 +1,3 @@
+export function ShareLayer() {
+  return null
+}

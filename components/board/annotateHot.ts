@@ -1,0 +1,101 @@
+import type { Shows } from '@/lib/section/figures/figure'
+import type { Section } from '@/lib/section/types'
+import { circleWithDiameter } from './angleArc'
+import { beyondOf, isPrincipal, type Shown, type Writing } from './annotate'
+import { type Annotations, emptyAnnotations, merge } from './annotation'
+import { type AxisId, axesOf, fibresOf, plasticAxesOf, shifted } from './axesOf'
+import { drawAxis, type Frame } from './axisLines'
+import { drawDimension, extentDimensions } from './dimensionLines'
+import { toScreen } from './view'
+
+/** The axes that stand out while a figure is pointed at. */
+const HOT_AXES: Partial<Record<Shows, AxisId[]>> = {
+  axisX: ['x'],
+  axisY: ['y'],
+  axesXY: ['x', 'y'],
+  axis1: ['axis1'],
+  axis2: ['axis2'],
+  axes12: ['axis1', 'axis2'],
+}
+const HOT_PLASTIC: Partial<Record<Shows, AxisId>> = { plasticX: 'x', plasticY: 'y', plastic1: 'axis1', plastic2: 'axis2' }
+
+export function hotAxes(section: Section, hot: Shows): AxisId[] {
+  const fibre = fibresOf(section)[hot]
+  return fibre ? [fibre.axis] : (HOT_AXES[hot] ?? [])
+}
+
+const withoutLabels = (part: Annotations): Annotations => ({ ...part, labels: [] })
+
+function axes(section: Section, frame: Frame, hot: Shows, shown: Shown, { names }: Writing): Annotations[] {
+  const all = axesOf(section)
+  return hotAxes(section, hot).flatMap((id) => {
+    const axis = all[id]
+    if (!axis) return []
+    const line = { ...axis, id: `hot-${id}`, look: 'hot', text: names[id], textLook: 'principal' } as const
+    const drawn = drawAxis({ ...line, beyond: beyondOf(id), arrow: isPrincipal(id) }, frame)
+    return [shown.axes ? withoutLabels(drawn) : drawn]
+  })
+}
+
+/** A plastic neutral axis with its distance from the centroid. */
+function plastic(section: Section, frame: Frame, hot: Shows, { names }: Writing): Annotations {
+  const id = HOT_PLASTIC[hot]
+  const axis = id && plasticAxesOf(section)[id]
+  if (!id || !axis) return emptyAnnotations()
+  const text = `plastic ${names[id]}`
+  return drawAxis({ ...axis, id: 'hot-plastic', look: 'hot', text, textLook: 'principal', beyond: 44, arrow: false }, frame)
+}
+
+/** The extreme fibre of a modulus, parallel to its axis, with its distance. */
+function fibre(section: Section, frame: Frame, hot: Shows, { length }: Writing): Annotations {
+  const found = fibresOf(section)[hot]
+  const axis = found && axesOf(section)[found.axis]
+  if (!found || !axis) return emptyAnnotations()
+  const line = shifted(axis, found.offset)
+  return merge([
+    drawAxis({ ...line, id: 'fibre', look: 'fibre', text: 'fibre', textLook: 'principal', beyond: 26, arrow: false }, frame),
+    drawDimension({
+      id: 'fibre-distance',
+      a: toScreen(frame.view, axis.through),
+      b: toScreen(frame.view, line.through),
+      off: 0,
+      text: length(Math.abs(found.offset)),
+      look: 'hot',
+      textLook: 'principal',
+    }),
+  ])
+}
+
+/** The direction of the neutral axis of free plastic bending, drawn through the centroid. */
+function freePlastic(section: Section, frame: Frame, hot: Shows, { names }: Writing): Annotations {
+  if (hot !== 'freePlasticX' && hot !== 'freePlasticY') return emptyAnnotations()
+  const [degrees, about] = hot === 'freePlasticX' ? [section.freePlastic.angleX, names.x] : [section.freePlastic.angleY, names.y]
+  return drawAxis(
+    {
+      id: 'free-plastic',
+      look: 'hot',
+      through: section.centroid,
+      angle: (degrees * Math.PI) / 180,
+      text: `neutral direction, M about ${about}`,
+      textLook: 'principal',
+      beyond: 30,
+      arrow: false,
+    },
+    frame,
+  )
+}
+
+/** What the board draws while a figure is pointed at, over everything else. */
+export function annotateHot(section: Section, frame: Frame, hot: Shows, shown: Shown, writing: Writing): Annotations {
+  const { circle } = section
+  const diameter = `Ø ${writing.length(2 * circle.radius)}`
+  const drawnCircle = circleWithDiameter(frame.view, circle, circle.radius, diameter, 'hot')
+  return merge([
+    ...axes(section, frame, hot, shown, writing),
+    fibre(section, frame, hot, writing),
+    plastic(section, frame, hot, writing),
+    freePlastic(section, frame, hot, writing),
+    hot === 'circle' ? (shown.circle ? withoutLabels(drawnCircle) : drawnCircle) : emptyAnnotations(),
+    ...(hot === 'extents' && !shown.dimensions ? extentDimensions(frame, writing.length) : []),
+  ])
+}
