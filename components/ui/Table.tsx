@@ -6,6 +6,10 @@ export interface Column<Row> {
   key: string
   head: ReactNode
   cell: (row: Row) => ReactNode
+  /** the same as it stands in an export; absent where there is nothing to export */
+  plain?: (row: Row) => string | number | null
+  /** the head of the export's column, with its unit */
+  plainHead?: string
   /** the name the list is sorted by in the URL; absent where it cannot be sorted */
   sort?: string
   /** figures stand at the right, in the mono face */

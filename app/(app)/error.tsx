@@ -1,0 +1,4 @@
+'use client'
+import { Fault } from '@/components/shell/Fault'
+
+export default Fault

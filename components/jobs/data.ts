@@ -1,0 +1,59 @@
+'use client'
+import useSWR from 'swr'
+import { getJson, refresh, sendJson } from '@/lib/api/client'
+import { keys } from '@/lib/api/keys'
+import { page } from '@/lib/api/schemas/common'
+import { Job, type JobChange, type JobFields } from '@/lib/api/schemas/job'
+import { Profile, type ProfileChange, type ProfileFields } from '@/lib/api/schemas/profile'
+
+export const JOBS = keys.jobs()
+export const PROFILES = keys.profiles()
+const Jobs = page(Job)
+const Profiles = page(Profile)
+
+export const useJobs = (path: string) => useSWR(path, getJson(Jobs), { keepPreviousData: true })
+export const useJob = (id: string) => useSWR(keys.job(id), getJson(Job))
+export const useProfiles = (path: string) => useSWR(path, getJson(Profiles), { keepPreviousData: true })
+
+/** Every row of a list, page after page. */
+async function everything<T>(
+  api: string,
+  query: URLSearchParams,
+  read: (path: string) => Promise<{ items: T[]; next: string | null }>,
+) {
+  const rows: T[] = []
+  const asking = new URLSearchParams(query)
+  asking.set('limit', '200')
+  asking.delete('cursor')
+  for (;;) {
+    const { items, next } = await read(`${api}?${asking.toString()}`)
+    rows.push(...items)
+    if (next === null) return rows
+    asking.set('cursor', next)
+  }
+}
+export const allJobs = (query: URLSearchParams) => everything(JOBS, query, getJson(Jobs))
+export const allProfiles = (query: URLSearchParams) => everything(PROFILES, query, getJson(Profiles))
+
+interface Seen {
+  id: string
+  version: number
+}
+const lists = () => Promise.all([refresh(JOBS), refresh(PROFILES)])
+
+async function then<T>(written: Promise<T>): Promise<T> {
+  const row = await written
+  await lists()
+  return row
+}
+export const openJob = (fields: JobFields) => then(sendJson('POST', JOBS, Job, { body: fields }))
+export const changeJob = ({ id, version }: Seen, change: JobChange) =>
+  then(sendJson('PATCH', keys.job(id), Job, { body: change, version }))
+export const binJob = ({ id, version }: Seen) => then(sendJson('DELETE', keys.job(id), Job, { version }))
+export const restoreJob = (id: string) => then(sendJson('POST', keys.restoreJob(id), Job))
+
+export const addProfile = (fields: ProfileFields) => then(sendJson('POST', PROFILES, Profile, { body: fields }))
+export const changeProfile = ({ id, version }: Seen, change: ProfileChange) =>
+  then(sendJson('PATCH', keys.profile(id), Profile, { body: change, version }))
+export const binProfile = ({ id, version }: Seen) => then(sendJson('DELETE', keys.profile(id), Profile, { version }))
+export const restoreProfile = (id: string) => then(sendJson('POST', keys.restoreProfile(id), Profile))
