@@ -6,6 +6,9 @@ import { migrateFile } from '@/db/migrate'
 import { isSetUp } from '@/db/teams'
 import { isCodeAsked, setupCode } from './auth/setupCode'
 import { config } from './config'
+import { recover } from './jobs/recovery'
+import { sectionPool } from './jobs/server-pool'
+import { keepSweeping, sweep } from './jobs/sweep'
 import { log } from './log'
 
 function prepareDataDir(dataDir: string, incomingDir: string): void {
@@ -13,6 +16,12 @@ function prepareDataDir(dataDir: string, incomingDir: string): void {
   chmodSync(dataDir, 0o700)
   const secret = path.join(dataDir, 'secret')
   if (!existsSync(secret)) writeFileSync(secret, randomBytes(32).toString('base64url'), { flag: 'wx', mode: 0o600 })
+}
+
+function startPool(): void {
+  const { computeSeconds, computeMemoryMb, computeChildren } = config()
+  const size = computeChildren === undefined ? {} : { size: computeChildren }
+  sectionPool({ seconds: computeSeconds, memoryBytes: computeMemoryMb * 1024 ** 2, ...size }).warm()
 }
 
 /** Everything before the first request: folder, secret, migrations, the open database, unfinished work. */
@@ -23,6 +32,10 @@ export async function startup(): Promise<void> {
   const { applied, backup } = await migrateFile(databaseFile)
   if (applied.length > 0) log().info({ applied, backup }, 'migrated')
   openProcessDatabase(databaseFile, maxPages)
+  startPool()
+  await sweep()
+  keepSweeping()
+  recover().catch((error: unknown) => log().error({ error: String(error) }, 'recovery failed'))
   if (isCodeAsked() && !(await isSetUp(database().read))) {
     process.stdout.write(`\nThis server is not set up yet. Its one-time code: ${setupCode()}\n\n`)
   }

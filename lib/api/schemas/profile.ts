@@ -17,7 +17,7 @@ export const ProfileFields = z.strictObject({
 export const ProfileChange = z.strictObject(fields).partial()
 
 /** The figures a list shows and sorts by: those of the newest revision, null before there is one. */
-const Figures = z.object({
+export const ProfileFigures = z.object({
   area: z.number(),
   mass: z.number().nullable(),
   ix: z.number(),
@@ -25,6 +25,7 @@ const Figures = z.object({
   i1: z.number(),
   i2: z.number(),
   theta: z.number().nullable(),
+  /** diameter of the circumscribing circle, mm */
   circle: z.number(),
 })
 export const Profile = z.object({
@@ -35,7 +36,7 @@ export const Profile = z.object({
   job: z.object({ id: Id, number: z.string(), title: z.string() }),
   material: z.object({ id: Id, name: z.string() }).nullable(),
   owner: z.object({ id: Id, name: z.string() }),
-  latest: z.object({ id: Id, letter: z.string(), state: z.string(), createdAt: Timestamp, figures: Figures }).nullable(),
+  latest: z.object({ id: Id, letter: z.string(), state: z.string(), createdAt: Timestamp, figures: ProfileFigures }).nullable(),
   revisions: z.int(),
   createdAt: Timestamp,
   updatedAt: Timestamp,
