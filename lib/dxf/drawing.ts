@@ -7,11 +7,18 @@ export interface Layer {
   frozen: boolean
   plots: boolean
   lineType: string
-  /** drawn entities on it, in the space that the recipe takes */
+  /** entities on it in model space that gave edges, hatches not counted */
   entities: number
 }
 
-/** A DXF entity that gave edges (after blocks were opened up: one per placed entity). Columns, one row an entity. */
+/** `EntityColumns.flags`: 60 = 1 on the entity or on an insert around it. */
+export const INVISIBLE = 1
+/** `EntityColumns.flags`: the boundary of a hatch. */
+export const HATCH_BOUNDARY = 2
+/** `EntityColumns.flags`: placed by an insert on a frozen layer, which hides all it places. */
+export const FROZEN_INSERT = 4
+
+/** DXF entities (after blocks were opened up: one per placed entity). Columns, one row an entity. */
 export interface EntityColumns {
   count: number
   /** index into `Drawing.kinds` */
@@ -28,8 +35,10 @@ export interface EntityColumns {
   insert: Uint32Array
   /** 1 where the entity closes on itself (CIRCLE, closed polyline, full ellipse, closed spline) */
   closed: Uint8Array
-  /** 1 where invisible (60), 2 where it is a hatch boundary */
+  /** INVISIBLE, HATCH_BOUNDARY, FROZEN_INSERT */
   flags: Uint8Array
+  /** index into `Drawing.remarks` + 1: what there is to say about this entity; 0 for nothing */
+  remark: Uint32Array
 }
 
 /** A DIMENSION entity: evidence of a size. Places in world coordinates, drawing units. */
@@ -52,6 +61,7 @@ export interface DrawnDimension {
 
 /** What was read from the file. */
 export interface Drawing {
+  /** $ACADVER, '' where the file does not say */
   acadVersion: string
   /** 'none' or the unit's name as $INSUNITS says it: 'mm', 'in', … */
   declared: string
@@ -65,13 +75,21 @@ export interface Drawing {
   kinds: string[]
   entities: EntityColumns
   edges: EdgeTable
-  /** entities read and entities not turned into edges, by kind, whole file (model space and layouts) */
+  /** entities read and entities not turned into edges, by kind, whole file, blocks opened up (model space and layouts) */
   read: Record<string, number>
   ignored: Record<string, number>
   dimensions: DrawnDimension[]
-  /** half of the last written digit of the coordinates, drawing units (median over coordinates); 0 if exact */
+  /** half of the last written digit of the coordinates, drawing units; 0 if exact */
   lastDigit: number
+  /** what concerns the file as a whole; with an error among them there is no section */
   findings: Finding[]
+  /** how many there are; `findings` lists 2,000 of one code */
+  findingsTotal: number
+  /**
+   * What concerns single entities: rows point here, and `selectEdges` reports the remarks of the rows it
+   * takes, so that a fault on a layer nobody wants blocks nothing.
+   */
+  remarks: Finding[][]
 }
 
 /** Limits on one file; the figures are named in the finding that a breach gives. */

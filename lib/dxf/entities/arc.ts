@@ -1,0 +1,70 @@
+import { pushArc } from '../../geometry/edges'
+import { cosDegrees, sinDegrees } from '../affine'
+import { ARC_KIND, CIRCLE_KIND } from '../kinds'
+import type { Reading } from '../reading'
+import { slots } from '../record'
+
+const CIRCLE = slots([10, 20, 40], [30])
+const ARC = slots([10, 20, 40, 50, 51], [30])
+const RADIANS = Math.PI / 180
+
+/** CIRCLE: centre and radius in the entity's own plane. */
+export function readCircle(reading: Reading) {
+  if (!reading.takeInPlane(CIRCLE_KIND, CIRCLE)) return
+  const { record, facing } = reading
+  const [x, y, radius] = record.values
+  if (!(radius > 0)) return reading.refuse(CIRCLE_KIND, 'radius-bad', { radius })
+  const cx = facing * x
+  const row = reading.begin(CIRCLE_KIND)
+  reading.height(facing * record.slot(3, 0))
+  reading.sheet.entities.closed[row] = 1
+  pushArc(reading.sheet.edges, cx + radius, y, cx + radius, y, cx, y, radius, 0, 2 * Math.PI, row)
+}
+
+/** Sweep in degrees, in (0, 360], from start to end counter-clockwise; 0 where they are the same angle. */
+export function sweepDegrees(start: number, end: number): number {
+  const turn = (end - start) % 360
+  if (turn === 0) return start === end ? 0 : 360
+  return turn < 0 ? turn + 360 : turn
+}
+
+/** ARC: centre, radius and angles in degrees, counter-clockwise in the entity's own plane. */
+export function readArc(reading: Reading) {
+  if (!reading.takeInPlane(ARC_KIND, ARC)) return
+  const { record, facing } = reading
+  const [x, y, radius, start, end] = record.values
+  if (!(radius > 0)) return reading.refuse(ARC_KIND, 'radius-bad', { radius })
+  const sweep = sweepDegrees(start, end)
+  if (sweep === 0) return reading.refuse(ARC_KIND, 'arc-without-sweep')
+  const row = reading.begin(ARC_KIND)
+  reading.height(facing * record.slot(5, 0))
+  if (sweep === 360) reading.sheet.entities.closed[row] = 1
+  pushArcDegrees(reading, facing * x, y, radius, facing === 1 ? start : 180 - start, facing * sweep, row)
+}
+
+/** Appends a circular arc given in degrees; sweep < 0 is clockwise. */
+export function pushArcDegrees(
+  reading: Reading,
+  x: number,
+  y: number,
+  radius: number,
+  start: number,
+  sweep: number,
+  row: number,
+): void {
+  const whole = Math.abs(sweep) === 360
+  const end = whole ? start : start + sweep
+  pushArc(
+    reading.sheet.edges,
+    x + radius * cosDegrees(start),
+    y + radius * sinDegrees(start),
+    x + radius * cosDegrees(end),
+    y + radius * sinDegrees(end),
+    x,
+    y,
+    radius,
+    (start % 360) * RADIANS,
+    sweep * RADIANS,
+    row,
+  )
+}
