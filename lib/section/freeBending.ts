@@ -51,4 +51,4 @@ export function freeBending(vectorAt: PlasticVector, turn: 0 | -90, guess: numbe
   return { modulus: turn === 0 ? y : x, angle: inHalf(angle + turn) }
 }
 
-const inHalf = (angle: number): number => (angle <= -90 ? angle + 180 : angle)
+const inHalf = (angle: number): number => (angle <= -90 + 1e-9 ? Math.min(90, angle + 180) : angle)

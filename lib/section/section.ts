@@ -103,7 +103,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
       angleX: freeX.angle,
       angleY: freeY.angle,
       restrainedMyForX: across.x,
-      restrainedMxForY: -across.y,
+      restrainedMxForY: 0 - across.y,
     },
     circle: circumscribingCircle(edges, whole),
     ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
