@@ -9,6 +9,10 @@ const POWERS = Float64Array.from({ length: 23 }, (_, k) => Number(`1e${k}`))
 export class NumberReader {
   /** decimal places written, the exponent counted in */
   decimals = 0
+  /** significant digits written, trailing zeros counted */
+  significant = 0
+  /** two decimals or more, the last one a 0 */
+  padded = false
 
   read(bytes: Uint8Array, from: number, to: number): number {
     let i = from
@@ -55,6 +59,8 @@ export class NumberReader {
     }
     if (i < end) return Number.NaN
     this.decimals = Math.max(0, places - exponent)
+    this.significant = significant
+    this.padded = places >= 2 && bytes[i - 1] === 48 && exponent === 0 && mantissa > 0
     const power = exponent - places
     if (significant <= 16 && mantissa <= Number.MAX_SAFE_INTEGER && power >= -22 && power <= 22) {
       const value = power < 0 ? mantissa / POWERS[-power] : mantissa * POWERS[power]

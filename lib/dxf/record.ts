@@ -2,7 +2,7 @@ import type { DxfCode } from './findings'
 import type { GroupCursor } from './groups'
 import type { Names } from './names'
 import { NumberReader } from './number'
-import { MOST_DECIMALS } from './lastDigit'
+import { FULL_PRECISION, MOST_DECIMALS, noDigits } from './lastDigit'
 
 const CODES = 1072
 /** Coordinates beyond this are refused: their fourth powers no longer fit beside each other in a sum. */
@@ -45,8 +45,7 @@ export class GroupRecord {
   fault: RecordFault = 'number-bad'
   faultCode = 0
   faultGroup = -1
-  /** how many coordinates were written with how many decimals */
-  readonly decimals = new Uint32Array(MOST_DECIMALS + 1)
+  readonly digits = noDigits()
   private readonly numbers = new NumberReader()
 
   constructor(
@@ -88,7 +87,12 @@ export class GroupRecord {
     if (Number.isNaN(value)) return this.failed('number-bad', g)
     if (value > LARGEST_NUMBER || value < -LARGEST_NUMBER) return this.failed('number-large', g)
     const code = this.code[g]
-    if (code < 29 && code > 9) this.decimals[Math.min(MOST_DECIMALS, this.numbers.decimals)]++
+    const { significant, decimals, padded } = this.numbers
+    if (significant >= FULL_PRECISION) this.digits.full++
+    if (code < 29 && code > 9) {
+      this.digits.decimals[Math.min(MOST_DECIMALS, decimals)]++
+      if (padded) this.digits.padded++
+    }
     return value
   }
 
