@@ -28,11 +28,13 @@ export interface AnswerParts {
   drawing: Drawing
   outlines: OutlineSet | null
   findings: Finding[]
+  /** where more were found than are listed */
+  findingsTotal: number
   section: Section | null
 }
 
 /** The answer as API, command line and screens show it. */
-export function answerOf({ source, recipe, drawing, outlines, findings, section }: AnswerParts): SectionAnswer {
+export function answerOf({ source, recipe, drawing, outlines, findings, findingsTotal, section }: AnswerParts): SectionAnswer {
   return {
     engineVersion: ENGINE_VERSION,
     source,
@@ -41,7 +43,7 @@ export function answerOf({ source, recipe, drawing, outlines, findings, section 
     outlines: outlines ? outlineViews(outlines, drawing) : [],
     outlinesTotal: outlines?.count ?? 0,
     findings: listed(findings),
-    findingsTotal: findings.length,
+    findingsTotal,
     section,
   }
 }

@@ -1,5 +1,6 @@
+import { buffersOf, previewOf } from './preview'
 import type { PreviewReply, PreviewRequest } from './previewProtocol'
-import { createTask, previewOf, type SectionTask, tablesOf } from './tasks'
+import { createTask, readTask, type SectionTask } from './tasks'
 
 const page = self as DedicatedWorkerGlobalScope
 const send = (reply: PreviewReply, moved: Transferable[] = []) => page.postMessage(reply, moved)
@@ -14,7 +15,7 @@ async function opened(seq: number, { blob, name }: { blob: Blob; name: string })
   send({ seq, stage: 'read', result: null })
   const bytes = new Uint8Array(await blob.arrayBuffer())
   // no secure context over plain http: the server takes the hash
-  return createTask(bytes, { name, bytes: bytes.length, sha256: '' })
+  return createTask(readTask(bytes), { name, bytes: bytes.length, sha256: '' })
 }
 
 /** Works on the newest recipe only: those that came meanwhile replace each other. */
@@ -26,7 +27,7 @@ async function work(): Promise<void> {
   try {
     task ??= await opened(seq, file)
     const result = previewOf(task, recipe, materials, (stage) => send({ seq, stage, result: null }))
-    send({ seq, stage: 'done', result }, tablesOf(result))
+    send({ seq, stage: 'done', result }, buffersOf(result))
   } catch (error) {
     send({ seq, stage: 'failed', result: { message: error instanceof Error ? error.message : String(error) } })
   }

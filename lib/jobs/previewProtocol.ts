@@ -1,4 +1,5 @@
 import type { Drawing } from '../dxf/drawing'
+import type { Tally } from '../dxf/select'
 import type { OutlineSet } from '../geometry/outlineSet'
 import type { Does, Recipe } from '../geometry/recipe'
 import type { Region } from '../geometry/region'
@@ -9,11 +10,10 @@ import type { UsedMaterial } from './answer'
 export type Stage = 'read' | 'chain' | 'combine' | 'figures'
 
 /** The drawing without its long columns, with counts for the lists a person chooses from. */
-export interface DrawingView extends Omit<Drawing, 'edges' | 'entities'> {
+export interface DrawingView extends Omit<Drawing, 'edges' | 'entities' | 'remarks'> {
   entities: number
-  /** placed entities of each line type and each space, in the order of `lineTypes` and `spaces` */
-  lineTypeEntities: number[]
-  spaceEntities: number[]
+  /** entities that gave edges, as this recipe takes or leaves them */
+  tallies: { layers: Tally[]; lineTypes: Tally[]; kinds: Tally[]; spaces: Tally[] }
 }
 
 /** What an outline does in the make-up; null where a person must still say it. */
@@ -23,8 +23,8 @@ export type Role = Does | null
 export interface PreviewResult {
   answer: SectionAnswer
   drawing: DrawingView
-  /** drawing units, before the recipe's turn; null where the reader found nothing to chain */
-  outlines: OutlineSet | null
+  /** drawing units, before the recipe's turn */
+  outlines: OutlineSet
   roles: Role[]
   /** mm, turned: the frame of the figures; null without a section */
   region: Region | null

@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs'
-import { pack } from '../geometry/pack'
+import { packRegion } from '../geometry/pack'
 import { askOthers } from '../opinions/askOthers'
 import { withFindings } from './answer'
 import { taskFinding } from './findings'
@@ -18,7 +18,7 @@ const work: Work = ({ path, source, recipe, materials, unconfirmedBy }: SectionJ
   const { answer, region, combination } = sectionTask(drawing, source, recipe, materials)
   const unconfirmed = unconfirmedBy ? [taskFinding('unit-unconfirmed', { by: unconfirmedBy, unit: recipe.unit })] : []
   return {
-    answer: { answer: withFindings(answer, unconfirmed), region: region && pack(region) },
+    answer: { answer: withFindings(answer, unconfirmed), region: region && packRegion(region) },
     opinions() {
       const opinions = askOthers(bytes, drawing, combination)
       const findings = opinions

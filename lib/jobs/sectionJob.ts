@@ -31,9 +31,9 @@ export interface JobRequest {
   memoryBytes: number
 }
 
-/** From child to parent: the section first, the second opinions after. `region` is packed (lib/geometry/pack). */
+/** From child to parent: the section first, the second opinions after. `region` is packed (`packRegion`). */
 export type JobReply =
-  | { id: number; stage: 'answer'; answer: SectionAnswer; region: Uint8Array<ArrayBuffer> | null }
+  | { id: number; stage: 'answer'; answer: SectionAnswer; region: Uint8Array | null }
   | { id: number; stage: 'opinions'; opinions: Opinions }
   | { id: number; stage: 'unreadable'; message: string }
 
@@ -47,7 +47,7 @@ export type JobResult =
   | {
       ok: true
       answer: SectionAnswer
-      region: Uint8Array<ArrayBuffer> | null
+      region: Uint8Array | null
       /** settles later and never rejects; null where they took too long or their process died */
       opinions: Promise<Opinions | null>
     }

@@ -35,7 +35,7 @@ export function conic(
 ): Curve {
   if (isTurn(sweep)) {
     const [x, y] = map(at, ...c)
-    const axes = [u, v].map(([dx, dy]) => [at[0] * dx + at[2] * dy, at[1] * dx + at[3] * dy]).flat()
+    const axes = [u, v].flatMap(([dx, dy]) => [at[0] * dx + at[2] * dy, at[1] * dx + at[3] * dy])
     return [x + Math.hypot(...axes), y, x, y, x + Math.hypot(...axes), y]
   }
   const point = (t: number) =>

@@ -1,0 +1,82 @@
+import type { Drawing, ReadLimits } from '../dxf/drawing'
+import { readDrawing } from '../dxf/read'
+import type { Tally } from '../dxf/select'
+import type { OutlineSet } from '../geometry/outlineSet'
+import type { Recipe } from '../geometry/recipe'
+import type { Region } from '../geometry/region'
+import type { Combination } from '../opinions/combination'
+import type { SectionAnswer } from '../section/types'
+import { answerOf, type Source, type UsedMaterial } from './answer'
+import { memo } from './memo'
+import type { Role, Stage } from './previewProtocol'
+import { chainStep, combineStep, figuresStep, keysOf, sayings } from './steps'
+
+export interface TaskResult {
+  answer: SectionAnswer
+  drawing: Drawing
+  /** entities by layer, line type, kind and space, as the recipe takes or leaves them */
+  tallies: { layers: Tally[]; lineTypes: Tally[]; kinds: Tally[]; spaces: Tally[] }
+  /** drawing units, before the recipe's turn */
+  outlines: OutlineSet
+  roles: Role[]
+  /** mm, turned; null without a section */
+  region: Region | null
+  /** the question to be put to other libraries; null without a section */
+  combination: Combination | null
+}
+
+type Materials = Record<string, UsedMaterial>
+
+/** One drawing, answered for one recipe after another; only what a change of the recipe touches is done again. */
+export interface SectionTask {
+  drawing: Drawing
+  run: (recipe: Recipe, materials: Materials, onStage?: (stage: Stage) => void) => TaskResult
+}
+
+/** Bytes to drawing. */
+export const readTask = (bytes: Uint8Array, limits?: ReadLimits): Drawing => readDrawing(bytes, limits)
+
+/** Drawing and recipe to section, once. */
+export const sectionTask = (drawing: Drawing, source: Source, recipe: Recipe, materials: Materials): TaskResult =>
+  createTask(drawing, source).run(recipe, materials)
+
+export function createTask(drawing: Drawing, source: Source): SectionTask {
+  const chained = memo(chainStep)
+  const combined = memo(combineStep)
+  const figures = memo(figuresStep)
+  return {
+    drawing,
+    run(recipe, materials, onStage = () => {}) {
+      const keys = keysOf(recipe, materials)
+      onStage('chain')
+      const chain = chained(keys.chain, drawing, recipe)
+      onStage('combine')
+      const combine = combined(keys.combine, chain, recipe)
+      onStage('figures')
+      const { section, region, findings } = figures(keys.figures, drawing, chain, combine, recipe, materials)
+      const { selection, outlines } = chain
+      const said = [...drawing.findings, ...selection.findings, ...outlines.findings, ...combine.findings, ...findings]
+      const all = [...said, ...sayings(drawing, outlines, recipe, section)]
+      const isBlocked = all.some(({ severity }) => severity === 'error')
+      const unlisted = drawing.findingsTotal - drawing.findings.length + selection.findingsTotal - selection.findings.length
+      const { layers, lineTypes, kinds, spaces } = selection
+      return {
+        answer: answerOf({
+          source,
+          recipe,
+          drawing,
+          outlines,
+          findings: all,
+          findingsTotal: all.length + unlisted,
+          section: isBlocked ? null : section,
+        }),
+        drawing,
+        tallies: { layers, lineTypes, kinds, spaces },
+        outlines,
+        roles: combine.roles,
+        region: isBlocked ? null : region,
+        combination: isBlocked || !combine.metal ? null : combine.combination,
+      }
+    },
+  }
+}

@@ -1,0 +1,3 @@
+import { readFileSync } from 'node:fs'
+import { selectEdges } from '@/lib/dxf/select'
+import { outlinesOf } from '@/lib/geometry/outlines'

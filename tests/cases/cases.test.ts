@@ -1,0 +1,59 @@
+import { createHash } from 'node:crypto'
+import { describe, expect, it } from 'vitest'
+import { DEFAULT_RECIPE, type Recipe } from '@/lib/geometry/recipe'
+import { readTask, sectionTask, type TaskResult } from '@/lib/jobs/tasks'
+import { deviations } from './deviations'
+import { caseBytes, type Reference, references } from './reference'
+
+function compute({ file, unit, tolerance, makeUp, layers }: Reference, change: Partial<Recipe> = {}): TaskResult {
+  const bytes = caseBytes(file)
+  const sha256 = createHash('sha256').update(bytes).digest('hex')
+  const recipe = { ...DEFAULT_RECIPE, unit: unit.drawing, tolerance, makeUp, layers: layers ?? null, ...change }
+  return sectionTask(readTask(bytes), { name: file, bytes: bytes.length, sha256 }, recipe, {})
+}
+
+const all = references()
+const named = (file: string): Reference => {
+  const found = all.find((reference) => reference.file === file)
+  if (!found) throw new Error(`${file} is not in fixtures/cases`)
+  return found
+}
+
+describe('drawings with reference values, every figure within its accepted error', () => {
+  it.each(all.map((reference) => [`${reference.file}: ${reference.title}`, reference] as const))('%s', (_, reference) => {
+    const { answer } = compute(reference)
+    if (!answer.section) throw new Error(answer.findings.map(({ message }) => message).join('\n'))
+    expect(deviations(answer.section, reference.expected_mm, reference.accept_rel)).toEqual([])
+    expect(answer.section.pieces).toBe(reference.pieces)
+    expect(answer.unit).toEqual({
+      drawing: reference.unit.drawing,
+      mmPerUnit: reference.unit.mmPerUnit,
+      declared: reference.unit.declared,
+    })
+  })
+
+  const variants = all.flatMap((reference) => (reference.variants ?? []).map((variant) => [reference, variant] as const))
+  it.each(variants)('$file read with a tolerance of $tolerance mm', (reference, { tolerance, makeUp, expected_mm }) => {
+    const { section } = compute(reference, { tolerance, makeUp }).answer
+    expect(section && deviations(section, expected_mm, reference.accept_rel)).toEqual([])
+  })
+})
+
+describe('what the drawings must be told about', () => {
+  const codesOf = (file: string) => compute(named(file)).answer.findings.map(({ code }) => code)
+
+  it('p21: layers off and frozen, paper space, kinds without edges, two open centre lines, two pieces', () => {
+    expect(codesOf('p21.dxf')).toEqual(expect.arrayContaining(['pieces-not-joined']))
+  })
+
+  it('p22: two gaps of 0.004 mm closed near (70, 21.302) and (33, 40), and one chain open near (105, 40)', () => {
+    const { findings } = compute(named('p22.dxf')).answer
+    const at = (code: string) => findings.filter((finding) => finding.code === code).map((finding) => finding.at)
+    expect(at('gap-closed')).toHaveLength(2)
+    expect(at('chain-open')).toHaveLength(1)
+  })
+
+  it('p23: doubled and overlapping lines and arcs, and a circle drawn twice, are counted once', () => {
+    expect(codesOf('p23.dxf')).toEqual(expect.arrayContaining(['edges-doubled']))
+  })
+})
