@@ -41,7 +41,7 @@ export function tableOf({ source, unit, outlinesTotal, findings, findingsTotal, 
 
 function rowsOf(group: FigureGroup, section: Section): string[] {
   const shown = FIGURES.filter((figure) => figure.group === group && figure.value(section) !== undefined)
-  const rows = shown.map((figure) => [symbolOf(figure), valueOf(figure, section), UNIT[figure.dimension], figure.word])
+  const rows = shown.map((figure) => [symbolOf(figure), shownValue(figure, section), UNIT[figure.dimension], figure.word])
   const widths = [0, 1, 2].map((column) => Math.max(0, ...rows.map((row) => row[column].length)))
   return rows.map(([symbol, value, unit, word]) =>
     `  ${symbol.padEnd(widths[0])}  ${value.padStart(widths[1])} ${unit.padEnd(widths[2])}  ${word}`.trimEnd(),
@@ -50,7 +50,7 @@ function rowsOf(group: FigureGroup, section: Section): string[] {
 
 const symbolOf = ({ symbol: { en } }: Figure) => en.base + (en.sub ? `_${en.sub}` : '')
 
-function valueOf(figure: Figure, section: Section): string {
+function shownValue(figure: Figure, section: Section): string {
   const value = figure.value(section)
   return value === null || value === undefined ? '-' : digits(value)
 }

@@ -40,7 +40,10 @@ export function dxfParserOpinion(bytes: Uint8Array, drawing: Drawing): Opinion {
   const isLong = ([ax, ay, mx, my]: Curve) => Math.hypot(ax - mx, ay - my) > tolerance
   const left = unmatched(ours.filter(isLong), theirs.filter(isLong), tolerance)
   if (left.ours.length + left.theirs.length === 0) {
-    return { library, agrees: true, sentence: `Read again: ${ours.length} edges agree in kind, number and coordinates.` }
+    const others = otherKinds(drawing)
+    if (ours.length === 0) return notAsked(`it does not read ${others.join(', ') || 'anything in this file'}`)
+    const beside = others.length > 0 ? ` (${others.join(', ')} not compared)` : ''
+    return { library, agrees: true, sentence: `Read again: ${ours.length} edges agree in kind, number and coordinates${beside}.` }
   }
   const [x, y] = [...left.ours, ...left.theirs][0]
   const sentence = `Read again, ${left.ours.length} of ${ours.length} edges are not found there and ${left.theirs.length} others are, the first near (${digits(x)}, ${digits(y)}).`
@@ -56,6 +59,16 @@ function curvesOf({ edges, entities, kinds }: Drawing): Curve[] {
     if (curve) curves.push(curve)
   }
   return curves
+}
+
+/** Kinds in model space that gave edges and that the library is not asked about. */
+function otherKinds({ edges, entities, kinds }: Drawing): string[] {
+  const found = new Set<string>()
+  for (let i = 0; i < edges.count; i++) {
+    const entity = edges.source[i]
+    if (entities.space[entity] === 0) found.add(kinds[entities.kind[entity]])
+  }
+  return [...found].filter((kind) => !SAFE_KINDS.has(kind))
 }
 
 function pushCurves(curves: Curve[], entity: IEntity, at: Affine, blocks: Record<string, IBlock>, nesting: number): void {
