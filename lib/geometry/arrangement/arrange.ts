@@ -155,8 +155,10 @@ function sorted(pieces: Pieces, onPiece: number[], atT: number[], atVertex: numb
     const own = order.subarray(start[i], start[i + 1])
     if (own.length > 2) own.sort((a, b) => forward * (atT[a] - atT[b]) || a - b)
     own.forEach((n, k) => {
-      t[start[i] + k] = atT[n]
-      vertex[start[i] + k] = atVertex[n]
+      const at = start[i] + k
+      t[at] = atT[n]
+      vertex[at] = atVertex[n]
+      if (k > 0 && vertex[at - 1] === vertex[at]) t[at] = t[at - 1] = n < own[k - 1] ? atT[n] : t[at - 1]
     })
   }
   return { start, t, vertex }

@@ -31,7 +31,7 @@ interface Stretch {
  */
 export function meetBySubdivision(pieces: Pieces, i: number, j: number, tolerance: number, meet: Meet): void {
   const { table, edge, t0, t1, ends } = pieces
-  const touching: [number, number, number][] = []
+  const touching: [number, number][] = []
   const crossings: number[] = []
   const whole = (n: number) =>
     stretch(pieces, n, t0[n], t1[n], ends[4 * n], ends[4 * n + 1], ends[4 * n + 2], ends[4 * n + 3])
@@ -44,29 +44,26 @@ export function meetBySubdivision(pieces: Pieces, i: number, j: number, toleranc
     const lb = Math.hypot(b.x1 - b.x0, b.y1 - b.y0)
     const angle = Math.abs(between(a, b, la, lb))
     const transversal = angle > 1.5 * (a.turn + b.turn) && a.turn + b.turn < STRAIGHT
-    if (transversal && angle > 1e-7) {
-      const found = newton(pieces, i, j, a, b)
-      if (found && inside(found[0], t0[i], t1[i]) && inside(found[1], t0[j], t1[j])) {
-        if (!crossings.some((t) => Math.abs(t - found[0]) <= 1e-12 * Math.abs(t1[i] - t0[i]))) {
-          crossings.push(found[0])
-          pointAt(table, edge[i], found[0], p)
-          meet(i, found[0], j, found[1], p[0], p[1])
-        }
+    const found = transversal && angle > 1e-7 ? newton(pieces, i, j, a, b, tolerance / 16) : 'unsure'
+    if (found === 'outside') continue
+    if (found !== 'unsure') {
+      const [s, t] = found
+      const known = crossings.some((other) => Math.abs(other - s) <= 1e-12 * Math.abs(t1[i] - t0[i]))
+      if (!known && inside(s, t0[i], t1[i]) && inside(t, t0[j], t1[j])) {
+        crossings.push(s)
+        pointAt(table, edge[i], s, p)
+        meet(i, s, j, t, p[0], p[1])
       }
       continue
     }
     if ((a.bow + b.bow <= tolerance && close(a, b, tolerance)) || la + lb <= tolerance) {
-      const t = (a.t0 + a.t1) / 2
-      pointAt(table, edge[i], t, p)
-      const [x, y] = p
-      footOn(pieces, j, x, y, q)
-      touching.push([t, Math.hypot(q[0] - x, q[1] - y), Math.abs(a.t1 - a.t0)])
+      touching.push([Math.min(a.t0, a.t1), Math.max(a.t0, a.t1)])
       continue
     }
     if (la >= lb) for (const half of halves(pieces, i, a)) stack.push([half, b])
     else for (const half of halves(pieces, j, b)) stack.push([a, half])
   }
-  for (const t of nearestOfRuns(touching)) {
+  for (const t of nearestOfRuns(pieces, i, j, touching)) {
     pointAt(table, edge[i], t, p)
     const { 0: x, 1: y } = p
     const tj = footOn(pieces, j, x, y, q)
@@ -133,9 +130,9 @@ function between(a: Stretch, b: Stretch, la: number, lb: number): number {
   return Math.atan2(dot < 0 ? -cross : cross, Math.abs(dot))
 }
 
-/** The crossing of two nearly straight stretches, or null where it lies outside either. */
-function newton(pieces: Pieces, i: number, j: number, a: Stretch, b: Stretch): [number, number] | null {
-  const { table, edge } = pieces
+/** The crossing of two nearly straight stretches, or that it lies outside one of them, or that Newton did not settle. */
+function newton(n: Pieces, i: number, j: number, a: Stretch, b: Stretch, near: number): [number, number] | 'outside' | 'unsure' {
+  const { table, edge } = n
   let s = (a.t0 + a.t1) / 2
   let t = (b.t0 + b.t1) / 2
   let last = Number.POSITIVE_INFINITY
@@ -145,37 +142,60 @@ function newton(pieces: Pieces, i: number, j: number, a: Stretch, b: Stretch): [
     const dx = q[0] - p[0]
     const dy = q[1] - p[1]
     const det = q[2] * p[3] - p[2] * q[3]
-    if (det === 0) return null
     const ds = (q[2] * dy - q[3] * dx) / det
     const dt = (p[2] * dy - p[3] * dx) / det
+    const step = Math.abs(ds / (a.t1 - a.t0)) + Math.abs(dt / (b.t1 - b.t0))
+    if (!(step < 8)) return 'unsure'
     s += ds
     t += dt
-    const step = Math.abs(ds / (a.t1 - a.t0)) + Math.abs(dt / (b.t1 - b.t0))
-    if (!(step < 8)) return null
     if (step < 1e-15 || (step < 1e-10 && step >= last)) break
     last = step
   }
+  pointAt(table, edge[i], s, p)
+  pointAt(table, edge[j], t, q)
+  if (!(Math.hypot(p[0] - q[0], p[1] - q[1]) <= near)) return 'unsure'
   const margin = 1e-9
   const u = (s - a.t0) / (a.t1 - a.t0)
   const v = (t - b.t0) / (b.t1 - b.t0)
-  return u >= -margin && u <= 1 + margin && v >= -margin && v <= 1 + margin ? [s, t] : null
+  return u >= -margin && u <= 1 + margin && v >= -margin && v <= 1 + margin ? [s, t] : 'outside'
 }
 
-/** Of each run of touching stretches that follow each other, the parameter where the two are nearest. */
-function nearestOfRuns(touching: [number, number, number][]): number[] {
+/** For each run of touching stretches that follow each other, the parameter on i where the two are nearest. */
+function nearestOfRuns(pieces: Pieces, i: number, j: number, touching: [number, number][]): number[] {
   touching.sort((a, b) => a[0] - b[0])
-  const found: number[] = []
-  let best = Number.POSITIVE_INFINITY
-  let reached = Number.NEGATIVE_INFINITY
-  for (const [t, distance, width] of touching) {
-    if (t - width > reached) {
-      found.push(t)
-      best = distance
-    } else if (distance < best) {
-      found[found.length - 1] = t
-      best = distance
-    }
-    reached = Math.max(reached, t + width)
+  const runs: [number, number][] = []
+  for (const [low, high] of touching) {
+    const run = runs[runs.length - 1]
+    if (run && low <= run[1] + (high - low)) run[1] = Math.max(run[1], high)
+    else runs.push([low, high])
   }
-  return found
+  return runs.map(([low, high]) => nearestBetween(pieces, i, j, low, high)).filter((t) => t !== null)
+}
+
+/**
+ * Where between two parameters of piece i the tangents are parallel, else where i passes from one side of
+ * piece j to the other; null where neither is: the two are then nearest at an end, which is met elsewhere.
+ */
+function nearestBetween(pieces: Pieces, i: number, j: number, low: number, high: number): number | null {
+  const { table, edge } = pieces
+  const measure = (t: number): [slant: number, side: number] => {
+    jetAt(table, edge[i], t, p)
+    const { 0: x, 1: y, 2: dx, 3: dy } = p
+    const tj = footOn(pieces, j, x, y, q)
+    jetAt(table, edge[j], tj, q)
+    return [dx * q[3] - dy * q[2], q[2] * (y - q[1]) - q[3] * (x - q[0])]
+  }
+  const atLow = measure(low)
+  const atHigh = measure(high)
+  for (const which of [0, 1]) {
+    if (!(atLow[which] * atHigh[which] < 0)) continue
+    let [a, b] = [low, high]
+    for (let n = 0; n < 60; n++) {
+      const t = (a + b) / 2
+      if (measure(t)[which] > 0 === atLow[which] > 0) a = t
+      else b = t
+    }
+    return (a + b) / 2
+  }
+  return null
 }
