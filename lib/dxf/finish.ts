@@ -1,6 +1,7 @@
 import { IDENTITY } from './affine'
 import type { BlockDefinition } from './blocks'
 import { type Drawing, HATCH_BOUNDARY, type ReadLimits } from './drawing'
+import { drawnDimensions } from './dimensions'
 import { dxfFinding } from './findings'
 import { INSERT_KIND, KINDS, PERHAPS_METAL } from './kinds'
 import { lastDigitOf } from './lastDigit'
@@ -46,6 +47,7 @@ export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, 
   }
   if (opener.inserts > 0) counts.read.set('INSERT', opener.inserts)
   reportIgnored(reading, counts.ignored)
+  const dimensions = drawnDimensions(reading, facts, (raw) => naming.layers[naming.layerOf[raw]], read)
   return {
     acadVersion: facts.version,
     ...unitOf(reading, facts),
@@ -58,7 +60,7 @@ export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, 
     edges: root.edges,
     read: Object.fromEntries(counts.read),
     ignored: Object.fromEntries(counts.ignored),
-    dimensions: [],
+    dimensions,
     lastDigit: lastDigitOf(reading.record.digits),
     findings: findings.items,
     findingsTotal: findings.total,

@@ -8,6 +8,7 @@ import { GroupRecord, type Slots } from './record'
 import { emptySheet, type Sheet } from './sheet'
 import type { GroupCursor } from './groups'
 import { ALL_KINDS } from './kinds'
+import type { RawDimension } from './entities/dimension'
 import { Vertices } from './entities/vertices'
 
 /** Line types of an entity that names none, or the insert's; numbers of `Reading.lineTypes`. */
@@ -57,6 +58,7 @@ export class Reading {
   /** number 0 is the layout that was open when the file was saved */
   readonly layouts: Names
   readonly vertices = new Vertices()
+  readonly dimensions: RawDimension[] = []
   readonly root: Sheet
   /** where entities go now: the root, or a block being defined */
   sheet: Sheet

@@ -2,17 +2,32 @@ import { type BlockDefinition, openBlock } from './blocks'
 import type { ReadLimits } from './drawing'
 import { readArc, readCircle } from './entities/arc'
 import { readEllipse } from './entities/ellipse'
+import { readDimension } from './entities/dimension'
+import { readHatch } from './entities/hatch'
 import { readInsert } from './entities/insert'
 import { readLine } from './entities/line'
 import { readLwPolyline } from './entities/lwpolyline'
+import { readSpline } from './entities/spline'
 import { closePolyline, type OpenPolyline, openPolyline, readVertex } from './entities/polyline'
 import { dxfFinding, quoted } from './findings'
-import { ARC_KIND, CIRCLE_KIND, ELLIPSE_KIND, INSERT_KIND, kindNumber, LINE_KIND, LWPOLYLINE_KIND, POLYLINE_KIND } from './kinds'
+import {
+  ARC_KIND,
+  CIRCLE_KIND,
+  ELLIPSE_KIND,
+  HATCH_KIND,
+  INSERT_KIND,
+  kindNumber,
+  LINE_KIND,
+  LWPOLYLINE_KIND,
+  POLYLINE_KIND,
+  SPLINE_KIND,
+} from './kinds'
 import type { Reading } from './reading'
 import { type FileFacts, noFacts, readBlockRecord, readDimensionStyle, readHeader, readLayer, readLayout } from './tables'
 import { rawText } from './text'
 
 const VERTEX = kindNumber('VERTEX')
+const DIMENSION = kindNumber('DIMENSION')
 const SEQEND = kindNumber('SEQEND')
 const SECTION = kindNumber('SECTION')
 const ENDSEC = kindNumber('ENDSEC')
@@ -163,6 +178,12 @@ class Walk {
       case POLYLINE_KIND:
         this.polyline = openPolyline(reading)
         return
+      case SPLINE_KIND:
+        return readSpline(reading)
+      case HATCH_KIND:
+        return readHatch(reading)
+      case DIMENSION:
+        return readDimension(reading)
       case INSERT_KIND:
         return readInsert(reading)
       case VERTEX:
