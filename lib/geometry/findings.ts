@@ -77,6 +77,11 @@ export const GEOMETRY_FINDINGS = {
     severity: 'error',
     say: (p) => `An outline crosses itself at ${place(p)}. Mend it in the drawing, or leave the outline out.`,
   },
+  'crossings-too-many': {
+    severity: 'error',
+    say: () =>
+      'The outlines cross in more places than can be worked out. Leave out the layers with hatching or construction lines.',
+  },
   'groups-apart': {
     severity: 'note',
     say: (p) =>

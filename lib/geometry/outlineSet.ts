@@ -1,5 +1,7 @@
+import type { ArcOffer } from './chords'
 import type { EdgeTable } from './edges'
 import type { Finding } from './finding'
+import type { OutlineGroup } from './groups'
 import type { Repair } from './region'
 
 /**
@@ -26,6 +28,14 @@ export interface OutlineSet {
   depth: Int32Array
   /** number of the group that lies apart from the others (a detail of the sheet), from 0 */
   group: Uint32Array
+  /** the groups by number: bounds in drawing units and how many outlines */
+  groups: OutlineGroup[]
+  /** outlines that look like drawing frames, outermost first: offered to be left out */
+  frames: number[]
+  /** outlines that look like the cells of a title block or a table: offered to be left out */
+  titleBlocks: number[][]
+  /** runs of chords on one circle: offered to be taken as arcs */
+  arcOffers: ArcOffer[]
   /** outlines whose boundaries meet other than at joints they share in passing: arranged together */
   clusters: number[][]
   /**

@@ -1,89 +1,122 @@
-import { boundsOfEdges, unionOfBoxes } from './bounds'
-import { type Chained, chain } from './chain'
-import { loopArea } from './edgeArea'
+import { acceptArcs } from './acceptedArcs'
+import { boundsOfEdges } from './bounds'
+import { chordRuns } from './chords'
+import { closedLoops } from './closedLoops'
+import { coincidentLoops } from './coincident'
 import type { EdgeTable } from './edges'
-import { emitLoop } from './emitLoop'
-import { jetAt, newJet } from './evaluate'
 import type { Finding } from './finding'
 import { geometryFinding } from './findings'
-import { sortEdges } from './looseEdges'
-import { loopTester, nest } from './nest'
+import { sheetParts } from './frames'
+import { groupOutlines } from './groups'
+import { netOutlines } from './netOutlines'
 import type { OutlineSet, Tolerances } from './outlineSet'
-import type { ArcRun } from './recipe'
+import type { ArcRun, Bond } from './recipe'
+import { measured, type Related, relate } from './relations'
+import { selectLoops } from './selectLoops'
 
 export interface OutlineOptions {
   arcs: ArcRun[]
   mmPerUnit: number
+  /** answers to "metal or void?" */
+  bonds?: Bond[]
 }
 
 /**
  * The closed outlines of the taken edges (rows of `edges`, ascending): chained within the tolerances, counter-clockwise,
- * nested and grouped; what does not close is kept beside them. Lengths in drawing units; sentences speak mm.
+ * nested and grouped; what does not close is kept beside them. All numbers in drawing units; sentences speak mm.
+ * Bad drawings give findings, never a throw.
  */
 export function outlinesOf(edges: EdgeTable, take: Uint32Array, tolerances: Tolerances, options: OutlineOptions): OutlineSet {
   const { mmPerUnit } = options
-  const findings: Finding[] = []
-  const sorted = sortEdges(edges, take, tolerances.snap)
-  if (sorted.empty.length > 0) {
-    const at: [number, number] = [edges.ends[4 * sorted.empty[0]], edges.ends[4 * sorted.empty[0] + 1]]
-    findings.push(geometryFinding('edges-without-length', { count: sorted.empty.length, x: at[0], y: at[1] }, at))
-  }
-  const chained = chain(edges, sorted.loose, tolerances, mmPerUnit)
-  findings.push(...chained.findings, ...openFindings(chained, mmPerUnit))
-  const loopStart = addClosed(chained, edges, sorted.closedRows, sorted.closedStart)
+  const closed = closedLoops(edges, take, tolerances, mmPerUnit)
+  const nets = netOutlines(closed, tolerances, mmPerUnit, options.bonds ?? [])
+  const findings = [...closed.findings, ...nets.findings]
+  const sound = withoutEmpty(closed.edges, Uint32Array.from(closed.loopStart), nets.undecided, tolerances, findings)
+  const arcs = takeArcs(sound, options.arcs, tolerances, mmPerUnit, findings)
+  const related = relate(arcs.edges, arcs.loopStart, tolerances.snap, sound.undecided)
   return {
-    ...described(chained.edges, loopStart),
-    openEdges: chained.openEdges,
-    openStart: Uint32Array.from(chained.openStart),
-    repairs: chained.repairs,
-    findings,
+    ...completed(related, tolerances, mmPerUnit, findings),
+    openEdges: closed.openEdges,
+    openStart: closed.openStart,
+    repairs: closed.repairs,
   }
 }
 
-/** Appends the outlines that were drawn closed to the chained ones. */
-function addClosed(chained: Chained, edges: EdgeTable, rows: Uint32Array, start: number[]): Uint32Array {
-  const loopStart = chained.loopStart
-  for (let k = 0; k + 1 < start.length; k++) {
-    const steps = new Int32Array(start[k + 1] - start[k])
-    for (let s = 0; s < steps.length; s++) steps[s] = 2 * rows[start[k] + s]
-    emitLoop(chained.edges, edges, steps, steps.length)
-    loopStart.push(chained.edges.count)
-  }
-  return Uint32Array.from(loopStart)
+interface Kept {
+  edges: EdgeTable
+  loopStart: Uint32Array
+  undecided: Uint8Array
 }
 
-function openFindings({ openEdges, openStart }: Chained, mmPerUnit: number): Finding[] {
-  const e = openEdges.ends
-  return openStart.slice(1).map((to, k) => {
-    const from = openStart[k]
-    const [x0, y0] = [e[4 * from], e[4 * from + 1]]
-    const [x1, y1] = [e[4 * to - 2], e[4 * to - 1]]
-    const gap = Math.hypot(x1 - x0, y1 - y0)
-    const at: [number, number] = [0.5 * (x0 + x1), 0.5 * (y0 + y1)]
-    return geometryFinding('chain-open', { gap: gap * mmPerUnit, x: at[0], y: at[1], edges: to - from, x0, y0, x1, y1 }, at, gap)
+/** Leaves out loops without area and loops that lie on an earlier one. */
+function withoutEmpty(
+  edges: EdgeTable,
+  loopStart: Uint32Array,
+  undecided: Uint8Array,
+  tolerances: Tolerances,
+  findings: Finding[],
+): Kept {
+  const loops = measured(edges, loopStart, boundsOfEdges(edges))
+  const place = (k: number): [number, number] => [edges.ends[4 * loopStart[k]], edges.ends[4 * loopStart[k] + 1]]
+  const doubled = coincidentLoops(loops, tolerances.duplicate)
+  const empty = loops.area.map((area, k) => {
+    const [minX, minY, maxX, maxY] = loops.bounds.subarray(4 * k, 4 * k + 4)
+    return area <= tolerances.snap * (maxX - minX + maxY - minY) ? 1 : 0
   })
+  const first = doubled.indexOf(1)
+  const count = doubled.reduce((sum, one) => sum + one, 0)
+  if (count > 0) {
+    const at = place(first)
+    findings.push(geometryFinding('outlines-coincident', { count, x: at[0], y: at[1] }, at))
+  }
+  for (let k = 0; k < loops.count; k++) {
+    if (!empty[k] || doubled[k]) continue
+    const at = place(k)
+    findings.push(geometryFinding('outline-without-area', { edges: loopStart[k + 1] - loopStart[k], x: at[0], y: at[1] }, at))
+  }
+  const keep = (k: number) => !doubled[k] && !empty[k]
+  if (count === 0 && !empty.includes(1)) return { edges, loopStart, undecided }
+  return { ...selectLoops(edges, loopStart, keep), undecided: undecided.filter((_, k) => keep(k)) }
 }
 
-type Described = Omit<OutlineSet, 'openEdges' | 'openStart' | 'repairs' | 'findings'>
+function takeArcs({ edges, loopStart }: Kept, runs: ArcRun[], tolerances: Tolerances, mmPerUnit: number, findings: Finding[]) {
+  if (runs.length === 0) return { edges, loopStart }
+  const taken = acceptArcs(edges, loopStart, runs, tolerances.chaining)
+  if (taken.taken > 0)
+    findings.push(geometryFinding('arcs-from-chords', { count: taken.taken, area: taken.area * mmPerUnit ** 2 }))
+  for (const { through } of taken.missing)
+    findings.push(geometryFinding('arc-run-not-found', { x: through[0], y: through[1] }, through))
+  return taken
+}
 
-function described(edges: EdgeTable, loopStart: Uint32Array): Described {
-  const count = loopStart.length - 1
-  const boxes = boundsOfEdges(edges)
-  const area = new Float64Array(count)
-  const bounds = new Float64Array(4 * count)
-  const at = new Float64Array(2 * count)
-  const source = new Uint32Array(count)
-  const jet = newJet()
-  for (let k = 0; k < count; k++) {
-    const from = loopStart[k]
-    area[k] = loopArea(edges, from, loopStart[k + 1])
-    bounds.set(unionOfBoxes(boxes, from, loopStart[k + 1]), 4 * k)
-    source[k] = edges.source[from]
-    jetAt(edges, from, 0.5, jet)
-    at[2 * k] = jet.x
-    at[2 * k + 1] = jet.y
+type Completed = Omit<OutlineSet, 'openEdges' | 'openStart' | 'repairs'>
+
+/** Adds what a person is to be asked or told of the outlines: groups, sheet parts, runs of chords. */
+export function completed(related: Related, tolerances: Tolerances, mmPerUnit: number, before: Finding[]): Completed {
+  const findings = [...before, ...related.findings]
+  const { count, bounds, at } = related
+  const { frames, titleBlocks } = sheetParts(related, related.depth, related.clusters)
+  const alone = new Uint8Array(count)
+  for (const k of frames) alone[k] = 1
+  const { group, groups } = groupOutlines(bounds, count, alone)
+  const place = (k: number): [number, number] => [at[2 * k], at[2 * k + 1]]
+  for (const k of frames) {
+    const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
+    const [width, height] = [(maxX - minX) * mmPerUnit, (maxY - minY) * mmPerUnit]
+    const [x, y] = place(k)
+    findings.push(geometryFinding('frame-found', { width, height, x, y }, [x, y], Math.max(maxX - minX, maxY - minY)))
   }
-  const loops = { edges, loopStart, count, area, bounds }
-  const depth = nest(loops, loopTester(loops, boxes), at)
-  return { ...loops, at, source, depth, group: new Uint32Array(count), clusters: [] }
+  for (const cells of titleBlocks) {
+    const [x, y] = place(cells[0])
+    findings.push(geometryFinding('title-block-found', { count: cells.length, x, y }, [x, y]))
+  }
+  const details = groups.length - frames.length
+  if (details > 1) findings.push(geometryFinding('groups-apart', { groups: details }))
+  const arcOffers = chordRuns(related, tolerances.lastDigit)
+  for (const { run, radius, chords, dArea } of arcOffers) {
+    const [x, y] = run.through
+    const params = { chords, radius: radius * mmPerUnit, area: dArea * mmPerUnit ** 2, x, y }
+    findings.push(geometryFinding('chords-on-circle', params, [x, y], radius))
+  }
+  return { ...related, group, groups, frames, titleBlocks, arcOffers, findings }
 }

@@ -1,0 +1,95 @@
+import { unionOfBoxes } from './bounds'
+import { LINE } from './edges'
+import type { Loops } from './nest'
+
+/** Outlines that look like part of a sheet, not of a profile. */
+export interface SheetParts {
+  /** rectangles round everything that touch nothing */
+  frames: number[]
+  /** tables of rectangles that touch one another: title blocks, parts lists */
+  titleBlocks: number[][]
+}
+
+/** Of four lines along x and y. */
+function isRectangle({ edges, loopStart, bounds }: Loops, k: number): boolean {
+  const from = loopStart[k]
+  const to = loopStart[k + 1]
+  if (to - from < 4) return false
+  const e = edges.ends
+  for (let i = from; i < to; i++) {
+    if (edges.kind[i] !== LINE) return false
+    const alongX = e[4 * i + 1] === e[4 * i + 3] && (e[4 * i + 1] === bounds[4 * k + 1] || e[4 * i + 1] === bounds[4 * k + 3])
+    const alongY = e[4 * i] === e[4 * i + 2] && (e[4 * i] === bounds[4 * k] || e[4 * i] === bounds[4 * k + 2])
+    if (!alongX && !alongY) return false
+  }
+  return true
+}
+
+const SHEET_RATIO = Math.SQRT2
+const FEWEST_CELLS = 4
+
+/** Rectangles of a cluster that fill their common box like the cells of a table; null where they do not. */
+function tableOf(loops: Loops, cluster: number[]): number[] | null {
+  const { bounds, area } = loops
+  const common = unionOfBoxes(
+    Float64Array.from(cluster.flatMap((k) => [...bounds.subarray(4 * k, 4 * k + 4)])),
+    0,
+    cluster.length,
+  )
+  const whole = (common[2] - common[0]) * (common[3] - common[1])
+  const cells = cluster.filter((k) => area[k] < 0.98 * whole)
+  const filled = cells.reduce((sum, k) => sum + area[k], 0)
+  return cells.length >= FEWEST_CELLS && (filled >= 0.98 * whole || cells.length < cluster.length) ? cells : null
+}
+
+/**
+ * Looks for drawing frames and title blocks. A frame is a rectangle outside all others that touches nothing but title
+ * blocks, holds every other outline, these fill less than half of it, and either has the ratio of a drawing sheet (√2
+ * within 12 %, for margins; ISO 216) or holds outlines that hold others. A title block is at least four rectangles that
+ * touch one another and fill a box like cells. Common practice, no source: they are only offered, never decided.
+ */
+export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]): SheetParts {
+  const { count } = loops
+  const touches = new Uint8Array(count)
+  const apart = new Uint8Array(count)
+  const titleBlocks: number[][] = []
+  for (const cluster of clusters) {
+    const cells = cluster.length >= FEWEST_CELLS && cluster.every((k) => isRectangle(loops, k)) ? tableOf(loops, cluster) : null
+    if (cells) titleBlocks.push(cells)
+    for (const k of cells ?? cluster) (cells ? apart : touches)[k] = 1
+  }
+  const frames: number[] = []
+  for (let level = 0; level < 3; level++) {
+    const k = frameAt(loops, depth, level, apart, touches)
+    if (k < 0) break
+    frames.push(k)
+    apart[k] = 1
+  }
+  return { frames, titleBlocks }
+}
+
+function frameAt(loops: Loops, depth: Int32Array, level: number, apart: Uint8Array, touches: Uint8Array): number {
+  const { count, bounds, area } = loops
+  let outer = -1
+  let filled = 0
+  let deepest = level
+  let inside = 0
+  for (let k = 0; k < count; k++) {
+    if (apart[k]) continue
+    if (depth[k] === level) {
+      if (outer >= 0) return -1
+      outer = k
+    } else if (depth[k] < level) return -1
+    else {
+      inside++
+      if (depth[k] === level + 1) filled += area[k]
+      deepest = Math.max(deepest, depth[k])
+    }
+  }
+  if (outer < 0 || inside === 0 || touches[outer] || !isRectangle(loops, outer) || filled > 0.5 * area[outer]) return -1
+  const width = bounds[4 * outer + 2] - bounds[4 * outer]
+  const height = bounds[4 * outer + 3] - bounds[4 * outer + 1]
+  const ratio = Math.max(width, height) / Math.min(width, height)
+  const likeSheet = ratio > SHEET_RATIO / 1.12 && ratio < SHEET_RATIO * 1.12
+  return likeSheet || deepest >= level + 2 ? outer : -1
+}

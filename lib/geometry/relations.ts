@@ -1,0 +1,92 @@
+import { boundsOfEdges, unionOfBoxes } from './bounds'
+import { type Crossings, crossingsOf } from './crossings'
+import { loopArea } from './edgeArea'
+import type { EdgeTable } from './edges'
+import type { Finding } from './finding'
+import { geometryFinding } from './findings'
+import { interiorPoint } from './interiorPoint'
+import { namesOf } from './names'
+import { type Loops, loopTester, nest } from './nest'
+import type { OutlineSet } from './outlineSet'
+
+export type Related = Pick<
+  OutlineSet,
+  'edges' | 'loopStart' | 'count' | 'area' | 'bounds' | 'at' | 'source' | 'depth' | 'clusters' | 'findings'
+>
+
+/** Areas and bounds of loops. */
+export function measured(edges: EdgeTable, loopStart: Uint32Array, boxes: Float64Array): Loops {
+  const count = loopStart.length - 1
+  const area = new Float64Array(count)
+  const bounds = new Float64Array(4 * count)
+  for (let k = 0; k < count; k++) {
+    area[k] = loopArea(edges, loopStart[k], loopStart[k + 1])
+    bounds.set(unionOfBoxes(boxes, loopStart[k], loopStart[k + 1]), 4 * k)
+  }
+  return { edges, loopStart, count, area, bounds }
+}
+
+/** Connected sets of loops that meet, each ascending. */
+function clustersOf(count: number, { contacts, selfCrossing }: Crossings): number[][] {
+  const parent = new Map<number, number>()
+  const find = (k: number): number => {
+    let root = k
+    for (let up = parent.get(root) ?? root; up !== root; up = parent.get(root) ?? root) root = up
+    parent.set(k, root)
+    return root
+  }
+  for (const { a, b } of contacts) {
+    const [p, q] = [find(a), find(b)]
+    parent.set(Math.max(p, q), Math.min(p, q))
+  }
+  for (const { loop } of selfCrossing) find(loop)
+  const clusters = new Map<number, number[]>()
+  for (let k = 0; k < count; k++) {
+    if (!parent.has(k)) continue
+    const cluster = clusters.get(find(k))
+    if (cluster) cluster.push(k)
+    else clusters.set(find(k), [k])
+  }
+  return [...clusters.values()]
+}
+
+function contactFindings({ contacts, selfCrossing, tooMany }: Crossings): Finding[] {
+  const findings: Finding[] = selfCrossing.map(({ at }) => geometryFinding('outline-crosses-itself', { x: at[0], y: at[1] }, at))
+  for (const crosses of [true, false]) {
+    const those = contacts.filter((contact) => contact.crosses === crosses)
+    if (those.length === 0) continue
+    const { at } = those[0]
+    const count = new Set(those.map(({ b }) => b)).size
+    findings.push(geometryFinding(crosses ? 'outlines-cross' : 'outlines-touch', { count, x: at[0], y: at[1] }, at))
+  }
+  if (tooMany) findings.push(geometryFinding('crossings-too-many', {}))
+  return findings
+}
+
+/**
+ * Names, nesting and meetings of loops. Loops that cross others or themselves, and those in `undecided`, have depth −1:
+ * nesting says nothing of them; they still hold what lies inside.
+ */
+export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, undecided: Uint8Array): Related {
+  const boxes = boundsOfEdges(edges)
+  const loops = measured(edges, loopStart, boxes)
+  const inside = loopTester(loops, boxes)
+  const crossings = crossingsOf(loops, boxes, snap, inside)
+  const clusters = clustersOf(loops.count, crossings)
+  const probes = new Float64Array(2 * loops.count)
+  const source = new Uint32Array(loops.count)
+  for (let k = 0; k < loops.count; k++) {
+    probes.set(edges.ends.subarray(4 * loopStart[k], 4 * loopStart[k] + 2), 2 * k)
+    source[k] = edges.source[loopStart[k]]
+  }
+  for (const k of clusters.flat()) {
+    const point = interiorPoint(edges, loopStart[k], loopStart[k + 1])
+    if (point) probes.set(point, 2 * k)
+  }
+  const depth = nest(loops, inside, probes)
+  for (const { a, b, crosses } of crossings.contacts) if (crosses) for (const k of [a, b]) depth[k] = -1
+  for (const { loop } of crossings.selfCrossing) depth[loop] = -1
+  for (let k = 0; k < loops.count; k++) if (undecided[k] || crossings.tooMany) depth[k] = -1
+  const at = namesOf(loops, crossings.touched)
+  return { ...loops, at, source, depth, clusters, findings: contactFindings(crossings) }
+}
