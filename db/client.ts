@@ -18,7 +18,7 @@ export interface Database {
   read: Db
   write: Db
   writer: SqliteDatabase.Database
-  close(): Promise<void>
+  close(): void
 }
 
 /** Takes the write lock at once: a transaction that reads first could not be upgraded beside another process. */
@@ -52,17 +52,11 @@ export function openWriter(file: string, { maxPages }: Options = {}): SqliteData
 export function openDatabase(file: string, options: Options = {}): Database {
   const writer = openWriter(file, options)
   const reader = new SqliteDatabase(file, { readonly: true, timeout: 5000 })
-  const read = kyselyOf(reader)
-  const write = kyselyOf(writer)
-  return {
-    read,
-    write,
-    writer,
-    close: async () => {
-      await read.destroy()
-      await write.destroy()
-    },
+  const close = () => {
+    reader.close()
+    writer.close()
   }
+  return { read: kyselyOf(reader), write: kyselyOf(writer), writer, close }
 }
 
 /** Opens a serialized database in memory. */
@@ -70,5 +64,5 @@ export function openImage(image: Buffer): Database {
   const writer = new SqliteDatabase(image)
   writer.pragma('foreign_keys = ON')
   const both = kyselyOf(writer)
-  return { read: both, write: both, writer, close: () => both.destroy() }
+  return { read: both, write: both, writer, close: () => void writer.close() }
 }

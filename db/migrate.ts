@@ -51,7 +51,6 @@ export async function migrateFile(
   { migrations = MIGRATIONS, stamp = new Date() }: { migrations?: Record<string, Migration>; stamp?: Date } = {},
 ): Promise<Outcome> {
   const writer = openWriter(file)
-  const db = kyselyOf(writer)
   try {
     const before = appliedIn(writer)
     const unknown = before.filter((name) => !(name in migrations))
@@ -69,7 +68,7 @@ export async function migrateFile(
     }
     return { applied: await migrateOpen(writer, migrations), backup }
   } finally {
-    await db.destroy()
+    writer.close()
   }
 }
 

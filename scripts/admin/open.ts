@@ -13,6 +13,6 @@ export async function withDatabase<T>(work: (database: Database) => Promise<T>):
   try {
     return await work(database)
   } finally {
-    await database.close()
+    database.close()
   }
 }
