@@ -1,9 +1,9 @@
 import { difference, product, rootsOf } from '../geometry/bernstein'
 import { turning } from '../geometry/bezierXy'
 import { type EdgeTable, LINE, type Point } from '../geometry/edges'
+import { type Bundles, boxOf } from './bundles'
 import { type Curve, curvePoint, loadCurve, newCurve, newCurvePoint, reachOf } from './curve'
 import { type Circle, enclosingCircle } from './enclosingCircle'
-import type { Extremes } from './extremes'
 
 const curve = newCurve()
 const point = newCurvePoint()
@@ -46,34 +46,40 @@ function bezierPeaks({ controls, ku, kv }: Curve): number[] {
   return rootsOf(turning(square, { x: square, y: square, w: product(w, w), rational: controls.rational }))
 }
 
-/** The point of the boundary farthest from (x, y). */
-function farthest(edges: EdgeTable, x: number, y: number): Point & { distance: number } {
-  const e = edges.ends
-  let far = { x, y, distance: 0 }
-  let square = 0
-  for (let i = 0; i < edges.count; i++) {
-    const dx = e[4 * i] - x
-    const dy = e[4 * i + 1] - y
-    const d = dx * dx + dy * dy
-    if (d > square) {
-      square = d
-      far = { x: e[4 * i], y: e[4 * i + 1], distance: 0 }
-    }
-  }
+interface Far extends Point {
+  square: number
+}
+
+function farByEdges(edges: EdgeTable, from: number, to: number, x: number, y: number, far: Far): void {
+  const { ends, kind } = edges
   const frame = { x, y, cos: 1, sin: 0 }
-  for (let i = 0; i < edges.count; i++) {
-    if (edges.kind[i] === LINE) continue
+  const take = (u: number, v: number): void => {
+    const square = u * u + v * v
+    if (square <= far.square) return
+    far.square = square
+    far.x = x + u
+    far.y = y + v
+  }
+  for (let i = from; i < to; i++) {
+    take(ends[4 * i] - x, ends[4 * i + 1] - y)
+    if (kind[i] === LINE) continue
     loadCurve(edges, i, frame, curve)
-    if (Math.hypot(curve.ku, curve.kv) + reachOf(curve) <= Math.sqrt(square)) continue
+    if (Math.hypot(curve.ku, curve.kv) + reachOf(curve) <= Math.sqrt(far.square)) continue
     for (const t of curve.controls ? bezierPeaks(curve) : conicPeaks(curve)) {
-      const { u, v } = curvePoint(curve, t, point)
-      if (u * u + v * v > square) {
-        square = u * u + v * v
-        far = { x: x + u, y: y + v, distance: 0 }
-      }
+      curvePoint(curve, t, point)
+      take(point.u, point.v)
     }
   }
-  far.distance = Math.sqrt(square)
+}
+
+/** The point of the boundary farthest from (x, y); runs whose box lies nearer than what is found are passed over. */
+function farthest({ edges, count, start, boxes }: Bundles, x: number, y: number): Far {
+  const far: Far = { x, y, square: 0 }
+  for (let k = 0; k < count; k++) {
+    const u = Math.max(x - boxes[4 * k], boxes[4 * k + 2] - x)
+    const v = Math.max(y - boxes[4 * k + 1], boxes[4 * k + 3] - y)
+    if (u * u + v * v > far.square) farByEdges(edges, start[k], start[k + 1], x, y, far)
+  }
   return far
 }
 
@@ -81,16 +87,18 @@ function farthest(edges: EdgeTable, x: number, y: number): Point & { distance: n
  * Circumscribing circle: the smallest circle round the region. The smallest circle round a few boundary points grows by the
  * boundary's farthest point from its centre until nothing lies outside; the radius given reaches that farthest point.
  */
-export function circumscribingCircle(edges: EdgeTable, { minU, maxU, minV, maxV }: Extremes): Circle {
-  const points: Point[] = [farthest(edges, 0.5 * (minU + maxU), 0.5 * (minV + maxV))]
-  points.push(farthest(edges, points[0].x, points[0].y))
+export function circumscribingCircle(bundles: Bundles): Circle {
+  const { minX, minY, maxX, maxY } = boxOf(bundles)
+  const points: Point[] = [farthest(bundles, 0.5 * (minX + maxX), 0.5 * (minY + maxY))]
+  points.push(farthest(bundles, points[0].x, points[0].y))
   let circle = enclosingCircle(points)
   for (let step = 0; step < 100; step++) {
-    const far = farthest(edges, circle.x, circle.y)
-    if (far.distance <= circle.radius * (1 + 1e-13)) break
+    const far = farthest(bundles, circle.x, circle.y)
+    const distance = Math.sqrt(far.square)
+    if (distance <= circle.radius * (1 + 1e-13)) break
     points.push(far)
     const next = enclosingCircle(points)
-    if (next.radius <= circle.radius) return { ...circle, radius: far.distance }
+    if (next.radius <= circle.radius) return { ...circle, radius: distance }
     circle = next
   }
   return circle

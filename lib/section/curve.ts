@@ -156,8 +156,11 @@ export function addSegment(curve: Curve, t0: number, t1: number, k: number, l: n
 }
 
 /** Farthest that a curve can reach from its chord's middle: cheap, so that most curves need no search. */
-export function reachOf({ controls, eu, ev, fu, fv }: Curve): number {
-  if (!controls) return 2 * (Math.abs(eu) + Math.abs(ev) + Math.abs(fu) + Math.abs(fv))
+export function reachOf({ controls, eu, ev, fu, fv, to }: Curve): number {
+  if (!controls) {
+    const along = Math.abs(to) < Math.PI / 2 ? Math.sin(Math.abs(to)) : 1
+    return (1 - Math.cos(to)) * (Math.abs(eu) + Math.abs(ev)) + along * (Math.abs(fu) + Math.abs(fv))
+  }
   let reach = 0
   for (let j = 0; j < controls.w.length; j++) {
     reach = Math.max(reach, (Math.abs(controls.u[j]) + Math.abs(controls.v[j])) / controls.w[j])

@@ -1,4 +1,4 @@
-import type { EdgeTable } from '../geometry/edges'
+import type { Bundles } from './bundles'
 import { type Extremes, extremesOf } from './extremes'
 import { type Frame, frameAt } from './frame'
 import { plasticBending } from './plastic'
@@ -14,11 +14,11 @@ export interface FreeBending {
 /** ∫sign·x dA and ∫sign·y dA with the neutral axis at `angle` degrees, metal to its left positive. */
 type PlasticVector = (angle: number) => { x: number; y: number }
 
-export function plasticVector(edges: EdgeTable, x: number, y: number): PlasticVector {
+export function plasticVector(bundles: Bundles): PlasticVector {
   return (angle) => {
-    const frame: Frame = frameAt(x, y, angle)
-    const extremes: Extremes = extremesOf(edges, 0, edges.count, frame)
-    const { modulus, across } = plasticBending(edges, frame, extremes)
+    const frame: Frame = frameAt(bundles.x, bundles.y, angle)
+    const extremes: Extremes = extremesOf(bundles, frame)
+    const { modulus, across } = plasticBending(bundles, frame, extremes)
     return { x: across * frame.cos - modulus * frame.sin, y: across * frame.sin + modulus * frame.cos }
   }
 }

@@ -1,4 +1,5 @@
 import type { Region } from '../geometry/region'
+import type { Bundles } from './bundles'
 import { extremesOf } from './extremes'
 import type { Frame } from './frame'
 import { type Moments, momentsOf } from './moments'
@@ -39,11 +40,11 @@ export function ownMoments(region: Region, frame: Frame): { ix: number; iy: numb
 }
 
 /** What every piece spans along v of `frame`. */
-export function pieceSpans(region: Region, frame: Frame, areas: readonly number[]): PieceSpan[] {
+export function pieceSpans(region: Region, bundles: Bundles, frame: Frame, areas: readonly number[]): PieceSpan[] {
   const spans = areas.map((area): PieceSpan => ({ min: Number.POSITIVE_INFINITY, max: Number.NEGATIVE_INFINITY, area }))
   for (let loop = 0; loop < region.piece.length; loop++) {
     if (region.hole[loop]) continue
-    const { minV, maxV } = extremesOf(region.edges, region.loopStart[loop], region.loopStart[loop + 1], frame)
+    const { minV, maxV } = extremesOf(bundles, frame, bundles.loopRun[loop], bundles.loopRun[loop + 1])
     const span = spans[region.piece[loop]]
     span.min = Math.min(span.min, minV)
     span.max = Math.max(span.max, maxV)

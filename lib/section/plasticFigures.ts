@@ -1,5 +1,6 @@
 import { type Finding, makeFinding } from '../geometry/finding'
 import type { Region } from '../geometry/region'
+import type { Bundles } from './bundles'
 import { type Extremes, extremesOf } from './extremes'
 import type { PlasticWidths } from './figures/figure'
 import { BENDING_AXES, type BendingAxis } from './figures/spread'
@@ -21,7 +22,7 @@ export interface PlasticFigures {
 }
 
 /** Frame in which v runs the way the offset of the axis is counted: x along +y, y along +x, 1 along axis 2, 2 along axis 1. */
-function bendingFrame({ x, y }: Frame, theta: number | null, axis: BendingAxis): Frame {
+function bendingFrame({ x, y }: Bundles, theta: number | null, axis: BendingAxis): Frame {
   const angle = { x: 0, y: -90, axis1: theta ?? 0, axis2: (theta ?? 0) - 90 }[axis]
   return frameAt(x, y, angle)
 }
@@ -30,23 +31,23 @@ const lesser = (a: number | null, b: number | null): number | null => (a === nul
 const over = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : a / b)
 
 /** Plastic figures about x, y and, unless every axis is principal, about axes 1 and 2. */
-export function plasticFigures(region: Region, frame: Frame, theta: number | null, causes: Causes, area: number): PlasticFigures {
+export function plasticFigures(region: Region, bundles: Bundles, theta: number | null, causes: Causes): PlasticFigures {
   const plastic: Section['plastic'] = { x: 0, y: 0, axis1: null, axis2: null, at: { x: 0, y: 0, axis1: null, axis2: null } }
   const widths: PlasticWidths = { x: 0, y: 0, axis1: 0, axis2: 0 }
   const across = { x: 0, y: 0 }
   const findings: Finding[] = []
-  const areas = region.pieces > 1 ? piecesMoments(region, frame).map((piece) => piece.area) : []
-  const tolerance = Math.max(1e-9, (causes.digits?.area ?? 0) / area)
+  const areas = region.pieces > 1 ? piecesMoments(region, frameAt(bundles.x, bundles.y)).map((piece) => piece.area) : []
+  const tolerance = Math.max(1e-9, (causes.digits?.area ?? 0) / bundles.moments.area)
   for (const axis of BENDING_AXES) {
     if (theta === null && (axis === 'axis1' || axis === 'axis2')) continue
-    const turned = bendingFrame(frame, theta, axis)
-    const extremes: Extremes = extremesOf(region.edges, 0, region.edges.count, turned)
-    const bending = plasticBending(region.edges, turned, extremes)
+    const turned = bendingFrame(bundles, theta, axis)
+    const extremes: Extremes = extremesOf(bundles, turned)
+    const bending = plasticBending(bundles, turned, extremes)
     plastic[axis] = bending.modulus
     plastic.at[axis] = bending.offset
     widths[axis] = bending.width
     if (axis === 'x' || axis === 'y') across[axis] = bending.across
-    const gap = areas.length > 1 ? plasticGap(pieceSpans(region, turned, areas), tolerance) : null
+    const gap = areas.length > 1 ? plasticGap(pieceSpans(region, bundles, turned, areas), tolerance) : null
     if (!gap) continue
     const [from, to] = gap
     plastic.at[axis] = 0.5 * (from + to)

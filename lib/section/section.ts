@@ -1,13 +1,13 @@
 import { type Finding, makeFinding } from '../geometry/finding'
 import type { Region, Repair } from '../geometry/region'
 import { type Boundary, boundaryOf } from './boundary'
+import { type Bundles, boxOf, bundlesOf } from './bundles'
 import { changeByDisplacement, changeByRepairs } from './change'
 import { circumscribingCircle } from './circle'
 import { extremesOf } from './extremes'
 import { SECTION_FINDINGS } from './findings'
 import { type Frame, frameAt } from './frame'
 import { freeBending, plasticVector } from './freeBending'
-import { momentsOf } from './moments'
 import { type Causes, originsOf } from './origins'
 import { ownMoments } from './pieces'
 import { plasticFigures } from './plasticFigures'
@@ -34,18 +34,10 @@ export interface SectionResult {
 const PROMISE = 1e-9
 const ULPS = 10
 
-function localFrame({ edges }: Region): { frame: Frame; area: number } {
-  const box = extremesOf(edges, 0, edges.count, frameAt(edges.ends[0], edges.ends[1]))
-  const start = frameAt(edges.ends[0] + 0.5 * (box.minU + box.maxU), edges.ends[1] + 0.5 * (box.minV + box.maxV))
-  const { area, u, v } = momentsOf(edges, 0, edges.count, start)
-  return { frame: frameAt(start.x + u / area, start.y + v / area), area }
-}
-
 function massOf(area: number, { density, parts }: SectionInputs): number | undefined {
   if (!parts) return density === undefined ? undefined : area * density * 1e-6
-  return parts.reduce((sum, part) => {
-    const { edges } = part.region
-    return edges.count === 0 ? sum : sum + localFrame(part.region).area * part.density * 1e-6
+  return parts.reduce((sum, { region, density: own }) => {
+    return region.edges.count === 0 ? sum : sum + bundlesOf(region).moments.area * own * 1e-6
   }, 0)
 }
 
@@ -57,9 +49,11 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   const { edges } = region
   const nothing = { section: null, findings: [makeFinding(SECTION_FINDINGS, 'no-metal')] }
   if (edges.count === 0) return nothing
-  const { frame, area } = localFrame(region)
+  const bundles = bundlesOf(region)
+  const { moments } = bundles
+  const { area } = moments
   if (!(area > 0)) return nothing
-  const moments = momentsOf(edges, 0, edges.count, frame)
+  const frame = frameAt(bundles.x, bundles.y)
   const ix = moments.vv - moments.v ** 2 / area
   const iy = moments.uu - moments.u ** 2 / area
   const ixy = moments.uv - (moments.u * moments.v) / area
@@ -67,12 +61,10 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   const boundary = boundaryOf(region, frame.x, frame.y)
   const causes = causesOf(region, inputs, boundary, frame)
   const principal = principalOf(edges, frame, { ix, iy, ixy }, causes)
-  const local = extremesOf(edges, 0, edges.count, frame)
-  const whole = extremesOf(edges, 0, edges.count, frameAt(0, 0))
-  const { plastic, shape, widths, across, findings } = plasticFigures(region, frame, principal.theta, causes, area)
-  const elastic = elasticOf(region, frame, principal, local, ix, iy)
+  const { plastic, shape, widths, across, findings } = plasticFigures(region, bundles, principal.theta, causes)
+  const elastic = elasticOf(bundles, principal, ix, iy)
   const degrees = (radians: number) => (radians * 180) / Math.PI
-  const vectorAt = plasticVector(edges, frame.x, frame.y)
+  const vectorAt = plasticVector(bundles)
   const freeX = freeBending(vectorAt, 0, degrees(Math.atan2(ixy, iy)))
   const freeY = freeBending(vectorAt, -90, degrees(Math.atan2(ix, ixy)) - 90)
   const mass = massOf(area, inputs)
@@ -81,7 +73,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
     ...(mass === undefined ? {} : { mass }),
     perimeter: { outer: boundary.outer, inner: boundary.inner },
     pieces: region.pieces,
-    extents: { minX: whole.minU, minY: whole.minV, maxX: whole.maxU, maxY: whole.maxV },
+    extents: boxOf(bundles),
     centroid: { x: frame.x, y: frame.y },
     ix,
     iy,
@@ -105,7 +97,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
       restrainedMyForX: across.x,
       restrainedMxForY: 0 - across.y,
     },
-    circle: circumscribingCircle(edges, whole),
+    circle: circumscribingCircle(bundles),
     ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
     origin: {},
   }
@@ -123,20 +115,15 @@ function causesOf({ edges }: Region, { lastDigit, repairs }: SectionInputs, boun
   }
 }
 
-function elasticOf(
-  { edges }: Region,
-  { x, y }: Frame,
-  { theta, i1, i2 }: Principal,
-  local: { minU: number; maxU: number; minV: number; maxV: number },
-  ix: number,
-  iy: number,
-): Section['elastic'] {
-  const turned = theta === null ? null : extremesOf(edges, 0, edges.count, frameAt(x, y, theta))
+function elasticOf(bundles: Bundles, { theta, i1, i2 }: Principal, ix: number, iy: number): Section['elastic'] {
+  const { x, y } = bundles
+  const upright = extremesOf(bundles, frameAt(x, y))
+  const turned = theta === null ? null : extremesOf(bundles, frameAt(x, y, theta))
   return {
-    xTop: ix / local.maxV,
-    xBottom: ix / -local.minV,
-    yRight: iy / local.maxU,
-    yLeft: iy / -local.minU,
+    xTop: ix / upright.maxV,
+    xBottom: ix / -upright.minV,
+    yRight: iy / upright.maxU,
+    yLeft: iy / -upright.minU,
     axis1Left: turned && i1 / turned.maxV,
     axis1Right: turned && i1 / -turned.minV,
     axis2Right: turned && i2 / turned.maxU,

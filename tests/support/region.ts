@@ -80,7 +80,14 @@ export function ellipse(cx: number, cy: number, a: number, b: number, turn = 0, 
 /** A closed chain of Bézier pieces, each as control points [x, y, weight]. */
 export const beziers = (pieces: readonly (readonly (readonly [number, number, number])[])[], isHole = false): LoopSpec => ({
   push: (t) => {
-    for (const piece of pieces) pushBezier(t, piece.length - 1, piece.some(([, , w]) => w !== 1), piece.flat(), 0)
+    for (const piece of pieces)
+      pushBezier(
+        t,
+        piece.length - 1,
+        piece.some(([, , w]) => w !== 1),
+        piece.flat(),
+        0,
+      )
   },
   hole: isHole,
 })
