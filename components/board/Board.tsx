@@ -102,7 +102,6 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
       <p id={`${id}-keys`} className="sr-only">
         Arrow keys move the drawing, plus and minus zoom, F fits it, M measures, U places an axis of your own, Escape ends a tool.
       </p>
-      {tool.readout}
       <div className="flex flex-wrap items-stretch justify-between border-t border-hair">
         <Toolbar
           state={state}
@@ -113,8 +112,8 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         />
         {children}
       </div>
-      <div className="border-t border-line px-3 py-1.5">
-        <Legend model={model} shown={state.shown} names={writing.names} />
+      <div className="flex min-h-12 items-center border-t border-line px-3 py-1.5">
+        {tool.readout || <Legend model={model} shown={state.shown} names={writing.names} />}
       </div>
     </div>
   )

@@ -36,7 +36,7 @@ export function MeasureReadout({
     : []
   const plain = result && [result.distance, result.dx, result.dy, result.angle ?? ''].join('\t')
   return (
-    <div className="flex min-h-12 flex-wrap items-center gap-x-4 border-t border-hair px-3 py-1 text-small" aria-live="polite">
+    <div className="flex flex-wrap items-center gap-x-4 text-small" aria-live="polite">
       {parts.length + arc.length === 0 && (
         <span className="text-soft">Choose two points. Arrow keys move the pointer, Enter takes the point, Escape ends.</span>
       )}

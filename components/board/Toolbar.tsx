@@ -11,6 +11,8 @@ const LAYERS: { what: keyof Shown; word: string; shortcut: string }[] = [
   { what: 'circle', word: 'Circle', shortcut: 'C' },
 ]
 
+const Divider = () => <span className="mx-1 h-6 w-px bg-line max-md:hidden" aria-hidden="true" />
+
 interface Props {
   state: BoardState
   dispatch: Dispatch<BoardAction>
@@ -36,7 +38,7 @@ export function Toolbar({ state, dispatch, hasSection, zoom, fit }: Props) {
           {word}
         </Button>
       ))}
-      <span className="mx-1 h-6 w-px bg-line" aria-hidden="true" />
+      <Divider />
       <Button
         look="quiet"
         shortcut="M"
@@ -57,7 +59,7 @@ export function Toolbar({ state, dispatch, hasSection, zoom, fit }: Props) {
           Own axis
         </Button>
       )}
-      <span className="mx-1 h-6 w-px bg-line" aria-hidden="true" />
+      <Divider />
       <Button look="quiet" shortcut="-" title="Smaller" aria-label="Smaller" onClick={() => zoom(1 / 1.5)}>
         −
       </Button>

@@ -1,4 +1,4 @@
-import { type Annotations, along, emptyAnnotations, lineTo, moveTo, px, textLabel } from './annotation'
+import { type Annotations, along, clearance, emptyAnnotations, left, lineTo, moveTo, px, textLabel } from './annotation'
 import { type DrawingPoint, directionOnScreen, toScreen, type View } from './view'
 
 /** The arc from +x to axis 1 with its angle, `radius` px around the centroid. */
@@ -9,18 +9,17 @@ export function angleArc(view: View, centroid: DrawingPoint, degrees: number, ra
   const from = along(c, directionOnScreen(0), radius)
   const to = along(c, directionOnScreen(angle), radius)
   const turnsLeft = degrees > 0 ? 0 : 1
-  const middle = directionOnScreen(angle / 2)
-  const beyond = (side: number, r: number) => along(c, directionOnScreen(side), r)
-  const places = [
-    along(c, middle, radius + 30),
-    along(c, middle, radius - 26),
-    ...[0.18, -0.18, 0.3, -0.3, 0.45, -0.45].flatMap((turn) => [
-      beyond(angle + Math.sign(degrees) * turn, radius + 12),
-      beyond(-Math.sign(degrees) * Math.abs(turn), radius + 12),
-      beyond(angle + Math.sign(degrees) * turn, radius + 60),
-      beyond(-Math.sign(degrees) * Math.abs(turn), radius + 60),
-    ]),
-  ]
+  const turn = Math.sign(degrees)
+  const reaches = [radius - 12, radius - 34, radius + 34, radius + 60, radius / 2]
+  const places = (size: { width: number; height: number }) =>
+    [5, 12].flatMap((room) =>
+      reaches.flatMap((t) =>
+        [
+          { ray: directionOnScreen(angle), side: turn },
+          { ray: directionOnScreen(0), side: -turn },
+        ].map(({ ray, side }) => along(along(c, ray, t), left(ray), side * (clearance(size, left(ray)) + room))),
+      ),
+    )
   const steps = 6
   const points = Array.from({ length: steps + 1 }, (_, k) => along(c, directionOnScreen((k * angle) / steps), radius))
   return {
@@ -42,10 +41,15 @@ export function circleWithDiameter(
 ): Annotations {
   const c = toScreen(view, centre)
   const r = radius * view.scale
-  const left = { x: c.x - r, y: c.y }
+  const west = { x: c.x - r, y: c.y }
   const turns = Array.from({ length: 25 }, (_, k) => along(c, directionOnScreen((k * Math.PI) / 12), r))
-  const places = [0.25, 0.75, -0.25, -0.75, 0.15, 0.85].map((turn) => along(c, directionOnScreen(turn * Math.PI), r + 30))
-  const d = `${moveTo(left)}A${px(r)} ${px(r)} 0 1 0 ${px(c.x + r)} ${px(c.y)}A${px(r)} ${px(r)} 0 1 0 ${px(left.x)} ${px(left.y)}`
+  const places = (size: { width: number; height: number }) =>
+    [4, 12, 20, 28, 2, 6, 10, 14, 18, 22, 26, 30, 0, 8, 16, 24].flatMap((k) => {
+      const ray = directionOnScreen((k * Math.PI) / 16)
+      const away = clearance(size, ray) + 6
+      return [along(c, ray, r + away), along(c, ray, r - away)]
+    })
+  const d = `${moveTo(west)}A${px(r)} ${px(r)} 0 1 0 ${px(c.x + r)} ${px(c.y)}A${px(r)} ${px(r)} 0 1 0 ${px(west.x)} ${px(west.y)}`
   const cross = `${moveTo({ x: c.x - 5, y: c.y })}${lineTo({ x: c.x + 5, y: c.y })}${moveTo({ x: c.x, y: c.y - 5 })}${lineTo({ x: c.x, y: c.y + 5 })}`
   return {
     strokes: [

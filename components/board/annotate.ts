@@ -5,6 +5,7 @@ import { type AxisId, axesOf, plasticAxesOf } from './axesOf'
 import { drawAxis, type Frame } from './axisLines'
 import { extentDimensions } from './dimensionLines'
 import type { AxisNames } from './model'
+import type { Viewport } from './view'
 
 /** Which annotations a person has switched on. */
 export interface Shown {
@@ -25,7 +26,8 @@ const AXES: AxisId[] = ['x', 'y', 'axis1', 'axis2']
 export const isPrincipal = (id: AxisId) => id === 'axis1' || id === 'axis2'
 /** Principal axes run on beyond the centroid axes, so that both names have room. */
 export const beyondOf = (id: AxisId) => (isPrincipal(id) ? 58 : 36)
-const ANGLE_RADIUS = 84
+/** Radius of the angle's arc: less on a small board, px. */
+const angleRadius = ({ width, height }: Viewport) => Math.min(84, 0.2 * Math.min(width, height))
 
 function centroidAndPrincipal(section: Section, frame: Frame, names: AxisNames): Annotations[] {
   const axes = axesOf(section)
@@ -60,7 +62,9 @@ export function annotate(section: Section | null, frame: Frame, shown: Shown, { 
     ...(shown.axes ? centroidAndPrincipal(section, frame, names) : []),
     ...dimensions,
     ...(shown.plastic ? plasticXY(section, frame, names) : []),
-    shown.axes && theta !== null ? angleArc(frame.view, centroid, theta, ANGLE_RADIUS, angle(theta)) : emptyAnnotations(),
+    shown.axes && theta !== null
+      ? angleArc(frame.view, centroid, theta, angleRadius(frame.viewport), angle(theta))
+      : emptyAnnotations(),
     shown.circle
       ? circleWithDiameter(frame.view, circle, circle.radius, `Ø ${length(2 * circle.radius)}`, 'circle')
       : emptyAnnotations(),

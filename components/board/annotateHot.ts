@@ -2,11 +2,10 @@ import type { Shows } from '@/lib/section/figures/figure'
 import type { Section } from '@/lib/section/types'
 import { circleWithDiameter } from './angleArc'
 import { beyondOf, isPrincipal, type Shown, type Writing } from './annotate'
-import { type Annotations, emptyAnnotations, merge } from './annotation'
+import { type Annotations, along, emptyAnnotations, left, merge } from './annotation'
 import { type AxisId, axesOf, fibresOf, plasticAxesOf, shifted } from './axesOf'
-import { drawAxis, type Frame } from './axisLines'
+import { type AxisLine, drawAxis, type Frame, seenPart } from './axisLines'
 import { drawDimension, extentDimensions } from './dimensionLines'
-import { toScreen } from './view'
 
 /** The axes that stand out while a figure is pointed at. */
 const HOT_AXES: Partial<Record<Shows, AxisId[]>> = {
@@ -51,19 +50,25 @@ function fibre(section: Section, frame: Frame, hot: Shows, { length }: Writing):
   const found = fibresOf(section)[hot]
   const axis = found && axesOf(section)[found.axis]
   if (!found || !axis) return emptyAnnotations()
-  const line = shifted(axis, found.offset)
-  return merge([
-    drawAxis({ ...line, id: 'fibre', look: 'fibre', text: 'fibre', textLook: 'principal', beyond: 26, arrow: false }, frame),
-    drawDimension({
-      id: 'fibre-distance',
-      a: toScreen(frame.view, axis.through),
-      b: toScreen(frame.view, line.through),
-      off: 0,
-      text: length(Math.abs(found.offset)),
-      look: 'hot',
-      textLook: 'principal',
-    }),
-  ])
+  const line: AxisLine = {
+    ...shifted(axis, found.offset),
+    id: 'fibre',
+    look: 'fibre',
+    text: 'fibre',
+    textLook: 'principal',
+    beyond: 26,
+    arrow: false,
+  }
+  return merge([drawAxis(line, frame), fibreDistance(line, found.offset, frame, length)])
+}
+
+/** The distance from the axis to its fibre, measured where both lines end, clear of the metal. */
+function fibreDistance(line: AxisLine, offset: number, frame: Frame, length: Writing['length']): Annotations {
+  const seen = seenPart(line, frame)
+  if (!seen) return emptyAnnotations()
+  const b = along(seen.p, seen.d, seen.from + 14)
+  const a = along(b, left(seen.d), -offset * frame.view.scale)
+  return drawDimension({ id: 'fibre-distance', a, b, off: 0, text: length(Math.abs(offset)), look: 'hot', textLook: 'principal' })
 }
 
 /** The direction of the neutral axis of free plastic bending, drawn through the centroid. */

@@ -48,6 +48,10 @@ export const along = (p: ScreenPoint, d: ScreenPoint, t: number): ScreenPoint =>
 /** The direction turned a quarter to the left as one sees it on the board. */
 export const left = (d: ScreenPoint): ScreenPoint => ({ x: d.y, y: -d.x })
 
+/** How far a label must stand off so that its box just clears a line at right angles to `d`, px. */
+export const clearance = ({ width, height }: { width: number; height: number }, d: ScreenPoint) =>
+  (Math.abs(d.x) * width + Math.abs(d.y) * height) / 2
+
 /** A filled arrowhead whose tip is at `tip`, pointing along `d`. */
 export function arrowhead(tip: ScreenPoint, d: ScreenPoint, length = 10, half = 2.4): string {
   const foot = along(tip, d, -length)
@@ -64,14 +68,15 @@ interface TextOptions {
   id: string
   text: string
   look: TextLook
-  places: ScreenPoint[]
+  /** where it may stand, given how large it is */
+  places: (size: { width: number; height: number }) => ScreenPoint[]
   size?: number
   mono?: boolean
   turned?: boolean
 }
 
 export function textLabel({ id, text, look, places, size = 13, mono = false, turned = false }: TextOptions): TextLabel {
-  const width = textWidth(text, size, mono)
-  const height = size
-  return { id, text, look, places, size, mono, turned, width: turned ? height : width, height: turned ? width : height }
+  const along = textWidth(text, size, mono)
+  const box = turned ? { width: size, height: along } : { width: along, height: size }
+  return { id, text, look, size, mono, turned, places: places(box), ...box }
 }

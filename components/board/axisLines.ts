@@ -2,6 +2,7 @@ import type { Point } from '@/lib/geometry/edges'
 import {
   type Annotations,
   along,
+  clearance,
   emptyAnnotations,
   type LineLook,
   left,
@@ -88,24 +89,34 @@ function rays(p: ScreenPoint, d: ScreenPoint, from: number, to: number): string 
   return forth + back
 }
 
-/** A chain line with its name at the end, and the places the name may step aside to. */
-export function drawAxis(line: AxisLine, frame: Frame): Annotations {
+/** The part of an axis that the board shows: px from its point, and its ends. */
+export function seenPart(line: AxisLine, frame: Frame) {
   const p = toScreen(frame.view, line.through)
   const d = directionOnScreen(line.angle)
   const wanted = reach(line, frame)
   const seen = clipRay(p, d, wanted.from, wanted.to, frame.viewport)
+  return seen && { p, d, ...seen }
+}
+
+/** A chain line with its name at the end, and the places the name may step aside to. */
+export function drawAxis(line: AxisLine, frame: Frame): Annotations {
+  const seen = seenPart(line, frame)
   if (!seen) return emptyAnnotations()
+  const { p, d } = seen
   const start = along(p, d, seen.from)
   const end = along(p, d, seen.to)
   const n = left(d)
-  const beside = (t: number, side: number) => along(along(end, d, t), n, side)
-  const places = [
-    along(end, d, 13),
-    ...[-8, -30, -60, -100].flatMap((t) => [beside(t, 13), beside(t, -13)]),
-    along(start, d, -13),
-    along(along(start, d, 16), n, 13),
-    along(along(start, d, 16), n, -13),
-  ]
+  const places = (size: { width: number; height: number }) => {
+    const ahead = clearance(size, d)
+    const aside = clearance(size, n) + 6
+    const beside = (p0: ScreenPoint, t: number) => [along(along(p0, d, t), n, aside), along(along(p0, d, t), n, -aside)]
+    return [
+      along(end, d, ahead + 7),
+      ...[-ahead, -ahead - 24, -ahead - 60, -ahead - 110].flatMap((t) => beside(end, t)),
+      along(start, d, -ahead - 7),
+      ...[ahead, ahead + 24, ahead + 60].flatMap((t) => beside(start, t)),
+    ]
+  }
   return {
     strokes: [
       { id: line.id, look: line.look, d: rays(p, d, seen.from, seen.to) },

@@ -2,6 +2,7 @@ import {
   type Annotations,
   along,
   arrowhead,
+  clearance,
   emptyAnnotations,
   type LineLook,
   left,
@@ -48,19 +49,13 @@ export function drawDimension({ id, a, b, off, text, look = 'dimension', textLoo
   const heads = short
     ? arrowhead(from, d) + arrowhead(to, { x: -d.x, y: -d.y })
     : arrowhead(from, { x: -d.x, y: -d.y }) + arrowhead(to, d)
-  const upright = Math.abs(d.y) > Math.abs(d.x)
-  const places = [0.5, 0.32, 0.68, 0.2, 0.8].flatMap((t) => {
-    const on = along(from, d, t * length)
-    return upright
-      ? [
-          { x: on.x - 9, y: on.y },
-          { x: on.x + 9, y: on.y },
-        ]
-      : [
-          { x: on.x, y: on.y - 10 },
-          { x: on.x, y: on.y + 10 },
-        ]
-  })
+  const upright = Math.abs(d.x) < 0.26
+  const places = (size: { width: number; height: number }) =>
+    [0.5, 0.32, 0.68, 0.2, 0.8].flatMap((t) => {
+      const away = clearance(size, n) + 4
+      const above = upright || n.y > 0 ? -1 : 1
+      return [away, -away].map((shift) => along(along(from, d, t * length), n, (upright ? side : above) * shift))
+    })
   return {
     strokes: [
       { id, look, d: `${extension(a)}${extension(b)}${moveTo(start)}${lineTo(end)}` },

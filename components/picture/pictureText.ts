@@ -19,10 +19,13 @@ export function words({ face, text, x, y, size, fill, anchor = 'start', transfor
   return element('path', { fill, transform, d: face.path(text, from, y, size) })
 }
 
+/** No line of the picture holds more characters than this. */
+const LONGEST = 200
+
 /** A text cut with an ellipsis where it is wider than its place, px. */
 export function fitting(face: Typeface, text: string, size: number, room: number): string {
-  if (face.width(text, size) <= room) return text
-  const short = [...text].slice(0, 400)
+  const short = [...text].slice(0, LONGEST)
+  if (short.length < LONGEST && face.width(text, size) <= room) return text
   while (short.length > 0 && face.width(`${short.join('')}…`, size) > room) short.pop()
   return `${short.join('')}…`
 }

@@ -1,4 +1,4 @@
-import { type Font, parse } from 'opentype.js'
+import { type Font, type PathCommand, parse } from 'opentype.js'
 
 /** Text as outlines: the same on every machine, and nothing in it can be read as markup. */
 export interface Typeface {
@@ -11,6 +11,22 @@ export interface Typeface {
 interface Run {
   font: Font
   text: string
+}
+
+const round = (value: number) => String(Math.round(value * 100) / 100)
+
+/** The package's own writer gives exponents in places, which not every reader takes. */
+function written(command: PathCommand): string {
+  switch (command.type) {
+    case 'Z':
+      return 'Z'
+    case 'Q':
+      return `Q${[command.x1, command.y1, command.x, command.y].map(round).join(' ')}`
+    case 'C':
+      return `C${[command.x1, command.y1, command.x2, command.y2, command.x, command.y].map(round).join(' ')}`
+    default:
+      return `${command.type}${round(command.x)} ${round(command.y)}`
+  }
 }
 
 /** Cuts a text into runs of one font each; a character that no font has shows the first font's empty box. */
@@ -36,7 +52,7 @@ export function typefaceOf(files: ArrayBuffer[]): Typeface {
       let at = x
       let data = ''
       for (const run of runsOf(fonts, text)) {
-        data += run.font.getPath(run.text, at, y, size).toPathData(2)
+        data += run.font.getPath(run.text, at, y, size).commands.map(written).join('')
         at += run.font.getAdvanceWidth(run.text, size)
       }
       return data

@@ -1,0 +1,42 @@
+import type { OriginKind } from '@/lib/section/types'
+
+const WORDS: Record<OriginKind, string> = {
+  exact: 'exact: closed form on every edge',
+  iterated: 'iterated until rounding stops it',
+  element: 'bracketed by finite elements',
+}
+const SHAPES: Record<OriginKind, string> = {
+  exact: 'bg-soft border-[1.5px]',
+  iterated: 'rounded-full border-[1.5px]',
+  element: 'border-x-[1.5px]',
+}
+
+/** How a figure was found: square exact, ring iterated, two bars bracketed; with its word. */
+export function OriginMark({ kind }: { kind: OriginKind }) {
+  return (
+    <span
+      role="img"
+      aria-label={WORDS[kind]}
+      title={WORDS[kind]}
+      className={`inline-block size-2.5 border-soft ${SHAPES[kind]}`}
+    />
+  )
+}
+
+export function OriginLegend() {
+  const words: [OriginKind, string][] = [
+    ['exact', 'exact'],
+    ['iterated', 'iterated'],
+    ['element', 'bracketed'],
+  ]
+  return (
+    <ul className="flex flex-wrap gap-x-5 text-tiny text-soft" aria-label="How figures were found">
+      {words.map(([kind, word]) => (
+        <li key={kind} className="flex items-center gap-1.5">
+          <span aria-hidden="true" className={`inline-block size-2.5 border-soft ${SHAPES[kind]}`} />
+          {word}
+        </li>
+      ))}
+    </ul>
+  )
+}

@@ -1,0 +1,69 @@
+'use client'
+import type { HoverStore } from '@/components/board/hover'
+import type { TeamSettings } from '@/lib/api/schemas/people'
+import type { Figure, FigureGroup } from '@/lib/section/figures/figure'
+import { FIGURES } from '@/lib/section/figures/index'
+import { axisNames } from '@/lib/section/naming'
+import type { Section } from '@/lib/section/types'
+import { FigureRow } from './FigureRow'
+import { OriginLegend } from './OriginMark'
+
+type Names = ReturnType<typeof axisNames>
+
+const GROUPS: { group: FigureGroup; title: (names: Names) => string }[] = [
+  { group: 'size', title: () => 'Size' },
+  { group: 'centroid', title: () => 'Centroid, as drawn' },
+  { group: 'bending', title: ({ x, y }) => `Bending about ${x} and ${y}` },
+  { group: 'principal', title: ({ axis1, axis2 }) => `Principal axes ${axis1} and ${axis2}` },
+  { group: 'plastic', title: () => 'Plastic bending' },
+]
+
+interface Row {
+  figure: Figure
+  value: number
+}
+
+function rowsOf(section: Section, group: FigureGroup): Row[] {
+  return FIGURES.filter((figure) => figure.group === group).flatMap((figure) => {
+    const value = figure.value(section)
+    return value === null || value === undefined ? [] : [{ figure, value }]
+  })
+}
+
+/** Every figure of the section, from the one table of figures, in groups. */
+export function SectionSheet({ section, display, hover }: { section: Section; display: TeamSettings; hover: HoverStore }) {
+  const names = axisNames(display.axes)
+  return (
+    <>
+      {GROUPS.map(({ group, title }) => (
+        <section key={group} className="border-hair border-t py-2">
+          <table className="w-full border-collapse">
+            <caption className="pb-1 text-left font-semibold text-small text-soft">{title(names)}</caption>
+            <tbody>
+              {rowsOf(section, group).map(({ figure, value }) => (
+                <FigureRow
+                  key={figure.key}
+                  figure={figure}
+                  value={value}
+                  origin={section.origin[figure.key]}
+                  display={display}
+                  hover={hover}
+                />
+              ))}
+            </tbody>
+          </table>
+          {group === 'size' && section.mass === undefined && (
+            <p className="text-small text-soft">No mass: no material was chosen for this revision.</p>
+          )}
+          {group === 'principal' && section.theta === null && (
+            <p className="text-small text-soft">
+              Every axis through the centroid is principal: the two second moments agree within what the drawing's digits tell, so
+              there is no angle, and no moduli belong to axes {names.axis1} and {names.axis2} alone.
+            </p>
+          )}
+        </section>
+      ))}
+      <OriginLegend />
+    </>
+  )
+}
