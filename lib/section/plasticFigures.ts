@@ -1,11 +1,12 @@
 import { type Finding, makeFinding } from '../geometry/finding'
 import type { Region } from '../geometry/region'
+import { bendingFrame } from './bendingFrame'
 import type { Bundles } from './bundles'
 import { type Extremes, extremesOf } from './extremes'
 import type { PlasticWidths } from './figures/figure'
-import { BENDING_AXES, type BendingAxis } from './figures/spread'
+import { BENDING_AXES } from './figures/spread'
 import { SECTION_FINDINGS } from './findings'
-import { type Frame, frameAt } from './frame'
+import { frameAt } from './frame'
 import type { Causes } from './origins'
 import { piecesMoments, pieceSpans } from './pieces'
 import { plasticBending } from './plastic'
@@ -19,12 +20,6 @@ export interface PlasticFigures {
   across: { x: number; y: number }
   shape: (elastic: Section['elastic']) => Section['plasticShape']
   findings: Finding[]
-}
-
-/** Frame in which v runs the way the offset of the axis is counted: x along +y, y along +x, 1 along axis 2, 2 along axis 1. */
-function bendingFrame({ x, y }: Bundles, theta: number | null, axis: BendingAxis): Frame {
-  const angle = { x: 0, y: -90, axis1: theta ?? 0, axis2: (theta ?? 0) - 90 }[axis]
-  return frameAt(x, y, angle)
 }
 
 const lesser = (a: number | null, b: number | null): number | null => (a === null || b === null ? null : Math.min(a, b))
