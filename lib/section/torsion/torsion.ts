@@ -1,0 +1,197 @@
+import type { Region } from '../../geometry/region'
+import { assemble, eachTriangle, tied } from './assemble'
+import { factor, solve } from './cholesky'
+import { dissect } from './dissection'
+import { type Unknowns, unknownsOf } from './elements'
+import { loopArea } from '../../geometry/edgeArea'
+import { localRegion } from './localRegion'
+import { type Mesh, meshOf, workpieceOf } from './mesh'
+import { refine } from './refine'
+import { type Warping, warpingOf } from './warping'
+
+/** Torsion, shear and warping of one connected region; mm⁴, mm, mm⁶. */
+export interface Torsion extends Warping {
+  /** torsion constant: lower bound (stress function) and upper bound (warping function) over all meshes, rounded outwards */
+  lower: number
+  upper: number
+  /** greatest change of each estimate from the mesh before to the last one; null with one mesh only */
+  change: Record<keyof Warping, number> | null
+  unknowns: number
+  meshes: number
+}
+
+export interface TorsionOptions {
+  /** wanted (upper − lower)/upper; 0.002 unless said */
+  bracket?: number
+  /** no mesh larger than this is made; 70,000 unless said */
+  unknowns?: number
+}
+
+/**
+ * Saint-Venant's torsion constant between two bounds. Prandtl's stress function (0 on the outer rim, a constant on each
+ * hole) bounds J from below, the warping function from above (Pólya & Szegő, Isoperimetric Inequalities in Mathematical
+ * Physics, 1951, from memory); both on the true domain, energies by quadrature. Their local difference says where to refine
+ * (Prager & Synge, Q. Appl. Math. 5 (1947) 241–269, from memory). Shear centre, warping constant and shear compliances are
+ * estimates: two meshes at least, with the change between the last two. The region must be one piece, in mm; null where no
+ * mesh of it can be solved.
+ */
+export function torsionOf(region: Region, { bracket = 0.002, unknowns: cap = 70_000 }: TorsionOptions = {}): Torsion | null {
+  const { local, size, origin } = localRegion(region)
+  const work = workpieceOf(local, size)
+  let best: Torsion | null = null
+  for (let meshes = 1; meshes <= 16; meshes++) {
+    const mesh = meshOf(work)
+    const unknowns = unknownsOf(mesh)
+    const solution = solveOn(local, mesh, unknowns)
+    if (!solution) return best
+    best = better(best, solution, origin, unknowns.count, meshes)
+    const done = meshes > 1 && best.upper - best.lower <= bracket * best.upper
+    if (done || unknowns.count * 2 > cap) return best
+    refine(work, mesh, solution.error)
+  }
+  return best
+}
+
+function better(
+  before: Torsion | null,
+  { lower, upper, warping }: Solution,
+  origin: { x: number; y: number },
+  unknowns: number,
+  meshes: number,
+): Torsion {
+  const rounding = 1e-12 * upper
+  const now: Warping = { ...warping, x: warping.x + origin.x, y: warping.y + origin.y }
+  const change = before && {
+    x: Math.abs(now.x - before.x),
+    y: Math.abs(now.y - before.y),
+    warping: Math.abs(now.warping - before.warping),
+    shearXX: Math.abs(now.shearXX - before.shearXX),
+    shearYY: Math.abs(now.shearYY - before.shearYY),
+    shearXY: Math.abs(now.shearXY - before.shearXY),
+  }
+  return {
+    ...now,
+    change,
+    unknowns,
+    meshes,
+    lower: Math.max(before?.lower ?? 0, lower - rounding),
+    upper: Math.min(before?.upper ?? Number.POSITIVE_INFINITY, upper + rounding),
+  }
+}
+
+interface Solution {
+  warping: Warping
+  lower: number
+  upper: number
+  /** ∫|τφ − τω|² of each triangle */
+  error: Float64Array
+}
+
+function solveOn(region: Region, mesh: Mesh, unknowns: Unknowns): Solution | null {
+  const { stiffness, area, twist } = assemble(region, mesh, unknowns)
+  const { to, count, holes } = stressUnknowns(region, mesh, unknowns)
+  const side = new Float64Array(count)
+  to.forEach((k, i) => {
+    if (k >= 0) side[k] += 2 * area[i]
+  })
+  for (const [loop, k] of holes)
+    side[k] += 2 * Math.abs(loopArea(region.edges, region.loopStart[loop], region.loopStart[loop + 1]))
+  const reduced = tied(stiffness, to, count)
+  const [px, py] = [new Float64Array(count), new Float64Array(count)]
+  to.forEach((k, i) => {
+    if (k < 0) return
+    px[k] = unknowns.x[i]
+    py[k] = unknowns.y[i]
+  })
+  const stressFactor = factor(reduced, dissect(reduced, px, py, new Set(holes.values())))
+  // the warping function is free up to a constant: one unknown is held
+  const pinned = Int32Array.from({ length: unknowns.count }, (_, i) => i - 1)
+  const free = tied(stiffness, pinned, unknowns.count - 1)
+  const warpingFactor = factor(free, dissect(free, unknowns.x.subarray(1), unknowns.y.subarray(1), new Set()))
+  if (!stressFactor || !warpingFactor) return null
+  const phi = solve(stressFactor, side)
+  const omega = solve(warpingFactor, twist.subarray(1))
+  const both = bounds(region, mesh, unknowns, {
+    phi: (i) => (to[i] < 0 ? 0 : phi[to[i]]),
+    omega: (i) => (i === 0 ? 0 : omega[i - 1]),
+    load: side.reduce((sum, value, k) => sum + value * phi[k], 0),
+  })
+  return { ...both, warping: warpingOf(region, mesh, unknowns, warpingFactor, omega) }
+}
+
+/** Rim unknowns held (outer) or tied to their hole's one unknown. */
+function stressUnknowns(
+  region: Region,
+  mesh: Mesh,
+  { count, dof }: Unknowns,
+): { to: Int32Array; count: number; holes: Map<number, number> } {
+  const FREE = -2
+  const to = new Int32Array(count).fill(FREE)
+  const rimOf = new Int32Array(count).fill(-1)
+  mesh.piece.forEach((k, at) => {
+    if (k < 0) return
+    const t = Math.floor(at / 3)
+    const i = at % 3
+    for (const d of [dof[6 * t + i], dof[6 * t + ((i + 1) % 3)], dof[6 * t + 3 + i]]) rimOf[d] = mesh.boundary.loop[k]
+  })
+  const holes = new Map<number, number>()
+  let next = 0
+  for (let i = 0; i < count; i++) {
+    const loop = rimOf[i]
+    if (loop < 0) to[i] = next++
+    else if (!region.hole[loop]) to[i] = -1
+  }
+  for (let i = 0; i < count; i++) {
+    if (to[i] !== FREE) continue
+    let k = holes.get(rimOf[i])
+    if (k === undefined) {
+      k = next++
+      holes.set(rimOf[i], k)
+    }
+    to[i] = k
+  }
+  return { to, count: next, holes }
+}
+
+interface Fields {
+  phi: (unknown: number) => number
+  omega: (unknown: number) => number
+  /** 2∫φ, holes filled */
+  load: number
+}
+
+/** Both energies, and where they differ. */
+function bounds(region: Region, mesh: Mesh, { dof }: Unknowns, { phi, omega, load }: Fields): Omit<Solution, 'warping'> {
+  const error = new Float64Array(mesh.corner.length / 3)
+  let upper = 0
+  const [p, w] = [new Float64Array(6), new Float64Array(6)]
+  // the stress function at its best scale: 2∫φ / ∫|∇φ|²
+  let energy = 0
+  const each = (visit: (t: number, weight: number, sx: number, sy: number, tx: number, ty: number) => void) =>
+    eachTriangle(region, mesh, (t, { n, x, y, weight, shape }) => {
+      for (let i = 0; i < 6; i++) {
+        p[i] = phi(dof[6 * t + i])
+        w[i] = omega(dof[6 * t + i])
+      }
+      for (let q = 0; q < n; q++) {
+        let [px, py, wx, wy] = [0, 0, 0, 0]
+        for (let i = 0; i < 6; i++) {
+          const k = 18 * q + 3 * i
+          px += p[i] * shape[k + 1]
+          py += p[i] * shape[k + 2]
+          wx += w[i] * shape[k + 1]
+          wy += w[i] * shape[k + 2]
+        }
+        visit(t, weight[q], py, -px, wx - y[q], wy + x[q])
+      }
+    })
+  each((_, weight, sx, sy, tx, ty) => {
+    energy += weight * (sx * sx + sy * sy)
+    upper += weight * (tx * tx + ty * ty)
+  })
+  const scale = load / energy
+  each((t, weight, sx, sy, tx, ty) => {
+    error[t] += weight * ((scale * sx - tx) ** 2 + (scale * sy - ty) ** 2)
+  })
+  return { lower: (load * load) / energy, upper, error }
+}
