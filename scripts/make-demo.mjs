@@ -15,8 +15,8 @@ const line = (layer, x0, y0, x1, y1, extra = []) =>
   entity('LINE', layer, 'AcDbLine', ...extra, [10, x0], [20, y0], [11, x1], [21, y1])
 const arc = (layer, x, y, r, from, to) => entity('ARC', layer, 'AcDbCircle', [10, x], [20, y], [40, r], [100, 'AcDbArc'], [50, from], [51, to])
 const circle = (layer, x, y, r) => entity('CIRCLE', layer, 'AcDbCircle', [10, x], [20, y], [40, r])
-const ellipse = (layer, x, y, mx, my, ratio, from = 0, to = 2 * Math.PI) =>
-  entity('ELLIPSE', layer, 'AcDbEllipse', [10, x], [20, y], [11, mx], [21, my], [40, ratio], [41, from], [42, to])
+const ellipse = (layer, x, y, mx, my, ratio) =>
+  entity('ELLIPSE', layer, 'AcDbEllipse', [10, x], [20, y], [11, mx], [21, my], [40, ratio], [41, '0.0'], [42, String(2 * Math.PI)])
 const polyline = (layer, vertices) =>
   entity('LWPOLYLINE', layer, 'AcDbPolyline', [90, vertices.length], [70, 1], ...vertices.flatMap(([x, y, bulge]) => [[10, x], [20, y], ...(bulge ? [[42, bulge]] : [])]))
 const spline = (layer, degree, knots, control) =>
@@ -99,7 +99,7 @@ const turned = angle.map(([x, y, b]) => [x * Math.cos(0.3) - y * Math.sin(0.3), 
 drawing('slab-angle', polyline('PROFILE', turned))
 
 // Footbridge handrail: an elliptical tube with a flat groove for the light strip, arcs and lines between.
-drawing('handrail', ellipse('PROFILE', 0, 0, 30, 0, 0.7) + ellipse('PROFILE', 0, 0, 26.5, 0, 17.5 / 26.5) + dimension(-30, 0, 30, 0, 30, -30, 0, 60))
+drawing('handrail', ellipse('PROFILE', 0, 0, 30, 0, 0.7) + ellipse('PROFILE', 0, 0, 26.5, 0, 0.66) + dimension(-30, 0, 30, 0, 30, -30, 0, 60))
 
 // Cover cap: an outer spline closed by lines, as styling tools draw it.
 drawing('cover-cap', spline('PROFILE', 3, [0, 0, 0, 0, 1, 2, 2, 2, 2], [[0, 0], [2, 14], [25, 22], [48, 14], [50, 0]])
