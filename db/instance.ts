@@ -17,7 +17,7 @@ export function openProcessDatabase(file: string, maxPages?: number): Database {
 }
 
 /** Tests give the process a database of their own. */
-export function useDatabase(database: Database | undefined): void {
+export function setDatabase(database: Database | undefined): void {
   holder.sectionwrightDatabase = database
 }
 

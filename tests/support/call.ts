@@ -2,7 +2,7 @@ import { mkdtempSync } from 'node:fs'
 import os from 'node:os'
 import path from 'node:path'
 import { z } from 'zod'
-import { useDatabase } from '@/db/instance'
+import { setDatabase } from '@/db/instance'
 import type { Handler } from '@/lib/api/route'
 import { freshDatabase } from './database'
 
@@ -14,7 +14,7 @@ const ORIGIN = 'http://localhost:3000'
 /** A fresh database that the routes use. */
 export async function givenDatabase() {
   const database = await freshDatabase()
-  useDatabase(database)
+  setDatabase(database)
   return database
 }
 
@@ -28,7 +28,7 @@ interface Call {
   headers?: Record<string, string>
   version?: number
 }
-const Body = z.record(z.string(), z.any())
+const Body = z.record(z.string(), z.unknown())
 
 /** Calls a route as a browser of our own pages would. */
 export async function call(

@@ -3,7 +3,7 @@ import { writeBlob } from '@/db/blobs'
 import type { Database } from '@/db/client'
 import { linkFile } from '@/db/files'
 import { newId } from '@/db/id'
-import { useDatabase } from '@/db/instance'
+import { setDatabase } from '@/db/instance'
 import { openJob } from '@/db/jobs'
 import { addProfile } from '@/db/profiles'
 import { addRevision } from '@/db/revisions'
@@ -24,7 +24,7 @@ export async function givenRevision(
   profileId: string,
   { b = 20, h = 60, bytes = Buffer.from('dxf') } = {},
 ) {
-  useDatabase(database)
+  setDatabase(database)
   const id = newId()
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   await writeBlob(`${id}-file`, [bytes])
