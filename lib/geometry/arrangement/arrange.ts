@@ -72,7 +72,12 @@ export function arrange(
 }
 
 function middle(edges: EdgeTable): [number, number] {
-  let [minX, minY, maxX, maxY] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY]
+  let [minX, minY, maxX, maxY] = [
+    Number.POSITIVE_INFINITY,
+    Number.POSITIVE_INFINITY,
+    Number.NEGATIVE_INFINITY,
+    Number.NEGATIVE_INFINITY,
+  ]
   for (let k = 0; k < 4 * edges.count; k += 2) {
     minX = Math.min(minX, edges.ends[k])
     maxX = Math.max(maxX, edges.ends[k])
@@ -118,7 +123,12 @@ function split(pieces: Pieces, local: Vertices, tolerance: number, most: number)
   const index = new Flatbush(count)
   for (let i = 0; i < count; i++) {
     const [x0, y0, x1, y1] = [ends[4 * i], ends[4 * i + 1], ends[4 * i + 2], ends[4 * i + 3]]
-    index.add(Math.min(x0, x1) - tolerance, Math.min(y0, y1) - tolerance, Math.max(x0, x1) + tolerance, Math.max(y0, y1) + tolerance)
+    index.add(
+      Math.min(x0, x1) - tolerance,
+      Math.min(y0, y1) - tolerance,
+      Math.max(x0, x1) + tolerance,
+      Math.max(y0, y1) + tolerance,
+    )
   }
   index.finish()
   let meetings = 0

@@ -69,5 +69,9 @@ function joined(shared: Meeting[], tolerance: number): Meeting[] {
 
 function covers(s: Meeting, m: Meeting, tolerance: number): boolean {
   if (!s.to) return false
-  return (m.te >= Math.min(s.te, s.to.te) && m.te <= Math.max(s.te, s.to.te)) || near(s.at, m.at, tolerance) || near(s.to.at, m.at, tolerance)
+  return (
+    (m.te >= Math.min(s.te, s.to.te) && m.te <= Math.max(s.te, s.to.te)) ||
+    near(s.at, m.at, tolerance) ||
+    near(s.to.at, m.at, tolerance)
+  )
 }

@@ -29,9 +29,7 @@ export function pushStretch(
     case ARC:
       return pushArc(to, x0, y0, x1, y1, s[k], s[k + 1], s[k + 2], ta, tb - ta, source)
     case ELLIPSE:
-      return pushEllipse(
-        to, x0, y0, x1, y1, s[k], s[k + 1], s[k + 2], s[k + 3], s[k + 4], s[k + 5], ta, tb - ta, source,
-      )
+      return pushEllipse(to, x0, y0, x1, y1, s[k], s[k + 1], s[k + 2], s[k + 3], s[k + 4], s[k + 5], ta, tb - ta, source)
     case BEZIER: {
       const i = pushBezier(to, s[k], s[k + 1] === 1, bezierStretch(s, k, ta, tb), source)
       setEnds(to, i, x0, y0, x1, y1)

@@ -33,8 +33,7 @@ export function meetBySubdivision(pieces: Pieces, i: number, j: number, toleranc
   const { table, edge, t0, t1, ends } = pieces
   const touching: [number, number][] = []
   const crossings: number[] = []
-  const whole = (n: number) =>
-    stretch(pieces, n, t0[n], t1[n], ends[4 * n], ends[4 * n + 1], ends[4 * n + 2], ends[4 * n + 3])
+  const whole = (n: number) => stretch(pieces, n, t0[n], t1[n], ends[4 * n], ends[4 * n + 1], ends[4 * n + 2], ends[4 * n + 3])
   const stack: [Stretch, Stretch][] = [[whole(i), whole(j)]]
   let nodes = 0
   while (stack.length > 0 && nodes++ < MOST_NODES) {
@@ -67,7 +66,8 @@ export function meetBySubdivision(pieces: Pieces, i: number, j: number, toleranc
     pointAt(table, edge[i], t, p)
     const { 0: x, 1: y } = p
     const tj = footOn(pieces, j, x, y, q)
-    if (Math.hypot(q[0] - x, q[1] - y) <= tolerance && inside(t, t0[i], t1[i]) && inside(tj, t0[j], t1[j])) meet(i, t, j, tj, x, y)
+    if (Math.hypot(q[0] - x, q[1] - y) <= tolerance && inside(t, t0[i], t1[i]) && inside(tj, t0[j], t1[j]))
+      meet(i, t, j, tj, x, y)
   }
 }
 
@@ -101,8 +101,10 @@ function halves(n: Pieces, i: number, a: Stretch): [Stretch, Stretch] {
 
 /** Whether boxes, or strips round either chord, are further apart than the tolerance. */
 function apart(a: Stretch, b: Stretch, tolerance: number): boolean {
-  if (Math.min(a.x0, a.x1) > Math.max(b.x0, b.x1) + tolerance || Math.min(b.x0, b.x1) > Math.max(a.x0, a.x1) + tolerance) return true
-  if (Math.min(a.y0, a.y1) > Math.max(b.y0, b.y1) + tolerance || Math.min(b.y0, b.y1) > Math.max(a.y0, a.y1) + tolerance) return true
+  if (Math.min(a.x0, a.x1) > Math.max(b.x0, b.x1) + tolerance || Math.min(b.x0, b.x1) > Math.max(a.x0, a.x1) + tolerance)
+    return true
+  if (Math.min(a.y0, a.y1) > Math.max(b.y0, b.y1) + tolerance || Math.min(b.y0, b.y1) > Math.max(a.y0, a.y1) + tolerance)
+    return true
   const room = a.bow + b.bow + tolerance
   return offStrip(a, b, room) || offStrip(b, a, room)
 }

@@ -11,7 +11,11 @@ export function arrangementOf(shapes: Shape[], relative = 1e-9): Arrangement {
 }
 
 /** The region where the rule holds, with the vertices at which its boundary did not close. */
-export function where(a: Arrangement, rule: (held: boolean[]) => boolean, owners = 2): { loops: Loops; area: number; faults: number } {
+export function where(
+  a: Arrangement,
+  rule: (held: boolean[]) => boolean,
+  owners = 2,
+): { loops: Loops; area: number; faults: number } {
   const inside = a.sets.map((set) => rule(Array.from({ length: owners }, (_, k) => set.includes(k))))
   const loops = noLoops()
   const faults = joinLoops(a, (u) => Number(inside[a.left[u]]) - Number(inside[a.right[u]]), loops)

@@ -76,7 +76,14 @@ export function pairOf(kind: Kind, next: () => number): [Shape, Shape] {
     case 'nested':
       return [rounded(0, 0, 30, 24, between(1, 11)), circle(between(10, 20), between(10, 14), between(1, 8))]
     case 'touching, turned and moved': {
-      const touching: Kind[] = ['shared edge', 'tangent outside', 'tangent inside', 'coincident arcs', 'vertex touch', 'identical']
+      const touching: Kind[] = [
+        'shared edge',
+        'tangent outside',
+        'tangent inside',
+        'coincident arcs',
+        'vertex touch',
+        'identical',
+      ]
       const [a, b] = pairOf(touching[whole(0, 5)], next)
       const by = turnAndMove(between(0, 6.3), between(-1000, 1000), between(-1000, 1000))
       return [mapped(a, by), mapped(b, by)]

@@ -76,7 +76,7 @@ export function mapped(shape: Shape, [a, b, c, d, e, f]: Affine): Shape {
       }
       case ELLIPSE:
         return { ...edge, ...ends, centre: p(edge.centre), u: v(edge.u), v: v(edge.v) }
-      case BEZIER:
+      default:
         return { ...edge, ...ends, control: edge.control.map(p) }
     }
   })
@@ -99,7 +99,14 @@ export function asBeziers(shape: Shape, rational: boolean): Shape {
       const a = joints[i]
       const t = start + i * step
       if (rational)
-        return { kind: BEZIER, a, b, source, control: [a, at(t + step / 2, 1 / Math.cos(step / 2)), b], weights: [1, Math.cos(step / 2), 1] }
+        return {
+          kind: BEZIER,
+          a,
+          b,
+          source,
+          control: [a, at(t + step / 2, 1 / Math.cos(step / 2)), b],
+          weights: [1, Math.cos(step / 2), 1],
+        }
       const k = (4 / 3) * Math.tan(step / 4) * r
       const tangent = (q: Point, angle: number, m: number) => ({ x: q.x - m * Math.sin(angle), y: q.y + m * Math.cos(angle) })
       return { kind: BEZIER, a, b, source, control: [a, tangent(a, t, k), tangent(b, t + step, -k), b], weights: null }

@@ -1,0 +1,85 @@
+import { type Finding, type FindingParams, type FindingRow, makeFinding } from '../finding'
+
+const shortNumber = (value: number) => String(Number(value.toPrecision(4)))
+const text = (value: FindingParams[string]) => (typeof value === 'number' ? shortNumber(value) : String(value))
+const place = (p: FindingParams) => `(${text(p.x)}, ${text(p.y)})`
+
+/** What combining outlines can report. Lengths in the sentences are mm, places drawing units. */
+export const COMBINE_FINDINGS = {
+  'make-up-needed': {
+    severity: 'error',
+    say: (p) =>
+      `${text(p.count)} outlines cross one another, the first two at ${place(p)}: metal or void cannot be told from nesting. Say what each outline does: add, cut, common or out.`,
+  },
+  'make-up-point-off': {
+    severity: 'warning',
+    say: (p) =>
+      `Step ${text(p.step)} of the make-up names the point ${place(p)}, but the nearest outline is ${text(p.distance)} mm away. Check that the make-up belongs to this drawing.`,
+  },
+  'no-outlines': {
+    severity: 'error',
+    say: () => 'No closed outline is taken, so there is no metal. Check layers, part and make-up.',
+  },
+  'no-metal': {
+    severity: 'error',
+    say: () => 'The make-up leaves no metal at all. Check the order of its steps and what each outline does.',
+  },
+  'outlines-abut': {
+    severity: 'warning',
+    say: (p) =>
+      `${text(p.count)} outlines share edges with a neighbour over ${text(p.length)} mm, the first at ${place(p)}: taken as one piece there. Leave one out, or state a make-up, if they are not joined.`,
+  },
+  'too-many-crossings': {
+    severity: 'error',
+    say: (p) =>
+      `The outlines at ${place(p)} cross one another more than ${text(p.most)} times. Such a drawing is not a cross-section; take fewer layers or outlines.`,
+  },
+  'boundary-unclear': {
+    severity: 'error',
+    say: (p) =>
+      `Near ${place(p)} edges run so close to one another that inside and outside cannot be told apart. Clean the drawing there, or leave one of the outlines out.`,
+  },
+  sliver: {
+    severity: 'warning',
+    say: (p) =>
+      `A sliver of metal of ${text(p.area)} mm² and ${text(p.width)} mm mean width lies at ${place(p)}; it counts in the figures. Were two outlines meant to meet there?`,
+  },
+  'sliver-void': {
+    severity: 'warning',
+    say: (p) =>
+      `A closed slit of ${text(p.area)} mm² and ${text(p.width)} mm mean width lies in the metal at ${place(p)}. It is kept as void; as metal it would change torsion greatly. Check the drawing there.`,
+  },
+  slit: {
+    severity: 'warning',
+    say: (p) =>
+      `A slit only ${text(p.gap)} mm wide runs ${text(p.length)} mm at ${place(p)}. It is kept open; closed, torsion would be far greater. Open or closed: a person must know.`,
+  },
+  gap: {
+    severity: 'warning',
+    say: (p) =>
+      `Two pieces lie only ${text(p.gap)} mm apart over ${text(p.length)} mm at ${place(p)}: bonded, in contact, or void? They are taken as apart.`,
+  },
+  'gap-answered': {
+    severity: 'note',
+    say: (p) => `The gap of ${text(p.gap)} mm over ${text(p.length)} mm at ${place(p)} is ${text(p.is)} by a person's answer.`,
+  },
+  'material-overlap': {
+    severity: 'warning',
+    say: (p) =>
+      `${text(p.first)} and ${text(p.second)} overlap by ${text(p.area)} mm² at ${place(p)}; the later step, ${text(p.second)}, holds there. Bonded, in contact, or void?`,
+  },
+  'overlap-answered': {
+    severity: 'note',
+    say: (p) =>
+      `The overlap of ${text(p.first)} and ${text(p.second)} (${text(p.area)} mm²) at ${place(p)} is ${text(p.is)} by a person's answer.`,
+  },
+} satisfies Record<string, FindingRow>
+
+export type CombineCode = keyof typeof COMBINE_FINDINGS
+
+export const combineFinding = (
+  code: CombineCode,
+  params: FindingParams,
+  at?: [number, number],
+  size?: number,
+): Finding<CombineCode> => makeFinding<Record<CombineCode, FindingRow>, CombineCode>(COMBINE_FINDINGS, code, params, at, size)

@@ -1,0 +1,151 @@
+import type { Finding } from '../finding'
+import type { OutlineSet, Tolerances } from '../outlineSet'
+import { nearestOutlines } from '../pickOutlines'
+import type { Bond, Does, MakeUpStep, XY } from '../recipe'
+import type { Region, Repair } from '../region'
+import { MOST_MEETINGS } from './arrange'
+import { type Combined, combine, loopsWhere } from './combine'
+import { defaultSteps } from './defaultSteps'
+import { combineFinding } from './findings'
+import { type MakeUp, makeUpOf, type Step, statedSteps } from './makeUp'
+import { narrowPlaces } from './narrow'
+import { abutting, overlaps } from './questions'
+import { regionFrom } from './regionFrom'
+import { type Tangle, tangleOf } from './tangle'
+
+/** What of the recipe the combination reads. */
+export interface Combination {
+  makeUp: MakeUpStep[] | null
+  part: XY[] | null
+  bonds: Bond[]
+}
+
+export interface RegionAnswer {
+  /** null where the drawing does not determine it; the findings then hold an error */
+  region: Region | null
+  /** the metal of each material, shared edges in both */
+  parts: { material: string | null; region: Region }[]
+  /** what each outline of the set does */
+  roles: Does[]
+  /** the outlines that take part, in the order of the make-up */
+  steps: { outline: number; does: Does; material: string | null }[]
+  findings: Finding[]
+  /** repairs of the outlines that take part; area as it counts in the region */
+  repairs: Repair[]
+}
+
+/**
+ * The net metal of a set of outlines after the make-up: steps in order, beginning with nothing; add is union, cut
+ * difference, common intersection with everything so far, an outline not named is left out. Without a make-up, by nesting
+ * depth among the outlines taken (even adds, odd cuts); outlines that cross have no default. Only outlines that meet
+ * others are arranged, the rest are taken whole. Edges keep their carriers to the last bit. Drawing units; `mmPerUnit`
+ * only for sentences and the 0.05 mm below which a gap is asked about.
+ */
+export function regionOf(
+  set: OutlineSet,
+  { makeUp, part, bonds }: Combination,
+  tolerances: Tolerances,
+  mmPerUnit = 1,
+): RegionAnswer {
+  const findings: Finding[] = []
+  const taken = takenOutlines(set, part)
+  const named = makeUp && statedSteps(set, makeUp, taken)
+  if (named) findings.push(...pointsOff(makeUp, named.off, tolerances, mmPerUnit))
+  const used = named ? usedBy(set.count, named.steps) : taken
+  const failed = (finding: Finding): RegionAnswer => ({
+    region: null,
+    parts: [],
+    roles: rolesOf(set.count, named?.steps ?? []),
+    steps: [],
+    findings: [...findings, finding],
+    repairs: [],
+  })
+  if (!used.includes(1)) return failed(combineFinding('no-outlines', {}))
+
+  const tangles: Tangle[] = []
+  for (const cluster of set.clusters) {
+    const members = cluster.filter((k) => used[k])
+    if (members.length === 0 || (members.length === 1 && cluster.length > 1)) continue
+    const tangle = tangleOf(set, members, tolerances.snap)
+    const at: XY = [set.at[2 * members[0]], set.at[2 * members[0] + 1]]
+    if (!tangle) return failed(combineFinding('too-many-crossings', { x: at[0], y: at[1], most: MOST_MEETINGS }, at))
+    tangles.push(tangle)
+  }
+
+  let { steps, materials } = named ?? { steps: [], materials: [null] }
+  if (!named) {
+    const byNesting = defaultSteps(set, taken, tangles)
+    if (byNesting.crossing) return failed(crossingFinding(set, byNesting.crossing))
+    steps = byNesting.steps
+  }
+  const plan = makeUpOf(steps, materials)
+  const combined = combine(set, plan, tangles, !named)
+  const { loops, faults } = loopsWhere(set, combined, ({ label }) => label > 0)
+  if (faults.length > 0) return failed(combineFinding('boundary-unclear', { x: faults[0][0], y: faults[0][1] }, faults[0]))
+  if (loops.area.length === 0) return failed(combineFinding('no-metal', {}))
+  const region = regionFrom(loops)
+  if (!named) findings.push(...abutting(combined, mmPerUnit))
+  findings.push(...overlaps(set, combined, materials, bonds, mmPerUnit))
+  findings.push(...narrowPlaces(region, loops.area, bonds, tolerances, mmPerUnit))
+  return {
+    region,
+    parts: partsOf(set, combined, plan, region),
+    roles: rolesOf(set.count, steps),
+    steps: plan.steps.map(({ outline, does, material }) => ({ outline, does, material: materials[material] ?? null })),
+    findings,
+    repairs: repairsOf(set, plan),
+  }
+}
+
+function takenOutlines(set: OutlineSet, part: XY[] | null): Uint8Array {
+  if (!part) return new Uint8Array(set.count).fill(1)
+  const taken = new Uint8Array(set.count)
+  for (const k of nearestOutlines(set, part)) if (k >= 0) taken[k] = 1
+  return taken
+}
+
+function usedBy(count: number, steps: Step[]): Uint8Array {
+  const used = new Uint8Array(count)
+  for (const { outline, does } of steps) if (does !== 'out') used[outline] = 1
+  return used
+}
+
+function rolesOf(count: number, steps: Step[]): Does[] {
+  const roles = new Array<Does>(count).fill('out')
+  for (const { outline, does } of steps) if (outline >= 0 && does !== 'out') roles[outline] = does
+  return roles
+}
+
+function pointsOff(makeUp: MakeUpStep[], off: number[], { chaining }: Tolerances, mmPerUnit: number): Finding[] {
+  const far = makeUp.flatMap(({ at }, n) => (off[n] > 10 * chaining ? [{ at, n }] : []))
+  return far.map(({ at, n }) =>
+    combineFinding('make-up-point-off', { step: n + 1, x: at[0], y: at[1], distance: off[n] * mmPerUnit }, at, off[n]),
+  )
+}
+
+function crossingFinding(set: OutlineSet, crossing: [number, number][]): Finding {
+  const [x, y] = [set.at[2 * crossing[0][0]], set.at[2 * crossing[0][0] + 1]]
+  return combineFinding('make-up-needed', { count: new Set(crossing.flat()).size, x, y }, [x, y])
+}
+
+function partsOf(set: OutlineSet, combined: Combined, { materials, steps }: MakeUp, region: Region): RegionAnswer['parts'] {
+  const adding = [...new Set(steps.filter(({ does }) => does === 'add').map(({ material }) => material))]
+  if (adding.length === 1) return [{ material: materials[adding[0]], region }]
+  return adding.flatMap((material) => {
+    const { loops } = loopsWhere(set, combined, ({ label }) => label === material + 1)
+    return loops.area.length === 0 ? [] : [{ material: materials[material], region: regionFrom(loops) }]
+  })
+}
+
+function repairsOf(set: OutlineSet, { stepsOf, steps }: MakeUp): Repair[] {
+  if (set.repairs.length === 0) return []
+  const outlines = nearestOutlines(
+    set,
+    set.repairs.map(({ x, y }): XY => [x, y]),
+  )
+  return set.repairs.flatMap((repair, n) => {
+    const own = stepsOf.get(outlines[n])
+    if (!own) return []
+    return [steps[own[own.length - 1]].does === 'cut' ? { ...repair, area: -repair.area } : repair]
+  })
+}

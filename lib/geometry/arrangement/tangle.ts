@@ -1,0 +1,59 @@
+import { type EdgeTable, emptyTable, pushCopy } from '../edges'
+import type { OutlineSet } from '../outlineSet'
+import { type Arrangement, arrange } from './arrange'
+
+/** Outlines of one cluster arranged together; owner n of the arrangement is outline members[n]. */
+export interface Tangle {
+  members: number[]
+  arrangement: Arrangement
+  /** members that hold each set's faces, as outlines */
+  sets: number[][]
+}
+
+/** Arranges the members of a cluster; null where they cross too often. */
+export function tangleOf(set: OutlineSet, members: number[], snap: number): Tangle | null {
+  const edges: EdgeTable = emptyTable()
+  const owner: number[] = []
+  members.forEach((k, n) => {
+    for (let i = set.loopStart[k]; i < set.loopStart[k + 1]; i++) {
+      pushCopy(edges, set.edges, i)
+      owner.push(n)
+    }
+  })
+  const arrangement = arrange(edges, Uint32Array.from(owner), members.length, snap)
+  return arrangement && { members, arrangement, sets: arrangement.sets.map((held) => Array.from(held, (n) => members[n])) }
+}
+
+/** How the members of a tangle lie to one another: faces held by each, and by each two that have one in common. */
+export interface Relations {
+  /** whether a lies in b or is the same as b */
+  within: (a: number, b: number) => boolean
+  /** two that each have parts inside and outside the other */
+  crossing: [number, number][]
+}
+
+export function relationsOf({ arrangement, sets, members }: Tangle): Relations {
+  const { count, left, right } = arrangement
+  const seen = new Uint8Array(sets.length)
+  for (let u = 0; u < count; u++) {
+    seen[left[u]] = 1
+    seen[right[u]] = 1
+  }
+  const faces = new Map<number, number>()
+  const common = new Map<number, Map<number, number>>(members.map((k) => [k, new Map()]))
+  sets.forEach((held, n) => {
+    if (!seen[n]) return
+    for (const a of held) {
+      faces.set(a, (faces.get(a) ?? 0) + 1)
+      const own = common.get(a)
+      for (const b of held) if (b !== a) own?.set(b, (own.get(b) ?? 0) + 1)
+    }
+  })
+  const shared = (a: number, b: number) => common.get(a)?.get(b) ?? 0
+  const within = (a: number, b: number) => shared(a, b) > 0 && shared(a, b) === faces.get(a)
+  const crossing: [number, number][] = []
+  for (const a of members) {
+    for (const b of common.get(a)?.keys() ?? []) if (a < b && !within(a, b) && !within(b, a)) crossing.push([a, b])
+  }
+  return { within, crossing }
+}
