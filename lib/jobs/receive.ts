@@ -55,20 +55,32 @@ async function parse(request: Request, path: string, maxBytes: number): Promise<
   if (!request.body) throw new AppError('invalid', 'The upload is empty.')
   const fields = new Map<string, string>()
   let file: Promise<ReceivedFile> | null = null
+  const refusals: unknown[] = []
+  // the parser cannot be destroyed from within its own events
+  const refuse = (error: AppError) => {
+    refusals.push(error)
+    setImmediate(() => parser.destroy(error))
+  }
   parser.on('field', (name, value, { valueTruncated }) => {
-    if (valueTruncated) parser.destroy(new AppError('too_large', `The field “${name}” is larger than 1 MiB.`))
+    if (valueTruncated) refuse(new AppError('too_large', `The field “${name}” is larger than 1 MiB.`))
     fields.set(name, value)
   })
   parser.on('file', (_name, stream, { filename }) => {
-    stream.on('limit', () => parser.destroy(tooLarge(maxBytes)))
+    stream.on('limit', () => refuse(tooLarge(maxBytes)))
     file = store(stream, path, plainName(filename ?? ''))
     file.catch((error) => parser.destroy(error))
   })
   for (const limit of ['filesLimit', 'fieldsLimit', 'partsLimit'] as const) {
-    parser.on(limit, () => parser.destroy(new AppError('invalid', 'The upload has more parts than file, recipe and fields.')))
+    parser.on(limit, () => refuse(new AppError('invalid', 'The upload has more parts than file, recipe and fields.')))
   }
-  await pipeline(Readable.fromWeb(request.body), parser)
-  return { fields, file: await file }
+  try {
+    await pipeline(Readable.fromWeb(request.body), parser)
+    if (refusals.length === 0) return { fields, file: await file }
+  } catch (error) {
+    refusals.push(error)
+  }
+  await Promise.allSettled([file])
+  throw refusals[0]
 }
 
 async function store(stream: Readable, path: string, name: string): Promise<ReceivedFile> {
