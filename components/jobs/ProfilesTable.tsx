@@ -8,19 +8,19 @@ import { Menu, type MenuItem } from '@/components/ui/Menu'
 import { StateBadge } from '@/components/ui/StateBadge'
 import { type Column, type Sorting, Table } from '@/components/ui/Table'
 import type { Profile } from '@/lib/api/schemas/profile'
-import type { Dimension } from '@/lib/section/figures/figure'
+import type { Quantity } from '@/lib/units/quantity'
 import { ProfileForm } from './ProfileForm'
 import { useBinning } from './useBinning'
 
 type Figures = NonNullable<Profile['latest']>['figures']
 
 /** The figures of the list: the same that the API sorts by. */
-const FIGURES: { key: keyof Figures; name: string; sub?: string; dimension: Dimension; unit: string; sort?: string }[] = [
-  { key: 'area', name: 'A', dimension: 'area', unit: 'mm²', sort: 'area' },
-  { key: 'mass', name: 'm', dimension: 'massPerLength', unit: 'kg/m', sort: 'mass' },
-  { key: 'ix', name: 'I', sub: 'x', dimension: 'secondMoment', unit: 'mm⁴', sort: 'ix' },
-  { key: 'iy', name: 'I', sub: 'y', dimension: 'secondMoment', unit: 'mm⁴', sort: 'iy' },
-  { key: 'circle', name: 'Ø circle', dimension: 'length', unit: 'mm', sort: 'circle' },
+const FIGURES: { key: keyof Figures; name: string; sub?: string; quantity: Quantity; unit: string; sort?: string }[] = [
+  { key: 'area', name: 'A', quantity: 'area', unit: 'mm²', sort: 'area' },
+  { key: 'mass', name: 'm', quantity: 'massPerLength', unit: 'kg/m', sort: 'mass' },
+  { key: 'ix', name: 'I', sub: 'x', quantity: 'secondMoment', unit: 'mm⁴', sort: 'ix' },
+  { key: 'iy', name: 'I', sub: 'y', quantity: 'secondMoment', unit: 'mm⁴', sort: 'iy' },
+  { key: 'circle', name: 'Ø circle', quantity: 'length', unit: 'mm', sort: 'circle' },
 ]
 
 /** All columns of a list of profiles, as table and export show them. */
@@ -79,7 +79,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
         latest ? <StateBadge letter={latest.letter} state={latest.state} /> : <span className="text-soft">none yet</span>,
     },
     ...FIGURES.map(
-      ({ key, name, sub, dimension, unit, sort }): Column<Profile> => ({
+      ({ key, name, sub, quantity, unit, sort }): Column<Profile> => ({
         key,
         head: (
           <>
@@ -92,7 +92,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
         wide: key === 'area' || key === 'circle' || key === 'iy',
         plainHead: `${name}${sub ?? ''} [${unit}]`,
         plain: ({ latest }) => latest?.figures[key] ?? null,
-        cell: ({ latest }) => <FigureText value={latest?.figures[key] ?? null} dimension={dimension} />,
+        cell: ({ latest }) => <FigureText value={latest?.figures[key] ?? null} quantity={quantity} />,
       }),
     ),
   ]

@@ -31,7 +31,7 @@ export function Search() {
           type="search"
           name="q"
           defaultValue={asked}
-          aria-label="Search profiles by number, title or figure"
+          aria-label="Search profiles"
           aria-keyshortcuts="/"
           title="Search (/)"
           placeholder="Number, title, or Ix ≥ 40 cm⁴"

@@ -100,9 +100,13 @@ function SortButton<Row>({
     <button
       type="button"
       onClick={() => sorting.onSort(name, next)}
-      className={classes('inline-flex min-h-10 items-center gap-1 hover:text-ink', chosen && 'text-ink')}
+      className={classes(
+        'inline-flex min-h-10 items-center gap-1 hover:text-ink',
+        chosen && 'text-ink',
+        column.figure && 'flex-row-reverse',
+      )}
     >
-      {column.head}
+      <span>{column.head}</span>
       <span aria-hidden="true" className={classes('text-tiny', !chosen && 'opacity-0')}>
         {sorting.dir === 'asc' ? '▲' : '▼'}
       </span>

@@ -2,7 +2,7 @@ import { type ArcRun, type Bond, DEFAULT_RECIPE, type Does, type Recipe, type XY
 import type { OutlineView } from '@/lib/section/types'
 import { begin, type History, push, redo, undo } from './history'
 import { moved, stepsOf, withMaterial, withRole } from './makeUp'
-import type { SizeClaim } from './size'
+import { compare, type SizeClaim } from './size'
 
 /** Everything a person decides on one drawing; all of it can be undone. */
 export interface Choices {
@@ -26,14 +26,18 @@ export type FlowAction =
   | { type: 'set'; change: Partial<Simple> }
   /** `taken`: the names that count at the moment, where the recipe leaves the choice to the reader */
   | { type: 'layer' | 'lineType'; name: string; on: boolean; taken: string[] }
+  | { type: 'layers' | 'lineTypes'; names: string[] }
   | { type: 'does'; at: XY; does: Does; outlines: readonly OutlineView[] }
   | { type: 'outlineMaterial'; at: XY; material: string | null; outlines: readonly OutlineView[] }
   | { type: 'move'; at: XY; by: -1 | 1; outlines: readonly OutlineView[] }
   | { type: 'nesting' }
   | { type: 'arc'; run: ArcRun; accept: boolean }
+  | { type: 'arcs'; runs: ArcRun[] }
   | { type: 'bond'; bond: Bond }
   | { type: 'claim'; claim: SizeClaim | null }
   | { type: 'finished'; finished: 'finished' | 'die'; shrinkage?: number }
+  /** what the file itself says, before a person decides anything */
+  | { type: 'begin'; unit: Recipe['unit'] }
   | { type: 'undo' }
   | { type: 'redo' }
   | { type: 'text'; change: Partial<Pick<FlowState, 'drawingRevision' | 'note'>> }
@@ -45,6 +49,10 @@ export function startFlow(recipe: Partial<Recipe> = {}): FlowState {
 
 export const choicesOf = (state: FlowState): Choices => state.history.present
 
+/** A person said what is drawn and knows a dimension that agrees with the recipe as it stands now. */
+export const isConfirmed = ({ claim, finished, recipe }: Choices): boolean =>
+  claim !== null && finished !== null && compare(claim, recipe).agrees
+
 /** One reducer for the whole flow; every choice but typed text is one step of undo. */
 export function flow(state: FlowState, action: FlowAction): FlowState {
   switch (action.type) {
@@ -54,6 +62,11 @@ export function flow(state: FlowState, action: FlowAction): FlowState {
       return { ...state, history: redo(state.history) }
     case 'text':
       return { ...state, ...action.change }
+    case 'begin': {
+      const { past, future, present } = state.history
+      if (past.length + future.length > 0) return state
+      return { ...state, history: begin({ ...present, recipe: { ...present.recipe, unit: action.unit } }) }
+    }
     default: {
       const now = state.history.present
       const next = decide(now, action)
@@ -62,7 +75,7 @@ export function flow(state: FlowState, action: FlowAction): FlowState {
   }
 }
 
-type Decision = Exclude<FlowAction, { type: 'undo' | 'redo' | 'text' }>
+type Decision = Exclude<FlowAction, { type: 'undo' | 'redo' | 'text' | 'begin' }>
 
 const samePoint = (a: XY, b: XY) => a[0] === b[0] && a[1] === b[1]
 
@@ -76,6 +89,10 @@ function decide(now: Choices, action: Decision): Choices {
       return recipeWith({ layers: switched(recipe.layers ?? action.taken, action.name, action.on) })
     case 'lineType':
       return recipeWith({ lineTypes: switched(recipe.lineTypes ?? action.taken, action.name, action.on) })
+    case 'layers':
+      return recipeWith({ layers: action.names })
+    case 'lineTypes':
+      return recipeWith({ lineTypes: action.names })
     case 'does':
       return recipeWith({ makeUp: withRole(stepsOf(recipe.makeUp, action.outlines), action.at, action.does) })
     case 'outlineMaterial':
@@ -90,6 +107,8 @@ function decide(now: Choices, action: Decision): Choices {
       if (action.accept) return { ...recipeWith({ arcs: [...others, action.run] }), declined }
       return { ...recipeWith({ arcs: others }), declined: [...declined, action.run.from] }
     }
+    case 'arcs':
+      return recipeWith({ arcs: [...recipe.arcs, ...action.runs] })
     case 'bond': {
       const others = recipe.bonds.filter(({ at }) => !samePoint(at, action.bond.at))
       return recipeWith({ bonds: [...others, action.bond] })

@@ -1,0 +1,48 @@
+'use client'
+import type { HoverStore } from '@/components/board/hover'
+import { SymbolText } from '@/components/sheet/SymbolText'
+import { useMe } from '@/components/shell/Me'
+import { UnitText } from '@/components/ui/UnitText'
+import { FIGURES } from '@/lib/section/figures'
+import type { Section } from '@/lib/section/types'
+import { format } from '@/lib/units/format'
+
+const SHOWN = ['area', 'mass', 'ix', 'iy', 'i1', 'i2', 'theta']
+const FIGURES_SHOWN = FIGURES.filter(({ key }) => SHOWN.includes(key))
+
+/** The figures of the moment, under the picture; pointing at one draws it on the board. */
+export function LiveFigures({ section, hover }: { section: Section | null; hover: HoverStore }) {
+  const { settings } = useMe().team
+  return (
+    <ul
+      aria-label="Figures as they stand"
+      className="flex flex-wrap gap-x-6 gap-y-1 border border-hair border-t-0 bg-sheet px-3 py-2"
+    >
+      {FIGURES_SHOWN.map((figure) => {
+        const value = section ? figure.value(section) : null
+        const shown = value === null || value === undefined ? null : format(value, figure.dimension, settings)
+        return (
+          <li
+            key={figure.key}
+            title={figure.word}
+            onMouseEnter={() => hover.set({ kind: 'figure', key: figure.key })}
+            onMouseLeave={() => hover.set(null)}
+            className="min-w-24"
+          >
+            <span className="block text-small text-soft">
+              <SymbolText symbol={figure.symbol[settings.symbols]} />
+            </span>
+            <span className="whitespace-nowrap font-mono">
+              {shown ? shown.text : '–'}{' '}
+              {shown && (
+                <span className="font-sans text-small text-soft">
+                  <UnitText unit={shown.unit} />
+                </span>
+              )}
+            </span>
+          </li>
+        )
+      })}
+    </ul>
+  )
+}

@@ -1,0 +1,149 @@
+'use client'
+import { useCallback, useMemo, useReducer, useState } from 'react'
+import { Board } from '@/components/board/Board'
+import { boardReducer, initialBoard } from '@/components/board/boardState'
+import { createHover } from '@/components/board/hover'
+import { placeInSection } from '@/components/board/regionModel'
+import { sheetAround, zoneOf } from '@/components/board/zones'
+import { writingOf } from '@/components/sheet/writing'
+import { useMe } from '@/components/shell/Me'
+import { Boundary } from '@/components/ui/Boundary'
+import type { Material } from '@/lib/api/schemas/people'
+import { mmPerUnit, type XY } from '@/lib/geometry/recipe'
+import type { PreviewResult } from '@/lib/jobs/browser-pool'
+import { FileLine } from './FileLine'
+import { detailAt, detailsOf } from './flow/groups'
+import { placeInDrawing } from './flow/window'
+import { LiveFigures } from './LiveFigures'
+import { Panels } from './Panels'
+import { Progress } from './Progress'
+import { previewModel } from './previewModel'
+import { Saved } from './Saved'
+import { SavePanel } from './SavePanel'
+import type { Target } from './target'
+import { useFlowKeys } from './useFlowKeys'
+import { useUpload } from './useUpload'
+
+/** From a file to a saved revision: the picture stays in view, every question stands beside it. */
+export function UploadFlow({
+  file,
+  first,
+  materials,
+  onOther,
+  onSaved,
+}: {
+  file: File
+  first: Target
+  materials: readonly Material[]
+  /** another file instead */
+  onOther: () => void
+  onSaved?: () => void
+}) {
+  const upload = useUpload(file, first, materials)
+  const { target, setTarget, state, choices, dispatch, preview, ready, saving, problem, saved } = upload
+  const { result } = preview
+  const [board, boardDispatch] = useReducer(boardReducer, initialBoard)
+  const [hover] = useState(createHover)
+  const [picked, setPicked] = useState<string | null>(null)
+  const [made, setMade] = useState<ReadonlyMap<number, string>>(new Map())
+  const { settings } = useMe().team
+  const writing = useMemo(() => writingOf(settings), [settings])
+  const model = useMemo(() => result && previewModel(result), [result])
+  const details = useMemo(() => (result ? detailsOf(result) : []), [result])
+
+  const save = useCallback(async () => {
+    await upload.save()
+    onSaved?.()
+  }, [upload.save, onSaved])
+  useFlowKeys({
+    undo: useCallback(() => dispatch({ type: 'undo' }), [dispatch]),
+    redo: useCallback(() => dispatch({ type: 'redo' }), [dispatch]),
+    save: ready && !saving ? save : null,
+  })
+
+  const show = (at: XY, size: number) => {
+    if (!result) return
+    const { recipe } = result.answer
+    boardDispatch({ do: 'goTo', at: placeInSection(at, result.answer), size: size * mmPerUnit(recipe) })
+  }
+  const pick = (id: string | null) => {
+    setPicked(id)
+    if (!result || !id || details.length < 2 || choices.recipe.part) return
+    const detail = detailAt(result, details, Number(id.slice(1)) - 1)
+    if (detail) dispatch({ type: 'set', change: { part: detail.part } })
+  }
+  const further = () => {
+    if (!saved || !result) return
+    const taken = details.filter((detail) => detail.taken)
+    setMade(new Map([...made, ...taken.map(({ number }) => [number, saved.number] as const)]))
+    const { jobId, materialId } = next(target)
+    setTarget({ kind: 'new', jobId, title: '', materialId })
+    dispatch({ type: 'set', change: { part: null } })
+    upload.setSaved(null)
+  }
+  const left = details.filter((detail) => !detail.taken && !made.has(detail.number)).length
+
+  return (
+    <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_27rem]">
+      <div className="lg:sticky lg:top-4">
+        <FileLine file={file} state={state} dispatch={dispatch} onOther={onOther} />
+        {model && result ? (
+          <Boundary what="The picture">
+            <Board
+              model={model}
+              state={board}
+              dispatch={boardDispatch}
+              hover={hover}
+              writing={writing}
+              label={`Preview of ${file.name}`}
+              onPick={pick}
+            />
+          </Boundary>
+        ) : (
+          <div className="grid h-[22rem] place-content-center border border-hair bg-sheet text-soft md:h-[min(68vh,46rem)]">
+            {preview.failure === null && !preview.cancelled && 'Reading the drawing …'}
+          </div>
+        )}
+        <LiveFigures section={result?.answer.section ?? null} hover={hover} />
+        <Progress
+          stage={preview.stage}
+          failure={preview.failure}
+          cancelled={preview.cancelled}
+          onCancel={preview.cancel}
+          onRetry={preview.retry}
+        />
+      </div>
+      <div>
+        {saved && <Saved revision={saved.revision} number={saved.number} further={left} onFurther={further} />}
+        {result && (
+          <Panels
+            {...{ result, choices, details, made, hover, picked, dispatch }}
+            measured={distance(board.points)}
+            window={windowOf(board.points, result)}
+            zoneOf={(at) => (model ? zoneOf(sheetAround(model.extents), placeInSection(at, result.answer)) : '')}
+            onShow={show}
+          />
+        )}
+        {!saved && (
+          <SavePanel
+            {...{ state, choices, target, materials, ready, saving, problem, dispatch }}
+            onTitle={(title) => target.kind === 'new' && setTarget({ ...target, title })}
+            onSave={save}
+            onCancel={upload.cancelSave}
+          />
+        )}
+      </div>
+    </div>
+  )
+}
+
+const next = (target: Target) =>
+  target.kind === 'new' ? target : { jobId: target.profile.job.id, materialId: target.profile.material?.id ?? null }
+
+type Points = readonly { x: number; y: number }[]
+const distance = ([a, b]: Points) => (a && b ? Math.hypot(b.x - a.x, b.y - a.y) : null)
+
+function windowOf([a, b]: Points, { answer }: PreviewResult): [XY, XY] | null {
+  const { recipe } = answer
+  return a && b ? [placeInDrawing(a, recipe), placeInDrawing(b, recipe)] : null
+}
