@@ -1,6 +1,7 @@
 import type { Bundles } from './bundles'
 import { extremesOf } from './extremes'
 import { frameAt } from './frame'
+import { momentsOf } from './moments'
 import { plasticBending } from './plastic'
 
 /** An axis that a person places and turns: a point, and degrees counter-clockwise from +x. */
@@ -31,28 +32,27 @@ export interface AxisFigures {
 }
 
 /**
- * Second moments, product, radii and moduli about any axis. From the centroidal moments by turning and Steiner's term (parallel
- * axes), which is exact where the axis lies in or near the metal.
+ * Second moments, product, radii and moduli about any axis: integrated in axes through the centroid turned alike (so that a thin
+ * turned strip keeps its digits), moved by Steiner's term (parallel axes).
  */
 export function aboutAxis(bundles: Bundles, { x, y, angle }: UserAxis): AxisFigures {
   const frame = frameAt(x, y, angle)
   const { cos, sin } = frame
-  const { area, uu, vv, uv } = bundles.moments
+  const { edges } = bundles
+  const { area, uu, vv, uv } = momentsOf(edges, 0, edges.count, frameAt(bundles.x, bundles.y, angle))
   const dx = bundles.x - x
   const dy = bundles.y - y
   const u = dx * cos + dy * sin
   const v = dy * cos - dx * sin
-  const iuCentroid = vv * cos * cos + uu * sin * sin - 2 * uv * sin * cos
-  const ivCentroid = uu * cos * cos + vv * sin * sin + 2 * uv * sin * cos
-  const iu = iuCentroid + area * v * v
-  const iv = ivCentroid + area * u * u
+  const iu = vv + area * v * v
+  const iv = uu + area * u * u
   const extremes = extremesOf(bundles, frame)
   const { modulus, offset } = plasticBending(bundles, frame, extremes)
   return {
     iu,
     iv,
-    iuv: uv * (cos * cos - sin * sin) + (vv - uu) * sin * cos + area * u * v,
-    iuCentroid,
+    iuv: uv + area * u * v,
+    iuCentroid: vv,
     ru: Math.sqrt(iu / area),
     rv: Math.sqrt(iv / area),
     centroid: { u, v },

@@ -1,105 +1,68 @@
-import { difference, product, rootsOf } from '../geometry/bernstein'
-import { turning } from '../geometry/bezierXy'
-import { type EdgeTable, LINE, type Point } from '../geometry/edges'
+import type { Point } from '../geometry/edges'
 import { type Bundles, boxOf } from './bundles'
-import { type Curve, curvePoint, loadCurve, newCurve, newCurvePoint, reachOf } from './curve'
-import { type Circle, enclosingCircle } from './enclosingCircle'
+import { type Circle, circleThrough, enclosingCircle, type HeldCircle } from './enclosingCircle'
+import { type BoundaryPoint, farthest, peakNear } from './farthest'
 
-const curve = newCurve()
-const point = newCurvePoint()
-const SAMPLES = 32
-
-/** Parameters where u² + v² may be greatest along an elliptical arc: falls of its derivative, bracketed by samples, then halved. */
-function conicPeaks({ from, to }: Curve): number[] {
-  const growth = (t: number) => {
-    curvePoint(curve, t, point)
-    return (point.u * point.du + point.v * point.dv) * Math.sign(to - from)
-  }
-  const peaks: number[] = []
-  let before = growth(from)
-  for (let k = 1; k <= SAMPLES; k++) {
-    const t = from + ((to - from) * k) / SAMPLES
-    const now = growth(t)
-    if (before > 0 && now <= 0) {
-      let low = from + ((to - from) * (k - 1)) / SAMPLES
-      let high = t
-      for (let step = 0; step < 52; step++) {
-        const middle = 0.5 * (low + high)
-        if (growth(middle) > 0) low = middle
-        else high = middle
-      }
-      peaks.push(0.5 * (low + high))
-    }
-    before = now
-  }
-  return peaks
+/**
+ * The circle held by the peaks of the same curves as seen from `centre`: at the true centre it is its own answer. Points that have
+ * run into one peak count once.
+ */
+function heldFrom(bundles: Bundles, { by, radius }: HeldCircle<BoundaryPoint>, centre: Point): HeldCircle<BoundaryPoint> | null {
+  const peaks = by.map((known) => peakNear(bundles.edges, known, centre))
+  const apart = peaks.filter((p, i) => peaks.slice(0, i).every((q) => Math.hypot(p.x - q.x, p.y - q.y) > 1e-3 * radius))
+  return circleThrough(apart)
 }
 
-/** The same for a Bézier piece: roots of the derivative of (u² + v²)/w² in Bernstein form. */
-function bezierPeaks({ controls, ku, kv }: Curve): number[] {
-  if (!controls) return []
-  const w = Array.from(controls.w)
-  const u = w.map((weight, j) => controls.u[j] + ku * weight)
-  const v = w.map((weight, j) => controls.v[j] + kv * weight)
-  const minusV = product(v, v).map((value) => -value)
-  const square = difference(product(u, u), minusV)
-  return rootsOf(turning(square, { x: square, y: square, w: product(w, w), rational: controls.rational }))
-}
-
-interface Far extends Point {
-  square: number
-}
-
-function farByEdges(edges: EdgeTable, from: number, to: number, x: number, y: number, far: Far): void {
-  const { ends, kind } = edges
-  const frame = { x, y, cos: 1, sin: 0 }
-  const take = (u: number, v: number): void => {
-    const square = u * u + v * v
-    if (square <= far.square) return
-    far.square = square
-    far.x = x + u
-    far.y = y + v
+/**
+ * Newton's steps for the centre that its own peaks give back, with a slope from small displacements: the radius of a circle held
+ * by smooth curves is flat in its centre, so that a radius right to the last digit leaves the centre only half of them.
+ */
+function polished(bundles: Bundles, start: HeldCircle<BoundaryPoint>): HeldCircle<BoundaryPoint> {
+  if (start.by.every(({ edge }) => edge < 0)) return start
+  const h = 1e-5 * start.radius
+  let circle = start
+  for (let step = 0; step < 6; step++) {
+    const { x, y } = circle
+    const here = heldFrom(bundles, circle, circle)
+    const right = heldFrom(bundles, circle, { x: x + h, y })
+    const up = heldFrom(bundles, circle, { x, y: y + h })
+    if (!here || !right || !up) return start
+    const a = 1 - (right.x - here.x) / h
+    const b = -(up.x - here.x) / h
+    const c = -(right.y - here.y) / h
+    const d = 1 - (up.y - here.y) / h
+    const det = a * d - b * c
+    const dx = (d * (here.x - x) - b * (here.y - y)) / det
+    const dy = (a * (here.y - y) - c * (here.x - x)) / det
+    if (!(Math.hypot(dx, dy) < 0.01 * start.radius)) return start
+    const next = heldFrom(bundles, here, { x: x + dx, y: y + dy })
+    if (!next) return start
+    circle = { ...next, x: x + dx, y: y + dy }
+    if (Math.hypot(dx, dy) <= 1e-14 * start.radius) break
   }
-  for (let i = from; i < to; i++) {
-    take(ends[4 * i] - x, ends[4 * i + 1] - y)
-    if (kind[i] === LINE) continue
-    loadCurve(edges, i, frame, curve)
-    if (Math.hypot(curve.ku, curve.kv) + reachOf(curve) <= Math.sqrt(far.square)) continue
-    for (const t of curve.controls ? bezierPeaks(curve) : conicPeaks(curve)) {
-      curvePoint(curve, t, point)
-      take(point.u, point.v)
-    }
-  }
-}
-
-/** The point of the boundary farthest from (x, y); runs whose box lies nearer than what is found are passed over. */
-function farthest({ edges, count, start, boxes }: Bundles, x: number, y: number): Far {
-  const far: Far = { x, y, square: 0 }
-  for (let k = 0; k < count; k++) {
-    const u = Math.max(x - boxes[4 * k], boxes[4 * k + 2] - x)
-    const v = Math.max(y - boxes[4 * k + 1], boxes[4 * k + 3] - y)
-    if (u * u + v * v > far.square) farByEdges(edges, start[k], start[k + 1], x, y, far)
-  }
-  return far
+  return circle
 }
 
 /**
  * Circumscribing circle: the smallest circle round the region. The smallest circle round a few boundary points grows by the
- * boundary's farthest point from its centre until nothing lies outside; the radius given reaches that farthest point.
+ * boundary's farthest point from its centre until nothing lies outside; then its points of contact are made exact. The radius
+ * given reaches the farthest point.
  */
 export function circumscribingCircle(bundles: Bundles): Circle {
   const { minX, minY, maxX, maxY } = boxOf(bundles)
-  const points: Point[] = [farthest(bundles, 0.5 * (minX + maxX), 0.5 * (minY + maxY))]
-  points.push(farthest(bundles, points[0].x, points[0].y))
-  let circle = enclosingCircle(points)
+  const points: BoundaryPoint[] = [farthest(bundles, { x: 0.5 * (minX + maxX), y: 0.5 * (minY + maxY) })]
+  points.push(farthest(bundles, points[0]))
+  let held = enclosingCircle(points)
   for (let step = 0; step < 100; step++) {
-    const far = farthest(bundles, circle.x, circle.y)
-    const distance = Math.sqrt(far.square)
-    if (distance <= circle.radius * (1 + 1e-13)) break
+    const far = farthest(bundles, held)
+    if (Math.sqrt(far.square) <= held.radius * (1 + 1e-13)) break
     points.push(far)
     const next = enclosingCircle(points)
-    if (next.radius <= circle.radius) return { ...circle, radius: distance }
-    circle = next
+    if (next.radius <= held.radius) break
+    held = next
   }
-  return circle
+  const best = polished(bundles, held)
+  const reachOf = (centre: Point) => Math.sqrt(farthest(bundles, centre).square)
+  const { x, y } = reachOf(best) <= reachOf(held) * (1 + 1e-14) ? best : held
+  return { x, y, radius: reachOf({ x, y }) }
 }
