@@ -27,31 +27,36 @@ export function joinLoops(a: Arrangement, side: (u: number) => number, to: Loops
     if (s !== 0) halves.push(s > 0 ? 2 * u : 2 * u + 1)
   }
   const { next, degree, faults } = follow(a, halves)
+  traceLoops(a, halves, next, degree, to)
+  return faults
+}
+
+/**
+ * Walks the half-edges along `next` and appends the closed ways, split at each vertex met twice. Edges are joined
+ * again across vertices of degree 1.
+ */
+export function traceLoops(a: Arrangement, halves: number[], next: Int32Array, degree: Uint16Array, to: Loops): void {
   const done = new Uint8Array(2 * a.count)
   const placeOf = new Int32Array(a.vertices).fill(-1)
   for (const first of halves) {
     if (done[first]) continue
     const path: number[] = []
-    let h = first
-    while (h >= 0 && !done[h]) {
+    for (let h = first; h >= 0 && !done[h]; h = next[h]) {
       done[h] = 1
-      const v = startVertex(a, h)
-      placeOf[v] = path.length
+      placeOf[startVertex(a, h)] = path.length
       path.push(h)
       const end = endVertex(a, h)
-      if (placeOf[end] >= 0) {
-        const loop = path.splice(placeOf[end])
-        for (const g of loop) placeOf[startVertex(a, g)] = -1
-        emit(a, loop, degree, to)
-      }
-      h = next[h]
+      if (placeOf[end] < 0) continue
+      const loop = path.splice(placeOf[end])
+      for (const g of loop) placeOf[startVertex(a, g)] = -1
+      emit(a, loop, degree, to)
     }
     for (const g of path) placeOf[startVertex(a, g)] = -1
   }
-  return faults
 }
 
-const startVertex = (a: Arrangement, h: number) => (h & 1 ? a.to[h >> 1] : a.from[h >> 1])
+/** The vertex half-edge h leaves: 2u runs along sub-edge u, 2u + 1 against it. */
+export const startVertex = (a: Arrangement, h: number) => (h & 1 ? a.to[h >> 1] : a.from[h >> 1])
 const endVertex = (a: Arrangement, h: number) => (h & 1 ? a.from[h >> 1] : a.to[h >> 1])
 
 /** For each kept half-edge the one that follows it round the same side. */
