@@ -14,7 +14,7 @@ export function readCircle(reading: Reading) {
   const { record, facing } = reading
   const [x, y, radius] = record.values
   if (!(radius > 0)) return reading.refuse(CIRCLE_KIND, 'radius-bad', { radius })
-  const cx = facing * x
+  const cx = facing * x + 0
   const row = reading.begin(CIRCLE_KIND)
   reading.height(facing * record.slot(3, 0))
   reading.sheet.entities.closed[row] = 1
@@ -39,7 +39,7 @@ export function readArc(reading: Reading) {
   const row = reading.begin(ARC_KIND)
   reading.height(facing * record.slot(5, 0))
   if (sweep === 360) reading.sheet.entities.closed[row] = 1
-  pushArcDegrees(reading, facing * x, y, radius, facing === 1 ? start : 180 - start, facing * sweep, row)
+  pushArcDegrees(reading, facing * x + 0, y, radius, facing === 1 ? start : 180 - start, facing * sweep, row)
 }
 
 /** Appends a circular arc given in degrees; sweep < 0 is clockwise. */

@@ -38,7 +38,7 @@ export function readEllipse(reading: Reading) {
   reading.height(record.slot(7, 0))
   if (ratio > 1) reading.remark(row, 'ellipse-ratio', { ...reading.where(ELLIPSE_KIND), ratio }, [x, y])
   if (sweep === TURN) reading.sheet.entities.closed[row] = 1
-  pushEllipticalArc(reading, x, y, ux, uy, -facing * ratio * uy, facing * ratio * ux, start, sweep, row)
+  pushEllipticalArc(reading, x, y, ux, uy, 0 - facing * ratio * uy, facing * ratio * ux + 0, start, sweep, row)
 }
 
 /** Appends the arc c + u cos t + v sin t; one with u ⊥ v of equal length is a circular arc. */

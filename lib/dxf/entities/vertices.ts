@@ -23,7 +23,9 @@ export class Vertices {
     for (let i = 1; i < count + (closed ? 1 : 0); i++) {
       const j = 3 * (i - 1)
       const k = i < count ? 3 * i : 0
-      if (pushBulge(edges, facing * xyb[j], xyb[j + 1], facing * xyb[k], xyb[k + 1], facing * xyb[j + 2], row)) pushed++
+      const x0 = facing * xyb[j] + 0
+      const x1 = facing * xyb[k] + 0
+      if (pushBulge(edges, x0, xyb[j + 1], x1, xyb[k + 1], facing * xyb[j + 2], row)) pushed++
     }
     return pushed
   }
