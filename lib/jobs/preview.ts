@@ -24,6 +24,7 @@ export function previewOf(
       at: outlines.at.slice(),
       source: outlines.source.slice(),
       depth: outlines.depth.slice(),
+      undecided: outlines.undecided.slice(),
       group: outlines.group.slice(),
       openEdges: cut(outlines.openEdges),
       openStart: outlines.openStart.slice(),
