@@ -1,6 +1,7 @@
 import { FIGURES } from '../section/figures'
 import type { Dimension, Figure, FigureGroup } from '../section/figures/figure'
 import type { Section, SectionAnswer } from '../section/types'
+import { survivingDigits } from '../units/digits'
 
 const UNIT: Record<Dimension, string> = {
   length: 'mm',
@@ -23,14 +24,13 @@ const GROUP: Record<FigureGroup, string> = {
   plastic: 'Plastic bending',
 }
 
-/** Ten digits, plain ASCII, so that a figure can be copied. */
-const digits = (value: number) => String(Number(value.toPrecision(10)))
+const SHOWN = 10
 
 /** The answer for people at a terminal: what was read, the figures by group, the findings. */
 export function tableOf({ source, unit, outlinesTotal, findings, findingsTotal, section }: SectionAnswer): string {
   const lines = [
     `${source.name}, ${source.bytes} bytes, SHA-256 ${source.sha256}`,
-    `1 drawing unit (${unit.drawing}) = ${digits(unit.mmPerUnit)} mm; declared: ${unit.declared}; ${outlinesTotal} outlines`,
+    `1 drawing unit (${unit.drawing}) = ${unit.mmPerUnit} mm; declared: ${unit.declared}; ${outlinesTotal} outlines`,
   ]
   if (section) for (const group of Object.keys(GROUP) as FigureGroup[]) lines.push('', GROUP[group], ...rowsOf(group, section))
   if (findings.length > 0) lines.push('', `Findings (${findingsTotal})`)
@@ -50,7 +50,11 @@ function rowsOf(group: FigureGroup, section: Section): string[] {
 
 const symbolOf = ({ symbol: { en } }: Figure) => en.base + (en.sub ? `_${en.sub}` : '')
 
+/** Only the digits that the drawing's own, its repairs and the numerics leave. */
 function shownValue(figure: Figure, section: Section): string {
   const value = figure.value(section)
-  return value === null || value === undefined ? '-' : digits(value)
+  if (value === null || value === undefined) return '-'
+  if (figure.dimension === 'count') return String(value)
+  const { digits = 0, repairs = 0, numerics = 0 } = section.origin[figure.key]?.plusMinus ?? {}
+  return survivingDigits(value, SHOWN, digits + repairs + numerics)
 }

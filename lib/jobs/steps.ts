@@ -1,26 +1,25 @@
 import type { Drawing } from '../dxf/drawing'
 import { type Selection, selectEdges } from '../dxf/select'
+import { type RegionAnswer, regionOf } from '../geometry/arrangement/regionOf'
 import type { Finding } from '../geometry/finding'
-import type { OutlineSet, Tolerances } from '../geometry/outlineSet'
 import { outlinesOf } from '../geometry/outlines'
+import type { OutlineSet, Tolerances } from '../geometry/outlineSet'
 import { mmPerUnit, type Recipe } from '../geometry/recipe'
 import type { Region, Repair } from '../geometry/region'
 import { cosSin, transformRegion } from '../geometry/transform'
-import type { Combination } from '../opinions/combination'
 import { sectionOf } from '../section/section'
 import type { Section } from '../section/types'
 import type { UsedMaterial } from './answer'
 import { taskFinding } from './findings'
-import { nestedRegion } from './nestedRegion'
-import type { Role } from './previewProtocol'
+import { massesOf } from './masses'
 import { tolerancesOf } from './tolerances'
 
 /** Which parts of a recipe each step depends on; a step whose key stays the same is not done again. */
 export function keysOf(recipe: Recipe, materials: Record<string, UsedMaterial>): Record<'chain' | 'combine' | 'figures', string> {
   const { layers, lineTypes, space, hatches, arcs, tolerance, part, bonds, makeUp, turn, material } = recipe
   // sentences of chaining speak mm, so the unit is among its parts
-  const chain = JSON.stringify([layers, lineTypes, space, hatches, arcs, tolerance, mmPerUnit(recipe)])
-  const combine = JSON.stringify([chain, part, bonds, makeUp])
+  const chain = JSON.stringify([layers, lineTypes, space, hatches, arcs, bonds, tolerance, mmPerUnit(recipe)])
+  const combine = JSON.stringify([chain, part, makeUp])
   return { chain, combine, figures: JSON.stringify([combine, turn, material, materials]) }
 }
 
@@ -34,21 +33,15 @@ export interface Chained {
 export function chainStep(drawing: Drawing, recipe: Recipe): Chained {
   const selection = selectEdges(drawing, recipe)
   const tolerances = tolerancesOf(drawing, selection.edges, recipe)
-  const options = { arcs: recipe.arcs, mmPerUnit: mmPerUnit(recipe) }
+  const options = { arcs: recipe.arcs, bonds: recipe.bonds, mmPerUnit: mmPerUnit(recipe) }
   return { selection, tolerances, outlines: outlinesOf(drawing.edges, selection.edges, tolerances, options) }
 }
 
-export interface Combined {
-  /** drawing units, before the turn */
-  metal: Region | null
-  roles: Role[]
-  combination: Combination
-  findings: Finding[]
-}
-
-/** Outlines to net metal, drawing units. */
-export function combineStep({ outlines, tolerances }: Chained, recipe: Recipe): Combined {
-  return nestedRegion(outlines, tolerances, recipe)
+/** Outlines to net metal, drawing units, before the turn. */
+export function combineStep({ outlines, tolerances }: Chained, recipe: Recipe): RegionAnswer {
+  if (outlines.count > 0) return regionOf(outlines, recipe, tolerances, mmPerUnit(recipe))
+  const findings = [taskFinding('outlines-none', { open: outlines.openStart.length - 1 })]
+  return { region: null, parts: [], roles: [], steps: [], findings, repairs: [] }
 }
 
 export interface Figures {
@@ -61,25 +54,21 @@ export interface Figures {
 /** Net metal to section: scaled to mm and turned first. */
 export function figuresStep(
   drawing: Drawing,
-  { outlines }: Chained,
-  { metal }: Combined,
+  combined: RegionAnswer,
   recipe: Recipe,
   materials: Record<string, UsedMaterial>,
 ): Figures {
-  if (!metal) return { section: null, region: null, findings: [] }
+  if (!combined.region) return { section: null, region: null, findings: [] }
   const scale = mmPerUnit(recipe)
-  const region = transformRegion(metal, { scale, turn: recipe.turn })
-  const material = recipe.material === null ? undefined : materials[recipe.material]
-  const { section, findings } = sectionOf(region, {
-    lastDigit: drawing.lastDigit * scale,
-    repairs: placed(outlines.repairs, scale, recipe.turn),
-    ...(material && { density: material.density }),
-  })
-  const unknown = recipe.material !== null && !material ? [taskFinding('material-unknown', { material: recipe.material })] : []
-  return { section, region, findings: [...findings, ...unknown] }
+  const placed = (region: Region) => transformRegion(region, { scale, turn: recipe.turn })
+  const region = placed(combined.region)
+  const { masses, findings } = massesOf(combined.parts, recipe.material, materials, placed)
+  const inputs = { lastDigit: drawing.lastDigit * scale, repairs: placedRepairs(combined.repairs, scale, recipe.turn), ...masses }
+  const result = sectionOf(region, inputs)
+  return { section: result.section, region, findings: [...findings, ...result.findings] }
 }
 
-function placed(repairs: Repair[], scale: number, turn: number): Repair[] {
+function placedRepairs(repairs: Repair[], scale: number, turn: number): Repair[] {
   const [cos, sin] = cosSin(turn)
   return repairs.map(({ x, y, gap, area }) => ({
     x: scale * (cos * x - sin * y),
@@ -87,26 +76,4 @@ function placed(repairs: Repair[], scale: number, turn: number): Repair[] {
     gap: gap * scale,
     area: area * scale * scale,
   }))
-}
-
-/** A profile outside these sizes (mm) is more likely read in the wrong unit. */
-const SMALLEST = 0.5
-const LARGEST = 20_000
-
-/** Findings of the whole: no outline at all, a unit other than declared, an unusual size. */
-export function sayings(drawing: Drawing, outlines: OutlineSet, recipe: Recipe, section: Section | null): Finding[] {
-  const findings: Finding[] = []
-  const alreadyFatal = [...drawing.findings, ...outlines.findings].some(({ severity }) => severity === 'error')
-  if (outlines.count === 0 && !alreadyFatal) findings.push(taskFinding('outlines-none', { open: outlines.openStart.length - 1 }))
-  const taken = mmPerUnit({ unit: recipe.unit, scale: 1, shrinkage: 1 })
-  if (drawing.declaredMm !== null && Math.abs(taken - drawing.declaredMm) > 1e-9 * taken) {
-    findings.push(taskFinding('unit-differs', { declared: drawing.declared, taken: recipe.unit }))
-  }
-  if (section) {
-    const { minX, minY, maxX, maxY } = section.extents
-    const [width, height] = [maxX - minX, maxY - minY]
-    const size = Math.max(width, height)
-    if (size <= SMALLEST || size >= LARGEST) findings.push(taskFinding('unit-size', { width, height }))
-  }
-  return findings
 }

@@ -1,15 +1,17 @@
 import type { Drawing, ReadLimits } from '../dxf/drawing'
 import { readDrawing } from '../dxf/read'
 import type { Tally } from '../dxf/select'
+import type { RegionAnswer } from '../geometry/arrangement/regionOf'
 import type { OutlineSet } from '../geometry/outlineSet'
-import type { Recipe } from '../geometry/recipe'
+import { mmPerUnit, type Recipe } from '../geometry/recipe'
 import type { Region } from '../geometry/region'
 import type { Combination } from '../opinions/combination'
 import type { SectionAnswer } from '../section/types'
 import { answerOf, type Source, type UsedMaterial } from './answer'
 import { memo } from './memo'
 import type { Role, Stage } from './previewProtocol'
-import { chainStep, combineStep, figuresStep, keysOf, sayings } from './steps'
+import { unitFindings, withoutFarFaults } from './sayings'
+import { chainStep, combineStep, figuresStep, keysOf } from './steps'
 
 export interface TaskResult {
   answer: SectionAnswer
@@ -43,40 +45,45 @@ export const sectionTask = (drawing: Drawing, source: Source, recipe: Recipe, ma
 export function createTask(drawing: Drawing, source: Source): SectionTask {
   const chained = memo(chainStep)
   const combined = memo(combineStep)
-  const figures = memo(figuresStep)
+  const figured = memo(figuresStep)
   return {
     drawing,
     run(recipe, materials, onStage = () => {}) {
       const keys = keysOf(recipe, materials)
       onStage('chain')
       const chain = chained(keys.chain, drawing, recipe)
+      const { selection, outlines } = chain
       onStage('combine')
       const combine = combined(keys.combine, chain, recipe)
       onStage('figures')
-      const { section, region, findings } = figures(keys.figures, drawing, chain, combine, recipe, materials)
-      const { selection, outlines } = chain
-      const said = [...drawing.findings, ...selection.findings, ...outlines.findings, ...combine.findings, ...findings]
-      const all = [...said, ...sayings(drawing, outlines, recipe, section)]
-      const isBlocked = all.some(({ severity }) => severity === 'error')
+      const figures = figured(keys.figures, drawing, combine, recipe, materials)
+      const taken = combine.steps.map(({ outline }) => outline)
+      const findings = [
+        ...drawing.findings,
+        ...selection.findings,
+        ...withoutFarFaults(outlines.findings, outlines, taken),
+        ...combine.findings,
+        ...figures.findings,
+        ...unitFindings(drawing, recipe, figures.section),
+      ]
       const unlisted = drawing.findingsTotal - drawing.findings.length + selection.findingsTotal - selection.findings.length
+      const findingsTotal = findings.length + unlisted
+      const isBlocked = findings.some(({ severity }) => severity === 'error')
+      const section = isBlocked ? null : figures.section
       const { layers, lineTypes, kinds, spaces } = selection
       return {
-        answer: answerOf({
-          source,
-          recipe,
-          drawing,
-          outlines,
-          findings: all,
-          findingsTotal: all.length + unlisted,
-          section: isBlocked ? null : section,
-        }),
+        answer: answerOf({ source, recipe, drawing, outlines, findings, findingsTotal, section }),
         drawing,
         tallies: { layers, lineTypes, kinds, spaces },
         outlines,
         roles: combine.roles,
-        region: isBlocked ? null : region,
-        combination: isBlocked || !combine.metal ? null : combine.combination,
+        region: section && figures.region,
+        combination: section && { outlines, steps: stepsAsked(combine), area: section.area / mmPerUnit(recipe) ** 2 },
       }
     },
   }
+}
+
+function stepsAsked({ steps }: RegionAnswer): Combination['steps'] {
+  return steps.flatMap(({ outline, does }) => (does === 'out' ? [] : [{ outline, does }]))
 }

@@ -27,7 +27,7 @@ function once() {
   tick()
   const combined = combineStep(chained, recipe)
   tick()
-  const { section, region } = figuresStep(drawing, chained, combined, recipe, {})
+  const { section, region } = figuresStep(drawing, combined, recipe, {})
   tick()
   if (!section || !region) throw new Error(`${positionals[0]} gives no section`)
   // what the limit program computes, on its own: area, centroid and second moments

@@ -32,7 +32,7 @@ describe('npm run section', () => {
     const { status, stdout, stderr } = section(casePath('p01.dxf'))
     expect(stderr).toBe('')
     expect(status).toBe(0)
-    expect(stdout).toMatch(/^ +A +2400 mm² +area/m)
+    expect(stdout).toMatch(/^ +A +2400\.0+ mm² +area/m)
     expect(stdout).toContain('unconfirmed')
   })
 
