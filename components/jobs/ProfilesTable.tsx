@@ -2,6 +2,7 @@
 import Link from 'next/link'
 import { useState } from 'react'
 import { FigureText } from '@/components/lists/FigureText'
+import { axisNames } from '@/lib/section/naming'
 import { useMay, useMe } from '@/components/shell/Me'
 import { Dialog } from '@/components/ui/Dialog'
 import { Menu, type MenuItem } from '@/components/ui/Menu'
@@ -15,7 +16,7 @@ import { useBinning } from './useBinning'
 type Figures = NonNullable<Profile['latest']>['figures']
 
 /** The figures of the list: the same that the API sorts by. */
-const FIGURES: { key: keyof Figures; name: string; sub?: string; quantity: Quantity; unit: string; sort?: string }[] = [
+const FIGURES: { key: keyof Figures; name: string; sub?: 'x' | 'y'; quantity: Quantity; unit: string; sort?: string }[] = [
   { key: 'area', name: 'A', quantity: 'area', unit: 'mm²', sort: 'area' },
   { key: 'mass', name: 'm', quantity: 'massPerLength', unit: 'kg/m', sort: 'mass' },
   { key: 'ix', name: 'I', sub: 'x', quantity: 'secondMoment', unit: 'mm⁴', sort: 'ix' },
@@ -25,8 +26,7 @@ const FIGURES: { key: keyof Figures; name: string; sub?: string; quantity: Quant
 
 /** All columns of a list of profiles, as table and export show them. */
 export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): Column<Profile>[] {
-  const { axes } = useMe().team.settings
-  const renamed = (sub: string | undefined) => (sub && axes === 'yz' ? { x: 'y', y: 'z' }[sub] : sub)
+  const names = axisNames(useMe().team.settings.axes)
   const columns: Column<Profile>[] = [
     {
       key: 'number',
@@ -84,7 +84,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
         head: (
           <>
             {name}
-            {sub && <sub>{renamed(sub)}</sub>}
+            {sub && <sub>{names[sub]}</sub>}
           </>
         ),
         sort,

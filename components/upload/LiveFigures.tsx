@@ -1,5 +1,7 @@
 'use client'
 import type { HoverStore } from '@/components/board/hover'
+import { figureSymbol, figureWord } from '@/lib/section/naming'
+import { totalPlusMinus } from '@/components/sheet/plusMinus'
 import { SymbolText } from '@/components/sheet/SymbolText'
 import { useMe } from '@/components/shell/Me'
 import { UnitText } from '@/components/ui/UnitText'
@@ -16,21 +18,24 @@ export function LiveFigures({ section, hover }: { section: Section | null; hover
   return (
     <ul
       aria-label="Figures as they stand"
-      className="flex flex-wrap gap-x-6 gap-y-1 border border-hair border-t-0 bg-sheet px-3 py-2"
+      className="flex flex-wrap gap-x-6 gap-y-1 border border-hair border-b-0 bg-sheet px-3 py-2"
     >
       {FIGURES_SHOWN.map((figure) => {
         const value = section ? figure.value(section) : null
-        const shown = value === null || value === undefined ? null : format(value, figure.dimension, settings)
+        const shown =
+          value === null || value === undefined
+            ? null
+            : format(value, figure.dimension, settings, totalPlusMinus(section?.origin[figure.key]?.plusMinus))
         return (
           <li
             key={figure.key}
-            title={figure.word}
+            title={figureWord(figure, settings)}
             onMouseEnter={() => hover.set({ kind: 'figure', key: figure.key })}
             onMouseLeave={() => hover.set(null)}
             className="min-w-24"
           >
             <span className="block text-small text-soft">
-              <SymbolText symbol={figure.symbol[settings.symbols]} />
+              <SymbolText symbol={figureSymbol(figure, settings)} />
             </span>
             <span className="whitespace-nowrap font-mono">
               {shown ? shown.text : '–'}{' '}

@@ -15,10 +15,10 @@ import { outlineOf, stepsOf } from './flow/makeUp'
 import { Panel } from './Panel'
 
 const ROLES: { does: Does; word: string }[] = [
-  { does: 'add', word: 'adds metal' },
-  { does: 'cut', word: 'cuts metal' },
-  { does: 'common', word: 'keeps what is common' },
-  { does: 'out', word: 'is left out' },
+  { does: 'add', word: 'adds' },
+  { does: 'cut', word: 'cuts' },
+  { does: 'common', word: 'common' },
+  { does: 'out', word: 'left out' },
 ]
 /** More rows than this are not a make-up but a sheet: what is left out is only counted. */
 const LISTED = 40
@@ -133,16 +133,16 @@ function Row({
       onMouseLeave={dark}
       onFocus={light}
       onBlur={dark}
-      className={classes('flex flex-wrap items-center gap-x-2 border-b border-line py-0.5', hot && 'bg-wash')}
+      className={classes('flex items-center gap-x-1 border-b border-line py-0.5', hot && 'bg-wash')}
     >
-      <span className={classes('w-7 font-mono text-small', hot ? 'text-accent' : 'text-soft')}>{id.slice(1)}</span>
-      <span className="min-w-16 flex-1 truncate" title={outline?.layer}>
+      <span className={classes('w-6 shrink-0 font-mono text-small', hot ? 'text-accent' : 'text-soft')}>{id.slice(1)}</span>
+      <span className="min-w-8 flex-1 truncate text-small" title={outline?.layer}>
         {outline?.layer}
       </span>
       <span className="whitespace-nowrap font-mono text-small">
         <FigureText value={outline ? outline.area * areaFactor : null} quantity="area" />
       </span>
-      <span className="flex items-center">
+      <span className="flex shrink-0 items-center">
         <select
           ref={select}
           aria-label={`What ${name} does`}
@@ -151,9 +151,9 @@ function Row({
             const chosen = ROLES.find(({ does }) => does === event.target.value)
             if (chosen) dispatch({ type: 'does', at: step.at, does: chosen.does, outlines })
           }}
-          className={classes('target rounded border bg-field px-2', role === null ? 'border-brick' : 'border-edge')}
+          className={classes('target w-24 rounded border bg-field px-1', role === null ? 'border-brick' : 'border-edge')}
         >
-          {role === null && <option value="">say what it does</option>}
+          {role === null && <option value="">say it</option>}
           {ROLES.map(({ does, word }) => (
             <option key={does} value={does}>
               {word}
@@ -162,7 +162,7 @@ function Row({
         </select>
         <Button
           look="quiet"
-          className="px-2"
+          className="min-w-8 px-1"
           disabled={first}
           aria-label={`Move ${name} up`}
           onClick={() => dispatch({ type: 'move', at: step.at, by: -1, outlines })}
@@ -171,7 +171,7 @@ function Row({
         </Button>
         <Button
           look="quiet"
-          className="px-2"
+          className="min-w-8 px-1"
           disabled={last}
           aria-label={`Move ${name} down`}
           onClick={() => dispatch({ type: 'move', at: step.at, by: 1, outlines })}

@@ -87,6 +87,7 @@ export function UploadFlow({
     <div className="grid items-start gap-5 lg:grid-cols-[minmax(0,1fr)_27rem]">
       <div className="lg:sticky lg:top-4">
         <FileLine file={file} state={state} dispatch={dispatch} onOther={onOther} />
+        <LiveFigures section={result?.answer.section ?? null} hover={hover} />
         {model && result ? (
           <Boundary what="The picture">
             <Board
@@ -104,7 +105,6 @@ export function UploadFlow({
             {preview.failure === null && !preview.cancelled && 'Reading the drawing …'}
           </div>
         )}
-        <LiveFigures section={result?.answer.section ?? null} hover={hover} />
         <Progress
           stage={preview.stage}
           failure={preview.failure}
@@ -114,7 +114,6 @@ export function UploadFlow({
         />
       </div>
       <div>
-        {saved && <Saved revision={saved.revision} number={saved.number} further={left} onFurther={further} />}
         {result && (
           <Panels
             {...{ result, choices, details, made, hover, picked, dispatch }}
@@ -124,7 +123,9 @@ export function UploadFlow({
             onShow={show}
           />
         )}
-        {!saved && (
+        {saved ? (
+          <Saved revision={saved.revision} number={saved.number} further={left} onFurther={further} />
+        ) : (
           <SavePanel
             {...{ state, choices, target, materials, ready, saving, problem, dispatch }}
             onTitle={(title) => target.kind === 'new' && setTarget({ ...target, title })}
