@@ -5,9 +5,9 @@ import { boardReducer, initialBoard } from '@/components/board/boardState'
 import { createHover } from '@/components/board/hover'
 import { placeInSection } from '@/components/board/regionModel'
 import { sheetAround, zoneOf } from '@/components/board/zones'
+import { BoardBoundary } from '@/components/sheet/BoardBoundary'
 import { writingOf } from '@/components/sheet/writing'
 import { useMe } from '@/components/shell/Me'
-import { Boundary } from '@/components/ui/Boundary'
 import type { Material } from '@/lib/api/schemas/people'
 import { mmPerUnit, type XY } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
@@ -89,7 +89,7 @@ export function UploadFlow({
         <FileLine file={file} state={state} dispatch={dispatch} onOther={onOther} />
         <LiveFigures section={result?.answer.section ?? null} hover={hover} />
         {model && result ? (
-          <Boundary what="The picture">
+          <BoardBoundary>
             <Board
               model={model}
               state={board}
@@ -99,7 +99,7 @@ export function UploadFlow({
               label={`Preview of ${file.name}`}
               onPick={pick}
             />
-          </Boundary>
+          </BoardBoundary>
         ) : (
           <div className="grid h-[22rem] place-content-center border border-hair bg-sheet text-soft md:h-[min(68vh,46rem)]">
             {preview.failure === null && !preview.cancelled && 'Reading the drawing …'}
