@@ -2,6 +2,7 @@ import { derivative, difference, product } from './bernstein'
 import { bezierXy } from './bezierXy'
 import { ARC, ELLIPSE, type EdgeTable, LINE } from './edges'
 import { jetAt, newJet } from './evaluate'
+import { integrate } from './gauss'
 import { compensatedSum } from './sum'
 
 /**
@@ -34,21 +35,7 @@ function rationalSegment(edges: EdgeTable, i: number): number {
     jetAt(edges, i, t, jet)
     return 0.5 * ((jet.x - x0) * jet.dy - (jet.y - y0) * jet.dx)
   }
-  const simpson = (a: number, fa: number, b: number, fb: number, m: number, fm: number, whole: number, depth: number): number => {
-    const lm = 0.5 * (a + m)
-    const rm = 0.5 * (m + b)
-    const flm = fan(lm)
-    const frm = fan(rm)
-    const left = ((m - a) / 6) * (fa + 4 * flm + fm)
-    const right = ((b - m) / 6) * (fm + 4 * frm + fb)
-    const off = left + right - whole
-    if (depth === 0 || Math.abs(off) <= 1e-15 * (Math.abs(left) + Math.abs(right))) return left + right + off / 15
-    return simpson(a, fa, m, fm, lm, flm, left, depth - 1) + simpson(m, fm, b, fb, rm, frm, right, depth - 1)
-  }
-  const fa = fan(0)
-  const fm = fan(0.5)
-  const fb = fan(1)
-  return simpson(0, fa, 1, fb, 0.5, fm, (fa + 4 * fm + fb) / 6, 14)
+  return integrate(fan, 0, 1)
 }
 
 /**

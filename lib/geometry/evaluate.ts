@@ -1,4 +1,5 @@
 import { ARC, BEZIER, ELLIPSE, type EdgeTable, LINE } from './edges'
+import { integrate } from './gauss'
 
 /** Position and first two derivatives of an edge by its parameter t in [0, 1]; reused, never kept. */
 export interface Jet {
@@ -100,32 +101,6 @@ export function curvatureOf({ dx, dy, ddx, ddy }: Jet): number {
   return (dx * ddy - dy * ddx) / Math.hypot(dx, dy) ** 3
 }
 
-const NODES = [0.1488743389816312, 0.4333953941292472, 0.6794095682990244, 0.8650633666889845, 0.9739065285171717]
-const WEIGHTS = [0.2955242247147529, 0.2692667193099963, 0.219086362515982, 0.1494513491505806, 0.0666713443086881]
-
-function speedIntegral(edges: EdgeTable, i: number, from: number, to: number, jet: Jet): number {
-  const middle = 0.5 * (from + to)
-  const half = 0.5 * (to - from)
-  let sum = 0
-  for (let j = 0; j < 5; j++) {
-    for (const side of [-1, 1]) {
-      jetAt(edges, i, middle + side * half * NODES[j], jet)
-      sum += WEIGHTS[j] * Math.hypot(jet.dx, jet.dy)
-    }
-  }
-  return half * sum
-}
-
-function adaptiveLength(edges: EdgeTable, i: number, from: number, to: number, whole: number, jet: Jet, depth: number): number {
-  const middle = 0.5 * (from + to)
-  const left = speedIntegral(edges, i, from, middle, jet)
-  const right = speedIntegral(edges, i, middle, to, jet)
-  if (depth === 0 || Math.abs(left + right - whole) <= 1e-14 * (left + right)) return left + right
-  return (
-    adaptiveLength(edges, i, from, middle, left, jet, depth - 1) + adaptiveLength(edges, i, middle, to, right, jet, depth - 1)
-  )
-}
-
 /** Length of edge i; ten-point Gauss, halved until it no longer changes, for ellipses and Bézier pieces. */
 export function lengthOf(edges: EdgeTable, i: number): number {
   const e = edges.ends
@@ -136,7 +111,7 @@ export function lengthOf(edges: EdgeTable, i: number): number {
       return edges.shapes[edges.shape[i] + 2] * Math.abs(edges.shapes[edges.shape[i] + 4])
     default: {
       const jet = newJet()
-      return adaptiveLength(edges, i, 0, 1, speedIntegral(edges, i, 0, 1, jet), jet, 24)
+      return integrate((t) => Math.hypot(jetAt(edges, i, t, jet).dx, jet.dy), 0, 1)
     }
   }
 }

@@ -19,7 +19,7 @@ export const GEOMETRY_FINDINGS = {
   'gap-closed': {
     severity: 'warning',
     say: (p) =>
-      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how}); another reasonable closing would change the area by ${text(p.area)} mm². Check the drawing there.`,
+      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how})${p.area === 0 ? '' : `; another reasonable closing would change the area by ${text(p.area)} mm²`}. Check the drawing there.`,
   },
   'chain-open': {
     severity: 'warning',
@@ -32,14 +32,14 @@ export const GEOMETRY_FINDINGS = {
       `${plural(p.ends, 'end', 'ends')} lie within ${mm(p.width)} at ${place(p)}, wider than the tolerance as a whole: which belong together is not clear, so none was joined. Lower the tolerance, or mend the drawing there.`,
   },
   branches: {
-    severity: 'error',
+    severity: 'warning',
     say: (p) =>
-      `${plural(p.edges, 'edge', 'edges')} meet in branches at ${place(p)}: more than two edges share an end. Remove the extra edges in the drawing.`,
+      `More than two edges share an end near ${place(p)}, and ${plural(p.edges, 'edge bounds', 'edges bound')} nothing there; left out. Remove extra edges in the drawing, or leave out their layer.`,
   },
   'face-metal-or-void': {
-    severity: 'error',
+    severity: 'warning',
     say: (p) =>
-      `Edges that branch enclose an area of ${text(p.area)} mm² at ${place(p)}: metal or void? Answer on the drawing; until then nothing is computed there.`,
+      `Edges that branch enclose an area of ${text(p.area)} mm² at ${place(p)}: metal or void? Answer on the drawing, or say what each outline does.`,
   },
   'face-answered': {
     severity: 'note',

@@ -25,7 +25,9 @@ function isRectangle({ edges, loopStart, bounds }: Loops, k: number): boolean {
   return true
 }
 
-const SHEET_RATIO = Math.SQRT2
+/** sides of the sheets of ISO 216, mm */
+const SHEETS = [210, 297, 420, 594, 841, 1189]
+const MARGINS = 40
 const FEWEST_CELLS = 4
 
 /** Rectangles of a cluster that fill their common box like the cells of a table; null where they do not. */
@@ -44,11 +46,11 @@ function tableOf(loops: Loops, cluster: number[]): number[] | null {
 
 /**
  * Looks for drawing frames and title blocks. A frame is a rectangle outside all others that touches nothing but title
- * blocks, holds every other outline, these fill less than half of it, and either has the ratio of a drawing sheet (√2
- * within 12 %, for margins; ISO 216) or holds outlines that hold others. A title block is at least four rectangles that
+ * blocks, holds every other outline, these fill less than half of it, and it holds a title block or outlines that hold
+ * others, or has the size of a drawing sheet. A title block is at least four rectangles that
  * touch one another and fill a box like cells. Common practice, no source: they are only offered, never decided.
  */
-export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]): SheetParts {
+export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][], mmPerUnit: number): SheetParts {
   const { count } = loops
   const touches = new Uint8Array(count)
   const apart = new Uint8Array(count)
@@ -60,7 +62,7 @@ export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]
   }
   const frames: number[] = []
   for (let level = 0; level < 3; level++) {
-    const k = frameAt(loops, depth, level, apart, touches)
+    const k = frameAt(loops, depth, level, apart, touches, mmPerUnit)
     if (k < 0) break
     frames.push(k)
     apart[k] = 1
@@ -68,7 +70,14 @@ export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]
   return { frames, titleBlocks }
 }
 
-function frameAt(loops: Loops, depth: Int32Array, level: number, apart: Uint8Array, touches: Uint8Array): number {
+function frameAt(
+  loops: Loops,
+  depth: Int32Array,
+  level: number,
+  apart: Uint8Array,
+  touches: Uint8Array,
+  mmPerUnit: number,
+): number {
   const { count, bounds, area } = loops
   let outer = -1
   let filled = 0
@@ -87,9 +96,15 @@ function frameAt(loops: Loops, depth: Int32Array, level: number, apart: Uint8Arr
     }
   }
   if (outer < 0 || inside === 0 || touches[outer] || !isRectangle(loops, outer) || filled > 0.5 * area[outer]) return -1
-  const width = bounds[4 * outer + 2] - bounds[4 * outer]
-  const height = bounds[4 * outer + 3] - bounds[4 * outer + 1]
-  const ratio = Math.max(width, height) / Math.min(width, height)
-  const likeSheet = ratio > SHEET_RATIO / 1.12 && ratio < SHEET_RATIO * 1.12
-  return likeSheet || deepest >= level + 2 ? outer : -1
+  if (deepest >= level + 2 || apart.includes(1)) return outer
+  const width = (bounds[4 * outer + 2] - bounds[4 * outer]) * mmPerUnit
+  const height = (bounds[4 * outer + 3] - bounds[4 * outer + 1]) * mmPerUnit
+  return isSheet(Math.max(width, height), Math.min(width, height)) ? outer : -1
+}
+
+/** A sheet of ISO 216 A4 to A0 less a margin of up to 20 mm a side. */
+function isSheet(long: number, short: number): boolean {
+  return SHEETS.some(
+    (side, n) => n > 0 && long <= side && long >= side - MARGINS && short <= SHEETS[n - 1] && short >= SHEETS[n - 1] - MARGINS,
+  )
 }

@@ -1,19 +1,82 @@
+import { facesOf } from './arrangement/faces'
 import type { ClosedLoops } from './closedLoops'
+import { type EdgeTable, pushCopy } from './edges'
 import type { Finding } from './finding'
 import { geometryFinding } from './findings'
+import { insideLoop } from './inside'
+import { interiorPoint } from './interiorPoint'
 import type { Tolerances } from './outlineSet'
 import type { Bond } from './recipe'
 
 export interface NetOutlines {
-  /** 1 for each loop that a person has to decide about */
+  /** for each loop 1 where a person has to decide about it */
   undecided: Uint8Array
   findings: Finding[]
 }
 
-export function netOutlines(closed: ClosedLoops, _tolerances: Tolerances, _mmPerUnit: number, _bonds: Bond[]): NetOutlines {
-  const findings = closed.nets.map((net) => {
-    const at: [number, number] = [net.ends[0], net.ends[1]]
-    return geometryFinding('branches', { edges: net.count, x: at[0], y: at[1] }, at)
-  })
-  return { undecided: new Uint8Array(closed.loopStart.length - 1), findings }
+/** A face of a net: rows from … to − 1 of its table. */
+interface Face {
+  edges: EdgeTable
+  from: number
+  to: number
+  area: number
+  inside: [number, number]
+}
+
+/**
+ * Turns nets of branching edges into outlines, appended to `closed`. A net with one face is an outline with loose ends.
+ * Of several faces each asks "metal or void?": unanswered ones are outlines that wait for a decision; an answered one is
+ * an outline where nesting among the other outlines then gives the answer, and none where its surroundings give it.
+ */
+export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUnit: number, bonds: Bond[]): NetOutlines {
+  const findings: Finding[] = []
+  const { edges, loopStart } = closed
+  const drawn = loopStart.length - 1
+  const undecided: number[] = new Array(drawn).fill(0)
+  const take = ({ edges: from, from: first, to }: Face, waits: 0 | 1) => {
+    for (let i = first; i < to; i++) pushCopy(edges, from, i)
+    loopStart.push(edges.count)
+    undecided.push(waits)
+  }
+  for (const net of closed.nets) {
+    const { faces, dangling, tooMany } = facesIn(net, tolerances)
+    if (tooMany || dangling > 0 || faces.length === 0) {
+      const at: [number, number] = [net.ends[0], net.ends[1]]
+      const code = tooMany ? 'crossings-too-many' : 'branches'
+      findings.push(geometryFinding(code, { edges: tooMany ? net.count : dangling, x: at[0], y: at[1] }, at))
+    }
+    for (const face of faces) {
+      const [x, y] = face.inside
+      const params = { area: face.area * mmPerUnit ** 2, x, y }
+      const size = Math.sqrt(face.area)
+      const answer = bonds.find(({ at }) => insideLoop(face.edges, face.from, face.to, at[0], at[1]))
+      if (faces.length === 1) take(face, 0)
+      else if (!answer || answer.is === 'contact') {
+        take(face, 1)
+        findings.push(geometryFinding('face-metal-or-void', params, face.inside, size))
+      } else {
+        const metal = answer.is !== 'void'
+        if (metal === (depthAt(closed, drawn, x, y) % 2 === 0)) take(face, 0)
+        findings.push(geometryFinding('face-answered', { ...params, is: metal ? 'metal' : 'void' }, face.inside, size))
+      }
+    }
+  }
+  return { undecided: Uint8Array.from(undecided), findings }
+}
+
+function facesIn(net: EdgeTable, tolerances: Tolerances): { faces: Face[]; dangling: number; tooMany: boolean } {
+  const { edges, loopStart, area, dangling, tooMany } = facesOf(net, null, tolerances)
+  const faces: Face[] = []
+  for (let k = 0; k < area.length; k++) {
+    const inside = interiorPoint(edges, loopStart[k], loopStart[k + 1])
+    if (inside) faces.push({ edges, from: loopStart[k], to: loopStart[k + 1], area: area[k], inside })
+  }
+  return { faces, dangling: dangling.length, tooMany }
+}
+
+/** How many of the outlines drawn as such hold a point. */
+function depthAt({ edges, loopStart }: ClosedLoops, drawn: number, x: number, y: number): number {
+  let depth = 0
+  for (let k = 0; k < drawn; k++) if (insideLoop(edges, loopStart[k], loopStart[k + 1], x, y)) depth++
+  return depth
 }

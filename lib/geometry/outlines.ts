@@ -95,7 +95,7 @@ type Completed = Omit<OutlineSet, 'openEdges' | 'openStart' | 'repairs'>
 export function completed(related: Related, tolerances: Tolerances, mmPerUnit: number, before: Finding[]): Completed {
   const findings = [...before, ...related.findings]
   const { count, bounds, at } = related
-  const { frames, titleBlocks } = sheetParts(related, related.depth, related.clusters)
+  const { frames, titleBlocks } = sheetParts(related, related.depth, related.clusters, mmPerUnit)
   const alone = new Uint8Array(count)
   for (const k of frames) alone[k] = 1
   const { group, groups } = groupOutlines(bounds, count, alone)

@@ -1,8 +1,13 @@
 import Flatbush from 'flatbush'
-import { boundsOfEdges } from './bounds'
+import { boundsOfEdges, unionOfBoxes } from './bounds'
+import type { Finding } from './finding'
+import { type GeometryCode, geometryFinding } from './findings'
 import { nearestOn } from './nearest'
-import type { OutlineSet } from './outlineSet'
+import type { OutlineSet, Tolerances } from './outlineSet'
+import { completed } from './outlines'
 import type { XY } from './recipe'
+import { relate } from './relations'
+import { selectLoops } from './selectLoops'
 
 /**
  * For each point the outline nearest to it (distance to its boundary; of equally near ones the smaller in area), −1
@@ -32,4 +37,73 @@ export function nearestOutlines(set: Pick<OutlineSet, 'edges' | 'loopStart' | 'c
     }
   }
   return picked
+}
+
+/** Findings that are made anew for the part. */
+const OF_THE_WHOLE: ReadonlySet<string> = new Set<GeometryCode>([
+  'outlines-cross',
+  'outlines-touch',
+  'outline-crosses-itself',
+  'crossings-too-many',
+  'groups-apart',
+  'frame-found',
+  'title-block-found',
+  'chords-on-circle',
+])
+
+/** A point further from every outline than this share of the nearest one's size names none. */
+const FARTHEST = 0.05
+
+/**
+ * Only the outlines that the recipe's part names (a point on each), nested and grouped among themselves. Findings placed
+ * elsewhere, open chains and repairs elsewhere are left out; a point that lies on no outline gives one.
+ */
+export function pickOutlines(set: OutlineSet, part: XY[], tolerances: Tolerances, mmPerUnit: number): OutlineSet {
+  const picked = nearestOutlines(set, part)
+  const taken = new Uint8Array(set.count)
+  const findings: Finding[] = []
+  for (const [p, k] of picked.entries()) {
+    const [x, y] = part[p]
+    if (k >= 0 && distanceTo(set, k, x, y) <= FARTHEST * sizeOf(set, k)) taken[k] = 1
+    else findings.push(geometryFinding('part-not-found', { x, y }, [x, y]))
+  }
+  const kept = selectLoops(set.edges, set.loopStart, (k) => taken[k] === 1)
+  const related = relate(
+    kept.edges,
+    kept.loopStart,
+    tolerances.snap,
+    set.undecided.filter((_, k) => taken[k]),
+  )
+  const box = unionOfBoxes(related.bounds, 0, related.count)
+  const near = (x: number, y: number) =>
+    x >= box[0] - tolerances.chaining &&
+    x <= box[2] + tolerances.chaining &&
+    y >= box[1] - tolerances.chaining &&
+    y <= box[3] + tolerances.chaining
+  for (const finding of set.findings)
+    if (!OF_THE_WHOLE.has(finding.code) && (!finding.at || near(...finding.at))) findings.push(finding)
+  return {
+    ...completed(related, tolerances, mmPerUnit, findings),
+    ...selectOpen(set, near),
+    repairs: set.repairs.filter(({ x, y }) => near(x, y)),
+  }
+}
+
+function distanceTo({ edges, loopStart }: OutlineSet, k: number, x: number, y: number): number {
+  let least = Number.POSITIVE_INFINITY
+  for (let i = loopStart[k]; i < loopStart[k + 1]; i++) least = Math.min(least, nearestOn(edges, i, x, y).distance)
+  return least
+}
+
+const sizeOf = ({ bounds }: OutlineSet, k: number) =>
+  Math.max(bounds[4 * k + 2] - bounds[4 * k], bounds[4 * k + 3] - bounds[4 * k + 1])
+
+/** Open chains with an end near the part. */
+function selectOpen({ openEdges, openStart }: OutlineSet, near: (x: number, y: number) => boolean) {
+  const e = openEdges.ends
+  const { edges, loopStart } = selectLoops(openEdges, openStart, (k) => {
+    for (let j = 4 * openStart[k]; j < 4 * openStart[k + 1]; j += 2) if (near(e[j], e[j + 1])) return true
+    return false
+  })
+  return { openEdges: edges, openStart: loopStart }
 }

@@ -11,7 +11,7 @@ import type { OutlineSet } from './outlineSet'
 
 export type Related = Pick<
   OutlineSet,
-  'edges' | 'loopStart' | 'count' | 'area' | 'bounds' | 'at' | 'source' | 'depth' | 'clusters' | 'findings'
+  'edges' | 'loopStart' | 'count' | 'area' | 'bounds' | 'at' | 'source' | 'depth' | 'undecided' | 'clusters' | 'findings'
 >
 
 /** Areas and bounds of loops. */
@@ -88,5 +88,5 @@ export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, u
   for (const { loop } of crossings.selfCrossing) depth[loop] = -1
   for (let k = 0; k < loops.count; k++) if (undecided[k] || crossings.tooMany) depth[k] = -1
   const at = namesOf(loops, crossings.touched)
-  return { ...loops, at, source, depth, clusters, findings: contactFindings(crossings) }
+  return { ...loops, at, source, depth, undecided, clusters, findings: contactFindings(crossings) }
 }
