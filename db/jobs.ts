@@ -66,6 +66,9 @@ export async function getJob(db: Db, teamId: string, id: string): Promise<Job> {
   return toView(row)
 }
 
+export const isJob = async (db: Db, teamId: string, id: string): Promise<boolean> =>
+  (await jobs(db, teamId).where('job.id', '=', id).executeTakeFirst()) !== undefined
+
 /** A job that is not in the bin, for what is put into it. */
 export async function requireOpenJob(trx: Trx, teamId: string, id: string): Promise<Job> {
   const job = await getJob(trx, teamId, id)

@@ -1,11 +1,14 @@
-import { beforeAll, expect, test } from 'vitest'
+import { afterAll, afterEach, beforeAll, expect, test } from 'vitest'
 import { invite } from '@/db/invitations'
 import { listMaterials } from '@/db/materials'
 import type { Handler } from '@/lib/api/route'
 import { can, PERMISSIONS, type Permission, ROLES } from '@/lib/auth/permissions'
+import { opinionsSettled } from '@/lib/jobs/saveRevision'
+import type { SectionPool } from '@/lib/jobs/server-pool'
 import { call, givenDatabase } from '@/tests/support/call'
 import { givenMember, givenTeam, type Member } from '@/tests/support/team'
 import { givenJob, givenProfile, givenRevision } from '@/tests/support/things'
+import { givenPool } from '@/tests/support/upload'
 import { allRoutes, type Found } from './routes'
 
 const NOBODY = 'a'.repeat(26)
@@ -29,9 +32,13 @@ const BODIES: Record<string, unknown> = {
 const QUERIES: Record<string, string> = { 'GET /files': `?sha256=${'0'.repeat(64)}`, 'GET /invitations/lookup': '?token=none' }
 
 let routes: Found[] = []
+let pool: SectionPool
 beforeAll(async () => {
   routes = await allRoutes()
+  pool = await givenPool()
 })
+afterEach(() => opinionsSettled())
+afterAll(() => pool.close())
 
 const isHandler = (handler: Found['handler']): handler is Handler => handler.permission !== undefined
 const isPermission = (name: string): name is Permission => name in PERMISSIONS

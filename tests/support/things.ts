@@ -8,8 +8,10 @@ import { openJob } from '@/db/jobs'
 import { addProfile } from '@/db/profiles'
 import { addRevision } from '@/db/revisions'
 import { createHash } from 'node:crypto'
+import { packRegion } from '@/lib/geometry/pack'
 import { DEFAULT_RECIPE } from '@/lib/geometry/recipe'
 import { answerWith, rectangleSection } from './answer'
+import { rectangle, regionOf } from './region'
 
 export const givenJob = (database: Database, actor: Actor, title = 'Job') =>
   database.write.transaction().execute((trx) => openJob(trx, actor, { title, client: '' }))
@@ -28,7 +30,7 @@ export async function givenRevision(
   const id = newId()
   const sha256 = createHash('sha256').update(bytes).digest('hex')
   await writeBlob(`${id}-file`, [bytes])
-  await writeBlob(`${id}-region`, [new Uint8Array([1, 2, 3])])
+  await writeBlob(`${id}-region`, [packRegion(regionOf(rectangle(0, 0, b, h)))])
   const section = rectangleSection(b, h, 2700)
   await database.write.transaction().execute(async (trx) => {
     const sourceFileId = await linkFile(trx, actor, { sha256, bytes: bytes.length, blobId: `${id}-file` })
