@@ -20,10 +20,16 @@ const CONDITION = /^([a-z0-9]+)(<=|>=|=|<|>|≤|≥)(-?[0-9]+(?:[.,][0-9]+)?(?:e
 const isFigure = (word: string): word is Figure => word in FIGURES
 const OPS: Record<string, Condition['op']> = { '<': '<', '<=': '<=', '≤': '<=', '=': '=', '>': '>', '>=': '>=', '≥': '>=' }
 
+/** `Ix ≥ 40 cm⁴` as people write it: the blanks inside a condition are dropped. */
+const closedUp = (q: string) =>
+  q
+    .replace(/\s*(<=|>=|[<>=≤≥])\s*/g, '$1')
+    .replace(/([<>=≤≥]-?[\d.,]+)\s+((?:mm|cm|m|in|ft)[24²⁴]?|kg\/m|lb\/ft)(?=\s|$)/gi, '$1$2')
+
 /** `mullion ix>=40cm4 mass<=2.1`: words to look for and conditions to meet. What is no condition is a word. */
 export function readSearch(q: string): Search {
   const search: Search = { words: [], conditions: [] }
-  for (const part of q.split(/\s+/).filter(Boolean)) {
+  for (const part of closedUp(q).split(/\s+/).filter(Boolean)) {
     const condition = readCondition(part)
     if (condition) search.conditions.push(condition)
     else search.words.push(part)
