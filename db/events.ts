@@ -41,7 +41,13 @@ const isVerb = (text: string): text is Verb => text in VERBS
 
 export async function listEvents(db: Db, teamId: string, query: EventQuery) {
   let found = db.selectFrom('event').leftJoin('user', 'user.id', 'event.actorId').where('event.teamId', '=', teamId)
-  if (query.subjectId) found = found.where('event.subjectId', '=', query.subjectId)
+  const subject = query.subjectId
+  if (subject)
+    found = found.where((where) => {
+      const own = where.selectFrom('revision').select('revision.id')
+      const revisions = own.where('revision.teamId', '=', teamId).where('revision.profileId', '=', subject)
+      return where.or([where('event.subjectId', '=', subject), where('event.subjectId', 'in', revisions)])
+    })
   const rows = found.select([
     'event.id',
     'event.at',
