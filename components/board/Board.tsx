@@ -39,7 +39,7 @@ interface Props {
   /** said to those who cannot see it */
   label: string
   onPick?: (outlineId: string | null) => void
-  /** the title block, beside the tools */
+  /** the title block, at the foot */
   children?: ReactNode
 }
 
@@ -85,7 +85,7 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         aria-label={label}
         aria-describedby={`${id}-keys`}
         viewBox={`0 0 ${viewport.width} ${viewport.height}`}
-        className={`block h-[22rem] w-full select-none -outline-offset-2 md:h-[min(68vh,46rem)] ${
+        className={`block h-[22rem] w-full select-none outline-accent -outline-offset-2 focus-visible:outline-2 md:h-[min(68vh,46rem)] ${
           state.tool === 'look' ? 'touch-pan-y' : 'touch-none cursor-crosshair'
         }`}
       >
@@ -102,7 +102,7 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
       <p id={`${id}-keys`} className="sr-only">
         Arrow keys move the drawing, plus and minus zoom, F fits it, M measures, U places an axis of your own, Escape ends a tool.
       </p>
-      <div className="flex flex-wrap items-stretch justify-between border-t border-hair">
+      <div className="border-hair border-t">
         <Toolbar
           state={state}
           dispatch={dispatch}
@@ -110,11 +110,11 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
           zoom={(factor) => control.zoom({ x: viewport.width / 2, y: viewport.height / 2 }, factor)}
           fit={control.fit}
         />
-        {children}
       </div>
       <div className="flex min-h-12 items-center border-t border-line px-3 py-1.5">
         {tool.readout || <Legend model={model} shown={state.shown} names={writing.names} />}
       </div>
+      {children}
     </div>
   )
 }

@@ -1,7 +1,8 @@
 import type { ReactNode } from 'react'
 import type { Shown } from './annotate'
 import { centroidMark } from './marks'
-import type { AxisNames, BoardModel } from './model'
+import type { AxisNames } from '@/lib/section/naming'
+import type { BoardModel } from './model'
 
 function Row({ sample, children }: { sample: ReactNode; children: ReactNode }) {
   return (

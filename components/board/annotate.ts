@@ -4,7 +4,7 @@ import { type Annotations, emptyAnnotations, merge } from './annotation'
 import { type AxisId, axesOf, plasticAxesOf } from './axesOf'
 import { drawAxis, type Frame } from './axisLines'
 import { extentDimensions } from './dimensionLines'
-import type { AxisNames } from './model'
+import type { AxisNames } from '@/lib/section/naming'
 import type { Viewport } from './view'
 
 /** Which annotations a person has switched on. */

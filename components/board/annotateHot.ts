@@ -71,27 +71,40 @@ function fibreDistance(line: AxisLine, offset: number, frame: Frame, length: Wri
   return drawDimension({ id: 'fibre-distance', a, b, off: 0, text: length(Math.abs(offset)), look: 'hot', textLook: 'principal' })
 }
 
-/** The direction of the neutral axis of free plastic bending, drawn through the centroid. */
-function freePlastic(section: Section, frame: Frame, hot: Shows, { names }: Writing): Annotations {
-  if (hot !== 'freePlasticX' && hot !== 'freePlasticY') return emptyAnnotations()
-  const [degrees, about] = hot === 'freePlasticX' ? [section.freePlastic.angleX, names.x] : [section.freePlastic.angleY, names.y]
-  return drawAxis(
-    {
-      id: 'free-plastic',
-      look: 'hot',
-      through: section.centroid,
-      angle: (degrees * Math.PI) / 180,
-      text: `neutral direction, M about ${about}`,
-      textLook: 'principal',
-      beyond: 30,
-      arrow: false,
-    },
-    frame,
-  )
+/** The neutral axis of free plastic bending: it halves the area, `offset` mm to the left of the centroid. */
+function freePlastic(section: Section, frame: Frame, hot: Shows, offset: number): Annotations {
+  const angle = freePlasticAngle(section, hot)
+  if (angle === null) return emptyAnnotations()
+  const line: AxisLine = {
+    ...shifted({ through: section.centroid, angle: (angle * Math.PI) / 180 }, offset),
+    id: 'free-plastic',
+    look: 'hot',
+    text: 'neutral axis',
+    textLook: 'principal',
+    beyond: 30,
+    arrow: false,
+  }
+  return drawAxis(line, frame)
 }
 
-/** What the board draws while a figure is pointed at, over everything else. */
-export function annotateHot(section: Section, frame: Frame, hot: Shows, shown: Shown, writing: Writing): Annotations {
+/** Direction of that neutral axis, degrees from +x; null for any other figure. */
+export function freePlasticAngle({ freePlastic: free }: Section, hot: Shows): number | null {
+  if (hot === 'freePlasticX') return free.angleX
+  return hot === 'freePlasticY' ? free.angleY : null
+}
+
+/**
+ * What the board draws while a figure is pointed at, over everything else. `freeOffset` is where the neutral axis of free
+ * plastic bending lies, mm to the left of the centroid; read for its figures only.
+ */
+export function annotateHot(
+  section: Section,
+  frame: Frame,
+  hot: Shows,
+  shown: Shown,
+  writing: Writing,
+  freeOffset: number,
+): Annotations {
   const { circle } = section
   const diameter = `Ø ${writing.length(2 * circle.radius)}`
   const drawnCircle = circleWithDiameter(frame.view, circle, circle.radius, diameter, 'hot')
@@ -99,7 +112,7 @@ export function annotateHot(section: Section, frame: Frame, hot: Shows, shown: S
     ...axes(section, frame, hot, shown, writing),
     fibre(section, frame, hot, writing),
     plastic(section, frame, hot, writing),
-    freePlastic(section, frame, hot, writing),
+    freePlastic(section, frame, hot, freeOffset),
     hot === 'circle' ? (shown.circle ? withoutLabels(drawnCircle) : drawnCircle) : emptyAnnotations(),
     ...(hot === 'extents' && !shown.dimensions ? extentDimensions(frame, writing.length) : []),
   ])

@@ -71,7 +71,10 @@ export function clipRay(
 }
 
 /** From where to where along the axis the line runs, px from its point: as far as the drawing, and a little more. */
-function reach(line: AxisLine, { view, extents }: Frame): { from: number; to: number } {
+export function reachOf(
+  line: Pick<AxisLine, 'through' | 'angle' | 'beyond'>,
+  { view, extents }: Frame,
+): { from: number; to: number } {
   const c = Math.cos(line.angle)
   const s = Math.sin(line.angle)
   const ts = cornersOf(extents).map((p) => view.scale * ((p.x - line.through.x) * c + (p.y - line.through.y) * s))
@@ -93,7 +96,7 @@ function rays(p: ScreenPoint, d: ScreenPoint, from: number, to: number): string 
 export function seenPart(line: AxisLine, frame: Frame) {
   const p = toScreen(frame.view, line.through)
   const d = directionOnScreen(line.angle)
-  const wanted = reach(line, frame)
+  const wanted = reachOf(line, frame)
   const seen = clipRay(p, d, wanted.from, wanted.to, frame.viewport)
   return seen && { p, d, ...seen }
 }

@@ -49,11 +49,3 @@ export interface BoardMark {
   size: number
   message: string
 }
-
-/** How the axes are called on this team's sheets. */
-export interface AxisNames {
-  x: string
-  y: string
-  axis1: string
-  axis2: string
-}

@@ -15,7 +15,7 @@ export function CopyButton({ text, name, word = 'Copy' }: { text: string; name: 
       title={name}
       aria-label={said ?? name}
       onClick={copy}
-      className="target rounded border border-transparent px-2 text-small text-soft hover:border-hair hover:text-ink"
+      className="min-h-7 rounded border border-transparent px-1.5 text-small max-md:min-h-12 text-soft hover:border-hair hover:text-ink"
     >
       {said ?? word}
     </button>

@@ -3,8 +3,8 @@ import { Menu, type MenuItem } from '@/components/ui/Menu'
 import type { TeamSettings } from '@/lib/api/schemas/people'
 
 const UNITS: [TeamSettings['lengthUnit'], string][] = [
-  ['mm', 'mm, mm², mm³, mm to the fourth'],
-  ['cm', 'mm, cm², cm³, cm to the fourth'],
+  ['mm', 'mm for everything'],
+  ['cm', 'mm, but areas and moduli in cm'],
   ['in', 'inch and pound'],
 ]
 const SYMBOLS: [TeamSettings['symbols'], string][] = [

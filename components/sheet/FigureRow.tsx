@@ -39,12 +39,12 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
         onMouseLeave={hide}
         className={classes('relative', hot && 'bg-wash shadow-[-0.5rem_0_0_var(--wash),0.5rem_0_0_var(--wash)]')}
       >
-        <th scope="row" className="py-1 pr-2 text-left font-normal text-soft max-md:py-2">
-          <span className="grid grid-cols-[4.1rem_1fr] items-baseline">
+        <th scope="row" className="py-1 pr-2 text-left align-baseline font-normal text-soft max-md:py-2">
+          <span className="grid grid-cols-[4.6rem_1fr] items-baseline">
             <b className={classes('font-semibold', hot ? 'text-accent' : 'text-ink')}>
               <SymbolText symbol={figureSymbol(figure, display)} />
             </b>
-            <span className="leading-snug">{figureWord(figure, display)}</span>
+            <span className="text-small leading-snug">{figureWord(figure, display)}</span>
           </span>
         </th>
         <td className="whitespace-nowrap text-right align-baseline font-medium font-mono">
@@ -61,7 +61,7 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
             {text}
           </button>
         </td>
-        <td className="w-14 whitespace-nowrap pl-1.5 align-baseline text-soft">
+        <td className="w-14 whitespace-nowrap pl-1.5 align-baseline text-small text-soft">
           <UnitText unit={unit} />
         </td>
         <td className="w-4 text-right align-baseline">

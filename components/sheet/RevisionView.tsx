@@ -11,6 +11,7 @@ import type { TeamSettings } from '@/lib/api/schemas/people'
 import type { Profile } from '@/lib/api/schemas/profile'
 import type { Revision, RevisionSummary } from '@/lib/api/schemas/revision'
 import type { Region } from '@/lib/geometry/region'
+import { bundlesOf } from '@/lib/section/bundles'
 import { BoardBoundary } from './BoardBoundary'
 import { Cautions } from './Cautions'
 import { DisplaySwitch } from './DisplaySwitch'
@@ -48,6 +49,7 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
   const [tab, setTab] = useState('sheet')
   const { data: events } = useEvents(profile.id)
   const model = useMemo(() => region && regionModel(region, answer), [region, answer])
+  const bundles = useMemo(() => region && bundlesOf(region), [region])
   const writing = useMemo(() => writingOf(display), [display])
   const sheet = useMemo(() => model && sheetAround(model.extents), [model])
   const markOf = (index: number) => model?.marks.find((mark) => mark.index === index)
@@ -75,10 +77,10 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
       panel: (
         <>
           {answer.section && <SectionSheet section={answer.section} display={display} hover={hover} />}
-          {answer.section && region && (
+          {answer.section && bundles && (
             <>
-              <SharePanel {...{ region, display, state, dispatch }} section={answer.section} />
-              <UserAxisPanel {...{ region, display, state, dispatch }} section={answer.section} />
+              <SharePanel {...{ bundles, display, state, dispatch }} section={answer.section} />
+              <UserAxisPanel {...{ bundles, display, state, dispatch }} section={answer.section} />
             </>
           )}
           <Cautions revision={revision} />

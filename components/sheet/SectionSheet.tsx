@@ -36,7 +36,7 @@ export function SectionSheet({ section, display, hover }: { section: Section; di
   return (
     <>
       {GROUPS.map(({ group, title }) => (
-        <section key={group} className="border-hair border-t py-2">
+        <section key={group} className="border-hair border-t py-2 first:border-t-0 first:pt-0">
           <table className="w-full border-collapse">
             <caption className="pb-1 text-left font-semibold text-small text-soft">{title(names)}</caption>
             <tbody>

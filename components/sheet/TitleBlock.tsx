@@ -3,9 +3,9 @@ import type { Revision } from '@/lib/api/schemas/revision'
 
 function Cell({ name, children, title }: { name: string; children: ReactNode; title?: string }) {
   return (
-    <div className="border-line border-l px-3 py-1" title={title}>
+    <div className="-ml-px min-w-0 border-line border-l px-3 py-1" title={title}>
       <dt className="text-soft text-tiny">{name}</dt>
-      <dd className="whitespace-nowrap text-small">{children}</dd>
+      <dd className="truncate text-small">{children}</dd>
     </div>
   )
 }
@@ -18,7 +18,7 @@ export function TitleBlock({ revision }: { revision: Revision }) {
   const unit = answer.unit.drawing === String(answer.unit.mmPerUnit) ? `${answer.unit.mmPerUnit} mm` : answer.unit.drawing
   const how = confirmation ? `${confirmation.what}, ${CONFIRMED[confirmation.by]}` : 'Nobody has confirmed the size yet'
   return (
-    <dl className="flex flex-wrap border-hair border-l-0 md:border-l">
+    <dl className="grid grid-cols-2 border-hair border-t sm:grid-cols-[2fr_1fr_1fr_auto]">
       <Cell name="Drawn in" title={how}>
         {unit}, {confirmation ? `confirmed by ${createdBy.name}` : <b className="font-semibold text-ochre">size not confirmed</b>}
       </Cell>

@@ -10,14 +10,17 @@ const SUPERSCRIPTS: Record<number, string> = { 2: '²', 3: '³' }
 export const unitWords = (parts: readonly UnitPart[]) =>
   parts.map(({ base, power }) => base + (power === 1 ? '' : (SUPERSCRIPTS[power] ?? power))).join('')
 
+/** A drawing writes 50, not 50.000. */
+const withoutZeros = (text: string) => (text.includes('.') ? text.replace(/\.?0+$/, '') : text)
+
 /** How the board writes for these settings: axis names, lengths with their unit, angles. */
 export function writingOf(display: TeamSettings): Writing {
   return {
     names: axisNames(display.axes),
     length: (mm) => {
       const { text, unit } = format(mm, 'length', display)
-      return `${text} ${unitWords(unit)}`
+      return `${withoutZeros(text)} ${unitWords(unit)}`
     },
-    angle: (degrees) => `${format(degrees, 'angle', display).text}°`,
+    angle: (degrees) => `${withoutZeros(format(degrees, 'angle', display).text)}°`,
   }
 }

@@ -81,13 +81,13 @@ test('plastic axes lie off the centroid as the section says: x along +y, y along
 })
 
 test('pointing at Ix draws the horizontal axis and no other', () => {
-  const { strokes, lines } = annotateHot(section, frame, 'axisX', everything, writing)
+  const { strokes, lines } = annotateHot(section, frame, 'axisX', everything, writing, 0)
   expect(strokes.map(({ id }) => id)).toEqual(['hot-x'])
   expect(lines[0].a.y).toBeWithin(toScreen(frame.view, section.centroid).y, { absolute: 1e-9 })
   expect(lines[0].b.y).toBe(lines[0].a.y)
 })
 
 test('pointing at the modulus to the top fibre draws the fibre and its distance from x', () => {
-  const { labels } = annotateHot(section, frame, 'fibreTop', everything, writing)
+  const { labels } = annotateHot(section, frame, 'fibreTop', everything, writing, 0)
   expect(labels.map(({ text }) => text)).toEqual(['fibre', `${(60 - section.centroid.y).toFixed(1)} mm`])
 })
