@@ -41,13 +41,17 @@ function reportUnknownNames(drawing: Drawing, { layers, lineTypes, space }: Sele
 
 function reportRemarks({ entities, remarks }: Drawing, why: Uint8Array, findings: FindingList): void {
   const taken = new Uint8Array(remarks.length + 1)
-  for (let row = 0; row < entities.count; row++) if (why[row] === TAKEN) taken[entities.remark[row]] = 1
+  const left = new Uint8Array(remarks.length + 1)
+  for (let row = 0; row < entities.count; row++) {
+    const at = why[row] === TAKEN ? taken : left
+    at[entities.remark[row]] = 1
+  }
   let first = ''
   let count = 0
   for (let i = 0; i < remarks.length; i++) {
     for (const finding of remarks[i]) {
       if (taken[i + 1] === 1) findings.add(finding.code, () => finding)
-      else if (finding.severity === 'error') {
+      else if (left[i + 1] === 1 && finding.severity === 'error') {
         count++
         if (first === '') first = finding.message
       }

@@ -1,6 +1,6 @@
 import { readFileSync } from 'node:fs'
 import path from 'node:path'
-import { type Drawing, type ReadLimits } from '@/lib/dxf/drawing'
+import type { Drawing, ReadLimits } from '@/lib/dxf/drawing'
 import { readDrawing } from '@/lib/dxf/read'
 import { type Selecting, type Selection, selectEdges } from '@/lib/dxf/select'
 import { type Edge, edgeAt } from '@/lib/geometry/edges'

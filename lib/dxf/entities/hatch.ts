@@ -91,7 +91,7 @@ function readPolylinePath(reading: Reading, boundary: Boundary, row: number): vo
   for (let i = 0; i < count && boundary.fault === null; i++) {
     const x = boundary.take(10)
     const y = boundary.take(20)
-    points.push([facing * x, y, facing * (boundary.maybe(42) ?? 0)])
+    points.push([facing * x + 0, y, facing * (boundary.maybe(42) ?? 0)])
   }
   if (boundary.fault !== null) return
   points.forEach(([x, y, bulge], i) => {
@@ -105,7 +105,7 @@ function readEdge(reading: Reading, boundary: Boundary, row: number): void {
   const { facing, sheet } = reading
   if (kind === 1) {
     const [x0, y0, x1, y1] = [10, 20, 11, 21].map((code) => boundary.take(code))
-    if (boundary.fault === null && (x0 !== x1 || y0 !== y1)) pushLine(sheet.edges, facing * x0, y0, facing * x1, y1, row)
+    if (boundary.fault === null && (x0 !== x1 || y0 !== y1)) pushLine(sheet.edges, facing * x0 + 0, y0, facing * x1 + 0, y1, row)
   } else if (kind === 2) readArcEdge(reading, boundary, row)
   else if (kind === 3) readEllipseEdge(reading, boundary, row)
   else if (kind === 4) readSplineEdge(reading, boundary, row)
@@ -122,7 +122,7 @@ function readArcEdge(reading: Reading, boundary: Boundary, row: number): void {
   if (boundary.fault !== null) return
   const { facing } = reading
   const start = sense * from
-  pushArcDegrees(reading, facing * x, y, radius, facing === 1 ? start : 180 - start, facing * sweep, row)
+  pushArcDegrees(reading, facing * x + 0, y, radius, facing === 1 ? start : 180 - start, facing * sweep, row)
 }
 
 /** Angles of elliptical arcs are those of the points as seen from the centre, in degrees (from memory). */
@@ -137,7 +137,7 @@ function readEllipseEdge(reading: Reading, boundary: Boundary, row: number): voi
   const start = parameterOf(sense * from, ratio)
   let radians = sweep === 360 ? 2 * Math.PI : sense * (parameterOf(sense * to, ratio) - start)
   if (radians <= 0) radians += 2 * Math.PI
-  pushEllipticalArc(reading, facing * x, y, facing * ux, uy, -facing * ratio * uy, ratio * ux, start, sense * radians, row)
+  pushEllipticalArc(reading, facing * x, y, facing * ux, uy, 0 - facing * ratio * uy, ratio * ux, start, sense * radians, row)
 }
 
 const parameterOf = (degrees: number, ratio: number): number => Math.atan2(sinDegrees(degrees) / ratio, cosDegrees(degrees))
