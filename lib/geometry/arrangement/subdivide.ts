@@ -5,8 +5,10 @@ import type { Pieces } from './monotone'
 
 /** Pairs of stretches looked at for one pair of pieces before giving up on finding more. */
 const MOST_NODES = 20_000
-/** A stretch counts as nearly straight below this turn of its tangent, rad. */
-const STRAIGHT = 0.5
+/** Two stretches count as nearly straight when their tangents turn by less than this off their chords, rad. */
+const STRAIGHT = 0.35
+/** Spans in which one nearly straight stretch is followed along the other. */
+const SPANS = 8
 
 const p = new Float64Array(6)
 const q = new Float64Array(6)
@@ -25,49 +27,38 @@ interface Stretch {
 }
 
 /**
- * Common points of two monotone pieces of any kind. Stretches whose strips round their chords lie apart
- * are dropped, transversal ones give their crossing by Newton, the rest are halved; what stays within
- * the tolerance without crossing gives one foot point for each run of such stretches.
+ * Common points of two monotone pieces of any kind. Stretches whose strips round their chords lie apart are dropped,
+ * curved ones halved; of nearly straight ones, transversal give their crossing by Newton, and along those that run side
+ * by side the signed distance is followed: its zeros are crossings, an extreme within the tolerance is one foot point.
  */
 export function meetBySubdivision(pieces: Pieces, i: number, j: number, tolerance: number, meet: Meet): void {
   const { table, edge, t0, t1, ends } = pieces
-  const touching: [number, number][] = []
-  const crossings: number[] = []
+  const known: number[] = []
+  const found = (s: number, t: number) => {
+    if (!inside(s, t0[i], t1[i]) || !inside(t, t0[j], t1[j])) return
+    if (known.some((other) => Math.abs(other - s) <= 1e-12 * Math.abs(t1[i] - t0[i]))) return
+    known.push(s)
+    pointAt(table, edge[i], s, p)
+    meet(i, s, j, t, p[0], p[1])
+  }
   const whole = (n: number) => stretch(pieces, n, t0[n], t1[n], ends[4 * n], ends[4 * n + 1], ends[4 * n + 2], ends[4 * n + 3])
-  const stack: [Stretch, Stretch][] = [[whole(i), whole(j)]]
-  let nodes = 0
-  while (stack.length > 0 && nodes++ < MOST_NODES) {
-    const [a, b] = stack.pop() as [Stretch, Stretch]
+  const stack: Stretch[] = [whole(i), whole(j)]
+  for (let nodes = 0; nodes < MOST_NODES; nodes++) {
+    const b = stack.pop()
+    const a = stack.pop()
+    if (!a || !b) return
     if (apart(a, b, tolerance)) continue
     const la = Math.hypot(a.x1 - a.x0, a.y1 - a.y0)
     const lb = Math.hypot(b.x1 - b.x0, b.y1 - b.y0)
-    const angle = Math.abs(between(a, b, la, lb))
-    const transversal = angle > 1.5 * (a.turn + b.turn) && a.turn + b.turn < STRAIGHT
-    const found = transversal && angle > 1e-7 ? newton(pieces, i, j, a, b, tolerance / 16) : 'unsure'
-    if (found === 'outside') continue
-    if (found !== 'unsure') {
-      const [s, t] = found
-      const known = crossings.some((other) => Math.abs(other - s) <= 1e-12 * Math.abs(t1[i] - t0[i]))
-      if (!known && inside(s, t0[i], t1[i]) && inside(t, t0[j], t1[j])) {
-        crossings.push(s)
-        pointAt(table, edge[i], s, p)
-        meet(i, s, j, t, p[0], p[1])
-      }
+    if (a.turn + b.turn > STRAIGHT && la + lb > tolerance) {
+      if (a.turn >= b.turn) for (const half of halves(pieces, i, a)) stack.push(half, b)
+      else for (const half of halves(pieces, j, b)) stack.push(a, half)
       continue
     }
-    if ((a.bow + b.bow <= tolerance && close(a, b, tolerance)) || la + lb <= tolerance) {
-      touching.push([Math.min(a.t0, a.t1), Math.max(a.t0, a.t1)])
-      continue
-    }
-    if (la >= lb) for (const half of halves(pieces, i, a)) stack.push([half, b])
-    else for (const half of halves(pieces, j, b)) stack.push([a, half])
-  }
-  for (const t of nearestOfRuns(pieces, i, j, touching)) {
-    pointAt(table, edge[i], t, p)
-    const { 0: x, 1: y } = p
-    const tj = footOn(pieces, j, x, y, q)
-    if (Math.hypot(q[0] - x, q[1] - y) <= tolerance && inside(t, t0[i], t1[i]) && inside(tj, t0[j], t1[j]))
-      meet(i, t, j, tj, x, y)
+    const transversal = Math.abs(between(a, b, la, lb)) > Math.max(1e-3, 1.5 * (a.turn + b.turn))
+    const crossing = transversal ? newton(pieces, i, j, a, b, tolerance / 16) : 'unsure'
+    if (crossing === 'unsure') sideBySide(pieces, i, j, a, tolerance, found)
+    else if (crossing !== 'outside') found(...crossing)
   }
 }
 
@@ -117,13 +108,6 @@ function offStrip(a: Stretch, b: Stretch, room: number): boolean {
   return (d0 > room && d1 > room) || (d0 < -room && d1 < -room)
 }
 
-/** Whether the chords themselves come within the tolerance along their common stretch. */
-function close(a: Stretch, b: Stretch, tolerance: number): boolean {
-  const long = Math.hypot(a.x1 - a.x0, a.y1 - a.y0)
-  const wide = Math.hypot(b.x1 - b.x0, b.y1 - b.y0)
-  return Math.abs(between(a, b, long, wide)) * Math.min(long, wide) <= 4 * tolerance
-}
-
 /** Angle between the chords taken as lines without direction, rad in [−π/2, π/2]. */
 function between(a: Stretch, b: Stretch, la: number, lb: number): number {
   if (la === 0 || lb === 0) return 0
@@ -162,42 +146,61 @@ function newton(n: Pieces, i: number, j: number, a: Stretch, b: Stretch, near: n
   return u >= -margin && u <= 1 + margin && v >= -margin && v <= 1 + margin ? [s, t] : 'outside'
 }
 
-/** For each run of touching stretches that follow each other, the parameter on i where the two are nearest. */
-function nearestOfRuns(pieces: Pieces, i: number, j: number, touching: [number, number][]): number[] {
-  touching.sort((a, b) => a[0] - b[0])
-  const runs: [number, number][] = []
-  for (const [low, high] of touching) {
-    const run = runs[runs.length - 1]
-    if (run && low <= run[1] + (high - low)) run[1] = Math.max(run[1], high)
-    else runs.push([low, high])
-  }
-  return runs.map(([low, high]) => nearestBetween(pieces, i, j, low, high)).filter((t) => t !== null)
-}
-
-/**
- * Where between two parameters of piece i the tangents are parallel, else where i passes from one side of
- * piece j to the other; null where neither is: the two are then nearest at an end, which is met elsewhere.
- */
-function nearestBetween(pieces: Pieces, i: number, j: number, low: number, high: number): number | null {
-  const { table, edge } = pieces
-  const measure = (t: number): [slant: number, side: number] => {
+/** Follows stretch a of piece i along piece j: signed distance from it, and how the tangents slant to one another. */
+function sideBySide(n: Pieces, i: number, j: number, a: Stretch, tolerance: number, found: (s: number, t: number) => void): void {
+  const { table, edge } = n
+  const measure = (t: number): Measure => {
     jetAt(table, edge[i], t, p)
     const { 0: x, 1: y, 2: dx, 3: dy } = p
-    const tj = footOn(pieces, j, x, y, q)
-    jetAt(table, edge[j], tj, q)
-    return [dx * q[3] - dy * q[2], q[2] * (y - q[1]) - q[3] * (x - q[0])]
+    const foot = footOn(n, j, x, y, q)
+    jetAt(table, edge[j], foot, q)
+    const speed = Math.hypot(q[2], q[3])
+    return { t, foot, side: (q[2] * (y - q[1]) - q[3] * (x - q[0])) / speed, slant: q[2] * dy - q[3] * dx }
   }
-  const atLow = measure(low)
-  const atHigh = measure(high)
-  for (const which of [0, 1]) {
-    if (!(atLow[which] * atHigh[which] < 0)) continue
-    let [a, b] = [low, high]
-    for (let n = 0; n < 60; n++) {
-      const t = (a + b) / 2
-      if (measure(t)[which] > 0 === atLow[which] > 0) a = t
-      else b = t
+  let low = measure(a.t0)
+  for (let k = 1; k <= SPANS; k++) {
+    const high = measure(k === SPANS ? a.t1 : a.t0 + ((a.t1 - a.t0) * k) / SPANS)
+    if (low.side * high.side < 0) crossing(low, high)
+    else if (low.slant * high.slant < 0) {
+      const extreme = halve(measure, low, high, 'slant')
+      if (Math.abs(extreme.side) <= tolerance) found(extreme.t, extreme.foot)
+      else if (extreme.side * low.side < 0) {
+        crossing(low, extreme)
+        crossing(extreme, high)
+      }
     }
-    return (a + b) / 2
+    low = high
   }
-  return null
+  function crossing(from: Measure, to: Measure): void {
+    const { t, foot } = halve(measure, from, to, 'side')
+    found(t, foot)
+  }
+}
+
+interface Measure {
+  t: number
+  foot: number
+  side: number
+  slant: number
+}
+
+/** The zero of side or slant between two parameters where it differs in sign: regula falsi (Illinois), kept bracketed. */
+function halve(measure: (t: number) => Measure, from: Measure, to: Measure, what: 'side' | 'slant'): Measure {
+  let [a, b] = [from, to]
+  let [fa, fb] = [a[what], b[what]]
+  let middle = a
+  for (let n = 0; n < 100 && Math.abs(b.t - a.t) > 1e-16 * (Math.abs(a.t) + Math.abs(b.t)); n++) {
+    const t = n % 4 === 3 ? (a.t + b.t) / 2 : b.t - (fb * (b.t - a.t)) / (fb - fa)
+    if (t === middle.t) break
+    middle = measure(t)
+    const f = middle[what]
+    if (f === 0) break
+    if (f * fb < 0) {
+      a = b
+      fa = fb
+    } else fa /= 2
+    b = middle
+    fb = f
+  }
+  return middle
 }

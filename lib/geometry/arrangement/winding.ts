@@ -1,9 +1,7 @@
 import Flatbush from 'flatbush'
-import { LINE } from '../edges'
-import { pointAt } from './curve'
-import { levelOn } from './foot'
 import type { Merged } from './merge'
 import type { Pieces } from './monotone'
+import { crossingOf, pointOf } from './stretch'
 import type { Vertices } from './vertices'
 
 /** Where along a sub-edge its ray starts; the later ones only when an earlier one runs too near another edge. */
@@ -32,6 +30,7 @@ export function windings(
   for (let u = 0; u < count; u++) if (countStart[u + 1] > countStart[u]) rows.push(u)
   if (rows.length === 0) return { left, right, sets }
   const coordinate = [local.x, local.y]
+  const stretches = { pieces, local, merged }
   const index = new Flatbush(rows.length)
   for (const u of rows) {
     const [x0, y0, x1, y1] = [local.x[from[u]], local.y[from[u]], local.x[to[u]], local.y[to[u]]]
@@ -64,7 +63,7 @@ export function windings(
       let beyond = ahead ? low > m + reach : high < m - reach
       if (!beyond) {
         if (ahead ? high < m - reach : low > m + reach) return false
-        const at = alongAt(s, axis, level)
+        const at = crossingOf(stretches, s, axis, level)
         clearance = Math.min(clearance, Math.abs(at - m))
         beyond = ahead ? at > m : at < m
       }
@@ -85,19 +84,6 @@ export function windings(
     else index.search(mx, a, mx, b, visit)
   }
 
-  const alongAt = (s: number, axis: 0 | 1, level: number): number => {
-    const [along, across] = [coordinate[axis], coordinate[1 - axis]]
-    const row = merged.row[s]
-    if (pieces.table.kind[row] === LINE) {
-      const f = (level - across[from[s]]) / (across[to[s]] - across[from[s]])
-      return along[from[s]] + f * (along[to[s]] - along[from[s]])
-    }
-    pointAt(pieces.table, row, levelOn(pieces, merged.piece[s], axis === 0 ? 1 : 0, level), p)
-    const low = Math.min(along[from[s]], along[to[s]])
-    const high = Math.max(along[from[s]], along[to[s]])
-    return Math.min(Math.max(p[axis], low), high)
-  }
-
   for (const u of rows) {
     const [x0, y0, x1, y1] = [local.x[from[u]], local.y[from[u]], local.x[to[u]], local.y[to[u]]]
     const axis = Math.abs(y1 - y0) >= Math.abs(x1 - x0) ? 0 : 1
@@ -107,10 +93,7 @@ export function windings(
     let bestTouched: number[] = []
     for (const fraction of FRACTIONS) {
       touched = []
-      if (pieces.table.kind[merged.row[u]] === LINE) {
-        p[0] = x0 + fraction * (x1 - x0)
-        p[1] = y0 + fraction * (y1 - y0)
-      } else pointAt(pieces.table, merged.row[u], merged.t0[u] + fraction * (merged.t1[u] - merged.t0[u]), p)
+      pointOf(stretches, u, fraction, p)
       shoot(u, axis, ahead, p[0], p[1])
       if (clearance > clearest) {
         for (const o of bestTouched) best[o] = 0
