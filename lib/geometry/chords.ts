@@ -52,7 +52,11 @@ interface Run {
 type Vertex = (n: number) => [number, number]
 
 function circleOf(vertex: Vertex, first: number, last: number): Circle | null {
-  return circleThrough(...vertex(first), ...vertex((first + last) >> 1), ...vertex(last))
+  const [ax, ay] = vertex(first)
+  const [bx, by] = vertex(last)
+  const third = Math.floor((last - first) / 3)
+  if (ax === bx && ay === by) return circleThrough(ax, ay, ...vertex(first + third), ...vertex(last - third))
+  return circleThrough(ax, ay, ...vertex((first + last) >> 1), bx, by)
 }
 
 /** Whether the vertices lie on the circle far closer than the chords do, turning one way in steps of like size. */

@@ -1,4 +1,5 @@
-import { type Chained, chain } from './chain'
+import { chain } from './chain'
+import { chainsOnLoops } from './chainsOnLoops'
 import { mergeDuplicates } from './duplicates'
 import { type EdgeTable, emptyTable, pushCopy } from './edges'
 import { emitLoop } from './emitLoop'
@@ -17,6 +18,8 @@ export interface ClosedLoops {
   openEdges: EdgeTable
   openStart: Uint32Array
   nets: EdgeTable[]
+  /** open chains that outlines close, with these outlines; null for none */
+  onLoops: EdgeTable | null
   repairs: Repair[]
   findings: Finding[]
 }
@@ -38,7 +41,7 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
   addClosed(first.edges, loopStart, edges, sorted.closedRows, sorted.closedStart)
   if (first.nets.length === 0 && first.openStart.length === 1) {
     const { repairs, findings: closings } = reportJoins(first.joins, () => true, mmPerUnit)
-    return { ...first, openStart: Uint32Array.of(0), repairs, findings: [...findings, ...closings] }
+    return { ...first, onLoops: null, openStart: Uint32Array.of(0), repairs, findings: [...findings, ...closings] }
   }
   const left = emptyTable()
   for (const [k, row] of sorted.loose.entries()) if (!first.inLoop[k]) pushCopy(left, edges, row)
@@ -58,16 +61,24 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
     for (let i = second.loopStart[k]; i < second.loopStart[k + 1]; i++) pushCopy(first.edges, second.edges, i)
     loopStart.push(first.edges.count)
   }
+  const { net, openEdges, openStart } = chainsOnLoops(
+    first.edges,
+    loopStart,
+    second.openEdges,
+    second.openStart,
+    tolerances.chaining,
+  )
   const before = reportJoins(first.joins, (k) => first.inLoop[k] === 1, mmPerUnit)
   const after = reportJoins(second.joins, () => true, mmPerUnit)
   return {
     edges: first.edges,
     loopStart,
-    openEdges: second.openEdges,
-    openStart: Uint32Array.from(second.openStart),
+    openEdges,
+    openStart: Uint32Array.from(openStart),
     nets: second.nets,
+    onLoops: net,
     repairs: [...before.repairs, ...after.repairs],
-    findings: [...findings, ...before.findings, ...after.findings, ...openFindings(second, mmPerUnit)],
+    findings: [...findings, ...before.findings, ...after.findings, ...openFindings(openEdges, openStart, mmPerUnit)],
   }
 }
 
@@ -81,7 +92,7 @@ function addClosed(to: EdgeTable, loopStart: number[], edges: EdgeTable, rows: U
   }
 }
 
-function openFindings({ openEdges, openStart }: Chained, mmPerUnit: number): Finding[] {
+function openFindings(openEdges: EdgeTable, openStart: number[], mmPerUnit: number): Finding[] {
   const e = openEdges.ends
   return openStart.slice(1).map((to, k) => {
     const from = openStart[k]

@@ -1,4 +1,4 @@
-import type { EdgeTable } from './edges'
+import { chordLength } from './chordLength'
 import { insertPoint, newGrid, visitNear } from './endGrid'
 import { jetAt, newJet } from './evaluate'
 import { nearestOn } from './nearest'
@@ -26,12 +26,6 @@ function liesOn({ edges, loopStart }: Loops, a: number, b: number, tolerance: nu
   return true
 }
 
-const perimeterAtLeast = (e: EdgeTable['ends'], from: number, to: number): number => {
-  let sum = 0
-  for (let i = from; i < to; i++) sum += Math.hypot(e[4 * i + 2] - e[4 * i], e[4 * i + 3] - e[4 * i + 1])
-  return sum
-}
-
 /** 1 for each loop that lies on an earlier one within the tolerance: same bounds, same area, boundary on boundary. */
 export function coincidentLoops(loops: Loops, tolerance: number): Uint8Array {
   const doubled = new Uint8Array(loops.count)
@@ -41,7 +35,7 @@ export function coincidentLoops(loops: Loops, tolerance: number): Uint8Array {
   for (let k = 0; k < loops.count; k++) {
     const box = 4 * k
     const from = loopStart[k]
-    const allowed = tolerance * (perimeterAtLeast(edges.ends, from, loopStart[k + 1]) + 4 * (bounds[box + 2] - bounds[box]))
+    const allowed = tolerance * (chordLength(edges, from, loopStart[k + 1]) + 4 * (bounds[box + 2] - bounds[box]))
     visitNear(grid, bounds[box], bounds[box + 1], tolerance, (other) => {
       if (doubled[k] || Math.abs(area[other] - area[k]) > allowed) return
       for (let c = 0; c < 4; c++) if (Math.abs(bounds[4 * other + c] - bounds[box + c]) > tolerance) return

@@ -60,46 +60,41 @@ export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]
     if (cells) titleBlocks.push(cells)
     for (const k of cells ?? cluster) (cells ? apart : touches)[k] = 1
   }
-  const frames: number[] = []
+  const rings: number[] = []
   for (let level = 0; level < 3; level++) {
-    const k = frameAt(loops, depth, level, apart, touches, mmPerUnit)
-    if (k < 0) break
-    frames.push(k)
-    apart[k] = 1
+    const k = soleAt(depth, level, apart)
+    if (k < 0 || touches[k] || !isRectangle(loops, k)) break
+    rings.push(k)
   }
-  return { frames, titleBlocks }
+  while (rings.length > 0 && !isFrame(loops, depth, rings[rings.length - 1], rings.length - 1, apart, mmPerUnit)) rings.pop()
+  return { frames: rings, titleBlocks }
 }
 
-function frameAt(
-  loops: Loops,
-  depth: Int32Array,
-  level: number,
-  apart: Uint8Array,
-  touches: Uint8Array,
-  mmPerUnit: number,
-): number {
+/** The only outline of a depth, all others lying deeper; −1 where there is none. */
+function soleAt(depth: Int32Array, level: number, apart: Uint8Array): number {
+  let sole = -1
+  for (let k = 0; k < depth.length; k++) {
+    if (apart[k]) continue
+    if (depth[k] < 0 || (depth[k] === level && sole >= 0)) return -1
+    if (depth[k] === level) sole = k
+  }
+  return sole
+}
+
+function isFrame(loops: Loops, depth: Int32Array, outer: number, level: number, apart: Uint8Array, mmPerUnit: number): boolean {
   const { count, bounds, area } = loops
-  let outer = -1
   let filled = 0
   let deepest = level
-  let inside = 0
   for (let k = 0; k < count; k++) {
     if (apart[k]) continue
-    if (depth[k] === level) {
-      if (outer >= 0) return -1
-      outer = k
-    } else if (depth[k] < level) return -1
-    else {
-      inside++
-      if (depth[k] === level + 1) filled += area[k]
-      deepest = Math.max(deepest, depth[k])
-    }
+    if (depth[k] === level + 1) filled += area[k]
+    deepest = Math.max(deepest, depth[k])
   }
-  if (outer < 0 || inside === 0 || touches[outer] || !isRectangle(loops, outer) || filled > 0.5 * area[outer]) return -1
-  if (deepest >= level + 2 || apart.includes(1)) return outer
+  if (deepest === level || filled > 0.5 * area[outer]) return false
+  if (deepest >= level + 2 || apart.includes(1)) return true
   const width = (bounds[4 * outer + 2] - bounds[4 * outer]) * mmPerUnit
   const height = (bounds[4 * outer + 3] - bounds[4 * outer + 1]) * mmPerUnit
-  return isSheet(Math.max(width, height), Math.min(width, height)) ? outer : -1
+  return isSheet(Math.max(width, height), Math.min(width, height))
 }
 
 /** A sheet of ISO 216 A4 to A0 less a margin of up to 20 mm a side. */

@@ -1,5 +1,7 @@
 import { facesOf } from './arrangement/faces'
+import { chordLength } from './chordLength'
 import type { ClosedLoops } from './closedLoops'
+import { loopArea } from './edgeArea'
 import { type EdgeTable, pushCopy } from './edges'
 import type { Finding } from './finding'
 import { geometryFinding } from './findings'
@@ -27,6 +29,7 @@ interface Face {
  * Turns nets of branching edges into outlines, appended to `closed`. A net with one face is an outline with loose ends.
  * Of several faces each asks "metal or void?": unanswered ones are outlines that wait for a decision; an answered one is
  * an outline where nesting among the other outlines then gives the answer, and none where its surroundings give it.
+ * So do faces between an open chain and the outlines that close it; these outlines stay as drawn.
  */
 export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUnit: number, bonds: Bond[]): NetOutlines {
   const findings: Finding[] = []
@@ -38,6 +41,21 @@ export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUn
     loopStart.push(edges.count)
     undecided.push(waits)
   }
+  const ask = (face: Face) => {
+    const [x, y] = face.inside
+    const params = { area: face.area * mmPerUnit ** 2, x, y }
+    const size = Math.sqrt(face.area)
+    const answer = bonds.find(({ at }) => insideLoop(face.edges, face.from, face.to, at[0], at[1]))
+    if (!answer || answer.is === 'contact') {
+      take(face, 1)
+      findings.push(geometryFinding('face-metal-or-void', params, face.inside, size))
+      return
+    }
+    const metal = answer.is !== 'void'
+    const even = holding(closed, drawn, x, y).length % 2 === 0
+    if (metal === even) take(face, 0)
+    findings.push(geometryFinding('face-answered', { ...params, is: metal ? 'metal' : 'void' }, face.inside, size))
+  }
   for (const net of closed.nets) {
     const { faces, dangling, tooMany } = facesIn(net, tolerances)
     if (tooMany || dangling > 0 || faces.length === 0) {
@@ -45,22 +63,11 @@ export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUn
       const code = tooMany ? 'crossings-too-many' : 'branches'
       findings.push(geometryFinding(code, { edges: tooMany ? net.count : dangling, x: at[0], y: at[1] }, at))
     }
-    for (const face of faces) {
-      const [x, y] = face.inside
-      const params = { area: face.area * mmPerUnit ** 2, x, y }
-      const size = Math.sqrt(face.area)
-      const answer = bonds.find(({ at }) => insideLoop(face.edges, face.from, face.to, at[0], at[1]))
-      if (faces.length === 1) take(face, 0)
-      else if (!answer || answer.is === 'contact') {
-        take(face, 1)
-        findings.push(geometryFinding('face-metal-or-void', params, face.inside, size))
-      } else {
-        const metal = answer.is !== 'void'
-        if (metal === (depthAt(closed, drawn, x, y) % 2 === 0)) take(face, 0)
-        findings.push(geometryFinding('face-answered', { ...params, is: metal ? 'metal' : 'void' }, face.inside, size))
-      }
-    }
+    if (faces.length === 1) take(faces[0], 0)
+    else for (const face of faces) ask(face)
   }
+  const faces = closed.onLoops ? facesIn(closed.onLoops, tolerances).faces : []
+  for (const face of faces) if (!isDrawn(closed, drawn, face, tolerances.chaining)) ask(face)
   return { undecided: Uint8Array.from(undecided), findings }
 }
 
@@ -74,9 +81,16 @@ function facesIn(net: EdgeTable, tolerances: Tolerances): { faces: Face[]; dangl
   return { faces, dangling: dangling.length, tooMany }
 }
 
-/** How many of the outlines drawn as such hold a point. */
-function depthAt({ edges, loopStart }: ClosedLoops, drawn: number, x: number, y: number): number {
-  let depth = 0
-  for (let k = 0; k < drawn; k++) if (insideLoop(edges, loopStart[k], loopStart[k + 1], x, y)) depth++
-  return depth
+/** Which of the outlines drawn as such hold a point. */
+function holding({ edges, loopStart }: ClosedLoops, drawn: number, x: number, y: number): number[] {
+  return Array.from({ length: drawn }, (_, k) => k).filter((k) => insideLoop(edges, loopStart[k], loopStart[k + 1], x, y))
+}
+
+/** Whether a face is an outline that was drawn as such. */
+function isDrawn(closed: ClosedLoops, drawn: number, { edges: own, inside, area, from, to }: Face, tolerance: number): boolean {
+  const { edges, loopStart } = closed
+  const allowed = tolerance * chordLength(own, from, to)
+  return holding(closed, drawn, ...inside).some(
+    (k) => Math.abs(loopArea(edges, loopStart[k], loopStart[k + 1]) - area) <= allowed,
+  )
 }
