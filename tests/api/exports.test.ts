@@ -15,7 +15,8 @@ import { ROLES } from '@/lib/auth/permissions'
 import { call, givenDatabase } from '@/tests/support/call'
 import { givenMember, givenTeam, type Member } from '@/tests/support/team'
 import { givenJob, givenProfile } from '@/tests/support/things'
-import { givenPool, rectanglesDxf, upload } from '@/tests/support/upload'
+import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
+import { givenPool, upload } from '@/tests/support/upload'
 
 let pool: SectionPool
 let database: Database

@@ -16,7 +16,8 @@ import type { SectionPool } from '@/lib/jobs/server-pool'
 import { call, givenDatabase } from '@/tests/support/call'
 import { givenTeam, type Member } from '@/tests/support/team'
 import { givenJob, givenProfile } from '@/tests/support/things'
-import { givenPool, rectanglesDxf, upload } from '@/tests/support/upload'
+import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
+import { givenPool, upload } from '@/tests/support/upload'
 
 const BOX = rectanglesDxf([0, 0, 40, 60], [5, 5, 30, 50])
 const CONFIRMED = { confirmation: { by: 'typed', value: 60, measured: 60, what: 'depth', finished: 'finished' } }
