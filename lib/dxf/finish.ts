@@ -12,14 +12,11 @@ import type { Reading } from './reading'
 import type { FileContent } from './sections'
 import type { Sheet } from './sheet'
 import type { FileFacts } from './tables'
-import { textReader } from './text'
 import { DXF_UNITS } from './units'
 
 /** Turns what was read into a drawing: names decoded, line types answered, blocks opened up, things counted. */
-export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, limits: ReadLimits, marked: boolean): Drawing {
-  const { root, findings } = reading
-  const { known, read } = textReader(facts.version, facts.codePage, marked)
-  if (!known) findings.add('encoding-unknown', () => dxfFinding('encoding-unknown', { page: facts.codePage }))
+export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, limits: ReadLimits): Drawing {
+  const { root, findings, decode: read } = reading
   const naming = nameThings(reading, facts, read)
   const spaces = new Spaces(facts, read)
   const blocksByName = groupByName(blocks, read)
@@ -41,12 +38,10 @@ export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, 
     findings.add('heights-differ', () => dxfFinding('heights-differ', { low, high }))
   }
   const counts = count(root, naming)
-  for (const [kind, n] of opener.ignored) {
-    const name = read(reading.record.kinds.raw[kind])
-    counts.ignored.set(name, (counts.ignored.get(name) ?? 0) + n)
-  }
+  const others = new Map([...opener.ignored].map(([kind, n]): [string, number] => [read(reading.record.kinds.raw[kind]), n]))
+  for (const [name, n] of others) counts.ignored.set(name, n)
+  reportIgnored(reading, others)
   if (opener.inserts > 0) counts.read.set('INSERT', opener.inserts)
-  reportIgnored(reading, counts.ignored)
   const dimensions = drawnDimensions(reading, facts, (raw) => naming.layers[naming.layerOf[raw]], read)
   return {
     acadVersion: facts.version,

@@ -39,10 +39,9 @@ export class GroupCursor {
     return true
   }
 
-  /** Whether anything but blanks follows. */
+  /** Whether anything but blanks and comments follows. */
   goesOn(): boolean {
-    for (let i = this.at; i < this.bytes.length; i++) if (this.bytes[i] > 32) return true
-    return false
+    return this.next() || this.fault === 'code'
   }
 
   private readCode(): boolean {

@@ -40,7 +40,7 @@ export function measureBlocks(
       const { bytes } = reading.cursor
       reading.sheet = sheet
       const where = { kind: 'INSERT', handle: bytesToText(bytes, ...placement.handle).trim(), line: placement.line }
-      reading.remark(placement.row, code, { ...where, name: reading.blocks.raw[placement.block], ...more })
+      reading.remark(placement.row, code, { ...where, name: reading.decode(reading.blocks.raw[placement.block]), ...more })
       reading.sheet = reading.root
       return null
     }
@@ -52,7 +52,7 @@ export function measureBlocks(
     if (Number.isNaN(block.base[0])) return remark('block-bad')
     const loop = chain.indexOf(block.sheet)
     if (loop >= 0) {
-      const names = [...chain.slice(loop), block.sheet].map((s) => s.name)
+      const names = [...chain.slice(loop), block.sheet].map((s) => reading.decode(s.name))
       return remark('block-holds-itself', { chain: names.join(' → ') })
     }
     return block
@@ -93,7 +93,7 @@ export function measureBlocks(
   }
   const { entities, nesting } = limits
   if (tooDeep) {
-    const block = (tooDeep as Sheet).name
+    const block = reading.decode((tooDeep as Sheet).name)
     reading.findings.add('nested-too-deep', () => dxfFinding('nested-too-deep', { limit: nesting, setting: 'nesting', block }))
     return null
   }

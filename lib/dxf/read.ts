@@ -23,9 +23,9 @@ export function readDrawing(bytes: Uint8Array, limits: ReadLimits = DEFAULT_LIMI
   if (isBlank(text, start)) return emptyDrawing(dxfFinding('file-empty'))
   const other = otherFileKind(text, start)
   if (other) return emptyDrawing(dxfFinding('file-not-dxf', { what: other.what, cure: other.cure }))
-  const reading = new Reading(new GroupCursor(text, start))
-  const facts = readSections(reading, limits)
-  return finishDrawing(reading, facts, limits, marked)
+  const reading = new Reading(new GroupCursor(text, start), marked)
+  const content = readSections(reading, limits)
+  return finishDrawing(reading, content, limits)
 }
 
 function isBlank(bytes: Uint8Array, start: number): boolean {

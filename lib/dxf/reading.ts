@@ -5,6 +5,7 @@ import { FindingList, LISTED_PER_CODE } from './findingList'
 import { type DxfCode, dxfFinding } from './findings'
 import { bytesToText, Names } from './names'
 import { GroupRecord, type Slots } from './record'
+import { textReader } from './text'
 import { emptySheet, type Sheet } from './sheet'
 import type { GroupCursor } from './groups'
 import { ALL_KINDS } from './kinds'
@@ -62,6 +63,8 @@ export class Reading {
   readonly root: Sheet
   /** where entities go now: the root, or a block being defined */
   sheet: Sheet
+  /** turns the bytes of names and texts into text; settled once the header is read */
+  decode: (raw: string) => string
   /** heights at which the root's entities lie */
   low = Number.POSITIVE_INFINITY
   high = Number.NEGATIVE_INFINITY
@@ -76,8 +79,12 @@ export class Reading {
   private readonly lastOfCode = new Map<string, number>()
   private readonly countOfCode = new Map<string, number>()
 
-  constructor(readonly cursor: GroupCursor) {
+  constructor(
+    readonly cursor: GroupCursor,
+    readonly marked: boolean,
+  ) {
     const { bytes } = cursor
+    this.decode = textReader('', '', marked).read
     this.record = new GroupRecord(cursor, new Names(bytes, ALL_KINDS))
     this.layers = new Names(bytes, ['0'])
     this.lineTypes = new Names(bytes, ['BYLAYER', 'BYBLOCK'])
@@ -194,7 +201,11 @@ export class Reading {
       if (own === 0) entities.remark[row] = this.lastOfCode.get(code) ?? 0
       return
     }
-    const finding = dxfFinding(code, this.sheet === this.root ? params : { ...params, block: this.sheet.name }, place)
+    const finding = dxfFinding(
+      code,
+      this.sheet === this.root ? params : { ...params, block: this.decode(this.sheet.name) },
+      place,
+    )
     if (own > 0) this.remarks[own - 1].push(finding)
     else entities.remark[row] = this.remarks.push([finding])
     this.lastOfCode.set(code, entities.remark[row])
@@ -209,7 +220,7 @@ export class Reading {
   /** The value of group g as it stands, for a sentence. */
   text(g: number): string {
     const { record } = this
-    return bytesToText(record.cursor.bytes, record.from[g], Math.min(record.to[g], record.from[g] + 60)).trim()
+    return this.decode(bytesToText(record.cursor.bytes, record.from[g], Math.min(record.to[g], record.from[g] + 60)).trim())
   }
 
   ignore(kind: number): void {

@@ -53,11 +53,17 @@ export class GroupRecord {
     readonly kinds: Names,
   ) {}
 
-  /** Reads on to the next group of code 0; the cursor must stand on the record's own. False where the file ends before. */
-  read(): boolean {
+  /** Begins the record on whose group of code 0 the cursor stands, and answers its kind. */
+  begin(): number {
     const { cursor } = this
     this.kind = this.kinds.idOf(cursor.from, cursor.to)
     this.line = cursor.line
+    return this.kind
+  }
+
+  /** Reads on to the next group of code 0. False where the file ends before. */
+  read(): boolean {
+    const { cursor } = this
     let n = 0
     let extended = -1
     let more = cursor.next()

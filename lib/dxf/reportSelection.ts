@@ -19,7 +19,9 @@ export function reportSelection(
   const left = new Left(drawing, why, gave)
   left.report(findings)
   const takes = tallies.kinds.some(({ taken }) => taken > 0)
-  if (!takes) left.reportNothing(drawing, findings)
+  // where something could not be read, that is what there is to say
+  const faulty = [...drawing.findings, ...findings.items].some(({ severity }) => severity === 'error')
+  if (!takes && !faulty) left.reportNothing(drawing, findings)
 }
 
 function reportUnknownNames(drawing: Drawing, { layers, lineTypes, space }: Selecting, findings: FindingList): void {

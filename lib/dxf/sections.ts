@@ -24,7 +24,7 @@ import {
 } from './kinds'
 import type { Reading } from './reading'
 import { type FileFacts, noFacts, readBlockRecord, readDimensionStyle, readHeader, readLayer, readLayout } from './tables'
-import { rawText } from './text'
+import { rawText, textReader } from './text'
 
 const VERTEX = kindNumber('VERTEX')
 const DIMENSION = kindNumber('DIMENSION')
@@ -75,10 +75,12 @@ class Walk {
     let more = cursor.next()
     while (more && cursor.code !== 0) more = cursor.next()
     let ended = false
-    while (more && !ended) {
+    while (more) {
+      ended = record.begin() === EOF
+      if (ended) break
       more = record.read()
-      ended = record.kind === EOF
-      if (!ended && (more || cursor.fault === 'none')) this.take()
+      // a record at which the file ends may be cut short; only the end of a section needs no more
+      if (more || (record.kind === ENDSEC && cursor.fault === 'none')) this.take()
       if (this.entities > this.limits.entities) {
         const { entities } = this.limits
         reading.findings.add('too-many-entities', () => dxfFinding('too-many-entities', { limit: entities, setting: 'entities' }))
@@ -115,8 +117,17 @@ class Walk {
     const g = record.find(2)
     this.section = g < 0 ? '?' : rawText(record.cursor.bytes, record.from[g], record.to[g]).toUpperCase()
     this.sections.set(this.section, (this.sections.get(this.section) ?? 0) + 1)
-    if (this.section === 'HEADER') readHeader(reading, this.facts)
+    if (this.section === 'HEADER') this.readHeader()
     if (this.section === 'ENTITIES') this.entitiesComplete = false
+  }
+
+  private readHeader(): void {
+    const { reading, facts } = this
+    readHeader(reading, facts)
+    const { known, read } = textReader(facts.version, facts.codePage, reading.marked)
+    reading.decode = read
+    const page = facts.codePage
+    if (!known) reading.findings.add('encoding-unknown', () => dxfFinding('encoding-unknown', { page }))
   }
 
   private closeSection(): void {
