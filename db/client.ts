@@ -21,16 +21,27 @@ export interface Database {
   close(): void
 }
 
-/** Takes the write lock at once: a transaction that reads first could not be upgraded beside another process. */
+/**
+ * Takes the write lock at once (a transaction that reads first could not be upgraded beside another process), and
+ * does not roll back what SQLite has rolled back itself, as it does on a full disk.
+ */
 class ImmediateDriver extends SqliteDriver {
+  constructor(private readonly sqlite: SqliteDatabase.Database) {
+    super({ database: sqlite })
+  }
+
   override async beginTransaction(connection: DatabaseConnection): Promise<void> {
     await connection.executeQuery(CompiledQuery.raw('begin immediate'))
+  }
+
+  override async rollbackTransaction(connection: DatabaseConnection): Promise<void> {
+    if (this.sqlite.inTransaction) await super.rollbackTransaction(connection)
   }
 }
 
 export function kyselyOf(connection: SqliteDatabase.Database): Kysely<Schema> {
   const dialect = new SqliteDialect({ database: connection })
-  dialect.createDriver = () => new ImmediateDriver({ database: connection })
+  dialect.createDriver = () => new ImmediateDriver(connection)
   return new Kysely<Schema>({ dialect, plugins: [new CamelCasePlugin()] })
 }
 
