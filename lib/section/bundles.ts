@@ -17,6 +17,8 @@ export interface Bundles {
   start: Uint32Array
   /** first run of each loop, and the count after the last */
   loopRun: Uint32Array
+  /** 1 where the run is its whole loop */
+  closed: Uint8Array
   /** minX minY maxX maxY of each run, exact over its curves */
   boxes: Float64Array
   /** origin of `segments`: the centroid */
@@ -45,6 +47,14 @@ function runsOf({ loopStart }: Region): { start: Uint32Array; loopRun: Uint32Arr
   }
   start[count] = loopStart[loopStart.length - 1]
   return { start, loopRun }
+}
+
+function closedRuns(loopRun: Uint32Array): Uint8Array {
+  const closed = new Uint8Array(loopRun[loopRun.length - 1])
+  for (let loop = 0; loop + 1 < loopRun.length; loop++) {
+    if (loopRun[loop + 1] === loopRun[loop] + 1) closed[loopRun[loop]] = 1
+  }
+  return closed
 }
 
 function boxesOf(edges: EdgeTable, start: Uint32Array): Float64Array {
@@ -132,6 +142,7 @@ export function bundlesOf(region: Region): Bundles {
     count,
     start,
     loopRun,
+    closed: closedRuns(loopRun),
     boxes,
     x: minX + 0.5 * (maxX - minX),
     y: minY + 0.5 * (maxY - minY),

@@ -21,12 +21,20 @@ export interface PlasticBending {
  */
 export function plasticBending(bundles: Bundles, frame: Frame, { minV, maxV }: Extremes): PlasticBending {
   const c = halfAreaHeight(bundles, frame, minV, maxV)
-  const all = above(bundles, frame, Number.NEGATIVE_INFINITY)
+  const { area, u, v } = wholeIn(bundles, frame)
   const top = above(bundles, frame, c)
   return {
-    modulus: 2 * (top.v - c * top.area) + c * all.area - all.v,
+    modulus: 2 * (top.v - c * top.area) + c * area - v,
     offset: c,
-    across: 2 * top.u - all.u,
+    across: 2 * top.u - u,
     width: top.width,
   }
+}
+
+/** Area and first moments of all metal in the frame. */
+function wholeIn({ x, y, moments }: Bundles, frame: Frame): { area: number; u: number; v: number } {
+  const { area } = moments
+  const dx = moments.u + (x - frame.x) * area
+  const dy = moments.v + (y - frame.y) * area
+  return { area, u: dx * frame.cos + dy * frame.sin, v: dy * frame.cos - dx * frame.sin }
 }
