@@ -85,9 +85,13 @@ export function controlsPoint({ u, v, w }: Controls, t: number, point: { u: numb
 
 const at = { u: 0, v: 0, du: 0, dv: 0 }
 
-/** Adds the fan between (0, 0) and the curve by n Gauss points: ∫f dA = 1/(k + 2)·∫f·(u v′ − v u′) dt. */
-function addFan(controls: Controls, points: number, out: Float64Array): void {
+/**
+ * Adds the fan between (0, 0) and the curve by n Gauss points: ∫f dA = 1/(k + 2)·∫f·(u v′ − v u′) dt. Returns the same for u² + v²
+ * with every contribution positive: the scale against which rounding is measured.
+ */
+function addFan(controls: Controls, points: number, out: Float64Array): number {
   const { nodes, weights } = gaussRule(points)
+  let scale = 0
   for (let g = 0; g < points; g++) {
     controlsPoint(controls, nodes[g], at)
     const fan = weights[g] * (at.u * at.dv - at.v * at.du)
@@ -97,7 +101,9 @@ function addFan(controls: Controls, points: number, out: Float64Array): void {
     out[UU] += (fan * at.u * at.u) / 4
     out[VV] += (fan * at.v * at.v) / 4
     out[UV] += (fan * at.u * at.v) / 4
+    scale += Math.abs(fan) * (at.u * at.u + at.v * at.v)
   }
+  return scale
 }
 
 const ratioOf = (w: Float64Array): number => {
@@ -110,24 +116,29 @@ const ratioOf = (w: Float64Array): number => {
   return most / least
 }
 
-/** Rational: halved until the weights are within a factor 2, then n against 2n points until nothing changes. */
-function addRationalFan(controls: Controls, out: Float64Array, depth: number): void {
-  if (ratioOf(controls.w) <= 2 || depth === 0) {
+const MOST_HALVINGS = 12
+
+/**
+ * Rational: halved until the weights are within a factor 2, then n against 2n points until their difference is rounding against
+ * `scale`, that of the whole piece (a half's own moments may all but cancel).
+ */
+function addRationalFan(controls: Controls, out: Float64Array, scale: number, depth: number): void {
+  if (ratioOf(controls.w) <= 2 || depth === MOST_HALVINGS) {
     const points = 2 * controls.u.length + 4
     const coarse = new Float64Array(6)
     const fine = new Float64Array(6)
     addFan(controls, points, coarse)
     addFan(controls, 2 * points, fine)
-    const scale = Math.abs(fine[UU]) + Math.abs(fine[VV])
     const off = Math.abs(fine[UU] - coarse[UU]) + Math.abs(fine[VV] - coarse[VV]) + Math.abs(fine[UV] - coarse[UV])
-    if (off <= 1e-13 * scale || depth === 0) {
+    if (off <= 1e-14 * scale || depth === MOST_HALVINGS) {
       for (let j = 0; j < 6; j++) out[j] += fine[j]
       return
     }
   }
-  for (const half of splitControls(controls, 0.5)) addRationalFan(half, out, depth - 1)
+  for (const half of splitControls(controls, 0.5)) addRationalFan(half, out, scale, depth + 1)
 }
 
+const scratch = new Float64Array(6)
 const segment = new Float64Array(6)
 
 /**
@@ -137,7 +148,7 @@ const segment = new Float64Array(6)
  */
 export function addControlsSegment(controls: Controls, k: number, l: number, out: Float64Array): void {
   segment.fill(0)
-  if (controls.rational) addRationalFan(controls, segment, 24)
+  if (controls.rational) addRationalFan(controls, segment, addFan(controls, 2 * controls.u.length, scratch.fill(0)), 0)
   else addFan(controls, Math.max(2, 2 * (controls.u.length - 1)), segment)
   addShifted(out, k, l, segment[AREA], segment[U], segment[V], segment[UU], segment[VV], segment[UV])
 }

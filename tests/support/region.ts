@@ -1,4 +1,14 @@
-import { type EdgeTable, emptyTable, pushArc, pushBezier, pushEllipse, pushLine } from '@/lib/geometry/edges'
+import {
+  type Edge,
+  type EdgeTable,
+  emptyTable,
+  pushArc,
+  pushBezier,
+  pushEdge,
+  pushEllipse,
+  pushLine,
+  reversed,
+} from '@/lib/geometry/edges'
 import type { Region } from '@/lib/geometry/region'
 
 /** A vertex as DXF polylines have it: x, y and the bulge of the edge that starts there (tan of a quarter of its sweep). */
@@ -91,3 +101,21 @@ export const beziers = (pieces: readonly (readonly (readonly [number, number, nu
   },
   hole: isHole,
 })
+
+/** Region of a random profile (support/profiles.ts): outlines by their nesting depth; every island is a piece of its own. */
+export function regionOfProfile(profile: readonly { outline: Edge[]; depth: number }[]): Region {
+  let pieces = 0
+  return regionOfLoops(
+    profile.map(({ outline, depth }) => {
+      const solid = depth % 2 === 0
+      const edges = solid ? outline : outline.map(reversed).reverse()
+      return {
+        push: (t: EdgeTable) => {
+          for (const edge of edges) pushEdge(t, edge)
+        },
+        hole: !solid,
+        piece: solid ? pieces++ : 0,
+      }
+    }),
+  )
+}
