@@ -40,6 +40,7 @@ export const DXF_FINDINGS = {
     (p) =>
       `The drawing has more than ${number(p.limit)} entities (setting ${p.setting}). Delete what is not the profile and upload it again.`,
   ),
+  'too-many-blocks': error((p) => `The file defines more than ${number(p.limit)} blocks. Purge the drawing and save it again.`),
   'too-many-after-opening': error(
     (p) =>
       `Blocks opened up, arrays and all, the drawing would have ${number(p.count)} entities; this server takes ${number(p.limit)} (setting ${p.setting}). Explode only the block that holds the profile and delete the rest.`,

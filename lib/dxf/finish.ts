@@ -1,5 +1,4 @@
 import { IDENTITY } from './affine'
-import type { BlockDefinition } from './blocks'
 import { type Drawing, HATCH_BOUNDARY, type ReadLimits } from './drawing'
 import { drawnDimensions } from './dimensions'
 import { dxfFinding } from './findings'
@@ -19,15 +18,13 @@ export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, 
   const { root, findings, decode: read } = reading
   const naming = nameThings(reading, facts, read)
   const spaces = new Spaces(facts, read)
-  const blocksByName = groupByName(blocks, read)
   const spaceBlocks = blocks.filter(({ sheet }) => /^[*$](MODEL|PAPER)_SPACE/i.test(sheet.name))
-  const blocksOf = (name: number) => blocksByName.get(read(reading.blocks.raw[name]).toUpperCase()) ?? []
-  const resolve = measureBlocks(reading, blocksOf, [root, ...spaceBlocks.map((b) => b.sheet)], limits)
-  const opener = new BlockOpener(reading, naming, resolve ?? (() => null), read)
+  const shown = measureBlocks(reading, blocks, [root, ...spaceBlocks.map((b) => b.sheet)], limits)
+  const opener = new BlockOpener(reading, naming, blocks, shown ?? new Map())
   answerRoot(reading, naming, opener, spaces)
   opener.count(root)
   opener.openAll(root, IDENTITY, 0)
-  if (resolve) {
+  if (shown) {
     for (const block of spaceBlocks) {
       const space = /model/i.test(block.sheet.name) ? 0 : spaces.ofBlock(block.sheet.name)
       opener.place(block, IDENTITY, { layer: naming.zero, lineType: naming.continuous, space, flags: 0, block: 0, insert: 0 })
@@ -66,6 +63,7 @@ export function finishDrawing(reading: Reading, { facts, blocks }: FileContent, 
 /** Names of the spaces: the model, and the layouts that hold something. */
 class Spaces {
   readonly names = ['model']
+  private readonly indexOf = new Map<string, number>()
 
   constructor(
     private readonly facts: FileFacts,
@@ -82,20 +80,10 @@ class Spaces {
   }
 
   private add(name: string): number {
-    const known = this.names.indexOf(name, 1)
-    return known > 0 ? known : this.names.push(name) - 1
+    const index = this.indexOf.get(name) ?? this.names.push(name) - 1
+    this.indexOf.set(name, index)
+    return index
   }
-}
-
-function groupByName(blocks: readonly BlockDefinition[], read: (raw: string) => string): Map<string, BlockDefinition[]> {
-  const groups = new Map<string, BlockDefinition[]>()
-  for (const block of blocks) {
-    const key = read(block.sheet.name).toUpperCase()
-    const group = groups.get(key)
-    if (group) group.push(block)
-    else groups.set(key, [block])
-  }
-  return groups
 }
 
 /** Rows of the root hold numbers of names as read; here they become indices of the drawing. */

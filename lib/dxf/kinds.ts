@@ -14,7 +14,7 @@ export const HATCH_KIND = 8
 
 /** Records that the reader knows besides, numbered after the kinds above. */
 export const MARKS = ['VERTEX', 'SEQEND', 'DIMENSION', 'SECTION', 'ENDSEC', 'EOF', 'BLOCK', 'ENDBLK', 'LAYER', 'LTYPE'] as const
-export const MORE_MARKS = ['BLOCK_RECORD', 'DIMSTYLE', 'LAYOUT', 'TABLE', 'ENDTAB', 'ATTRIB', 'VIEWPORT'] as const
+export const MORE_MARKS = ['BLOCK_RECORD', 'DIMSTYLE', 'LAYOUT', 'TABLE', 'ENDTAB', 'ATTRIB', 'VIEWPORT', 'OTHER'] as const
 export const ALL_KINDS: readonly string[] = [...KINDS, ...MARKS, ...MORE_MARKS]
 export const kindNumber = (name: (typeof KINDS)[number] | (typeof MARKS)[number] | (typeof MORE_MARKS)[number]): number =>
   ALL_KINDS.indexOf(name)

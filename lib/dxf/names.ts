@@ -12,9 +12,12 @@ export class Names {
   private readonly seenFrom = new Uint32Array(SLOTS)
   private readonly seenTo = new Uint32Array(SLOTS)
 
+  /** Beyond `most` names, further ones all get the number `beyond`. */
   constructor(
     private readonly bytes: Uint8Array,
     known: readonly string[] = [],
+    private readonly most = Number.POSITIVE_INFINITY,
+    private readonly beyond = 0,
   ) {
     for (const name of known) this.add(name)
   }
@@ -39,6 +42,7 @@ export class Names {
   add(raw: string): number {
     const known = this.ids.get(raw)
     if (known !== undefined) return known
+    if (this.raw.length >= this.most) return this.beyond
     this.ids.set(raw, this.raw.length)
     return this.raw.push(raw) - 1
   }

@@ -2,11 +2,11 @@ import { type Affine, after } from './affine'
 import type { BlockDefinition } from './blocks'
 import { type EntityColumns, FROZEN_INSERT } from './drawing'
 import { pushEntity } from './entityTable'
-import type { Resolve } from './measureBlocks'
+import type { Shown } from './measureBlocks'
 import type { Naming } from './naming'
 import { placeEdges } from './placeEdges'
 import { BY_BLOCK, BY_LAYER, type Reading } from './reading'
-import type { Placement, Sheet } from './sheet'
+import type { Placements, Sheet } from './sheet'
 
 /** What a placed entity takes from the inserts around it: indices of `Drawing`. */
 export interface Surroundings {
@@ -29,34 +29,40 @@ export class BlockOpener {
   constructor(
     private readonly reading: Reading,
     private readonly naming: Naming,
-    private readonly resolve: Resolve,
-    private readonly read: (raw: string) => string,
+    private readonly definitions: readonly BlockDefinition[],
+    private readonly shown: Shown,
   ) {}
 
   /** Opens all inserts of a sheet whose own rows are in the root already, from row `first` on. */
   openAll(sheet: Sheet, map: Affine, first: number): void {
     const { entities } = this.reading.root
-    for (const placement of sheet.placements) {
-      const block = this.resolve(placement)
-      if (!block) continue
-      const row = first + placement.row
-      const outer = entities.block[row]
-      const { layers } = this.naming
-      const around: Surroundings = {
-        layer: entities.layer[row],
-        lineType: entities.lineType[row],
-        space: entities.space[row],
-        flags: entities.flags[row] | (layers[entities.layer[row]].frozen ? FROZEN_INSERT : 0),
-        block: outer === 0 ? this.numberOf(block) : outer,
-        insert: entities.insert[row],
-      }
-      for (let j = 0; j < placement.rows; j++) {
-        for (let i = 0; i < placement.columns; i++) {
+    const { placements } = sheet
+    const shows = this.shown.get(sheet)
+    for (let k = 0; shows && k < placements.count; k++) {
+      if (shows[k] < 0) continue
+      const block = this.definitions[shows[k]]
+      const around = this.surroundings(entities, first + placements.get(k, 'row'), block)
+      const [columns, rows] = [placements.get(k, 'columns'), placements.get(k, 'rows')]
+      for (let j = 0; j < rows; j++) {
+        for (let i = 0; i < columns; i++) {
           this.inserts++
           const own = around.insert === 0 ? { ...around, insert: this.inserts } : around
-          this.place(block, after(map, shifted(placement, i, j, block.base)), own)
+          this.place(block, after(map, placedMap(placements, k, i, j, block.base)), own)
         }
       }
+    }
+  }
+
+  private surroundings(entities: EntityColumns, row: number, block: BlockDefinition): Surroundings {
+    const layer = entities.layer[row]
+    const outer = entities.block[row]
+    return {
+      layer,
+      lineType: entities.lineType[row],
+      space: entities.space[row],
+      flags: entities.flags[row] | (this.naming.layers[layer].frozen ? FROZEN_INSERT : 0),
+      block: outer === 0 ? this.numberOf(block) : outer,
+      insert: entities.insert[row],
     }
   }
 
@@ -102,17 +108,15 @@ export class BlockOpener {
   private numberOf(block: BlockDefinition): number {
     const known = this.blockIndex.get(block)
     if (known !== undefined) return known
-    const number = this.blocks.push(this.read(block.sheet.name))
+    const number = this.blocks.push(this.reading.decode(block.sheet.name))
     this.blockIndex.set(block, number)
     return number
   }
 }
 
-/** The placement's map for one column and row of its array, the block's base point at its place. */
-function shifted({ map, columnStep, rowStep }: Placement, column: number, row: number, base: [number, number]): Affine {
-  return {
-    ...map,
-    e: map.e + column * columnStep[0] + row * rowStep[0] - map.a * base[0] - map.c * base[1],
-    f: map.f + column * columnStep[1] + row * rowStep[1] - map.b * base[0] - map.d * base[1],
-  }
+/** The map of placement k for one column and row of its array, the block's base point at its place. */
+function placedMap(placements: Placements, k: number, column: number, row: number, base: [number, number]): Affine {
+  const [a, b, c, d, e, f] = [0, 1, 2, 3, 4, 5].map((n) => placements.get(k, 'map', n))
+  const shift = (n: 0 | 1) => column * placements.get(k, 'columnStep', n) + row * placements.get(k, 'rowStep', n)
+  return { a, b, c, d, e: e + shift(0) - a * base[0] - c * base[1], f: f + shift(1) - b * base[0] - d * base[1] }
 }

@@ -8,7 +8,7 @@ import { GroupRecord, type Slots } from './record'
 import { textReader } from './text'
 import { emptySheet, type Sheet } from './sheet'
 import type { GroupCursor } from './groups'
-import { ALL_KINDS } from './kinds'
+import { ALL_KINDS, kindNumber } from './kinds'
 import type { RawDimension } from './entities/dimension'
 import { Vertices } from './entities/vertices'
 
@@ -17,6 +17,10 @@ export const BY_LAYER = 0
 export const BY_BLOCK = 1
 /** Layer 0; number of `Reading.layers`. */
 export const LAYER_ZERO = 0
+
+/** Kinds and layouts that are told apart; no drawing has as many, a hostile file may. */
+const MOST_KINDS = 1000
+const MOST_LAYOUTS = 10_000
 
 /** Sine of the tilt that still counts as none: it changes lengths by less than 1e-14. */
 const LEAST_TILT = 1e-7
@@ -85,11 +89,11 @@ export class Reading {
   ) {
     const { bytes } = cursor
     this.decode = textReader('', '', marked).read
-    this.record = new GroupRecord(cursor, new Names(bytes, ALL_KINDS))
+    this.record = new GroupRecord(cursor, new Names(bytes, ALL_KINDS, MOST_KINDS, kindNumber('OTHER')))
     this.layers = new Names(bytes, ['0'])
     this.lineTypes = new Names(bytes, ['BYLAYER', 'BYBLOCK'])
     this.blocks = new Names(bytes)
-    this.layouts = new Names(bytes, [''])
+    this.layouts = new Names(bytes, [''], MOST_LAYOUTS)
     const guess = Math.min(1 << 20, bytes.length >> 6)
     this.root = emptySheet('', guess + 16, guess + 16)
     this.sheet = this.root
@@ -174,7 +178,8 @@ export class Reading {
 
   /** The entity at hand becomes a row without edges, with the fault that the record holds. */
   refuseRecord(kind: number): void {
-    this.remarkFault(this.begin(kind), this.where(kind))
+    const row = this.begin(kind)
+    if (!this.shareRemark(row, this.record.fault)) this.remarkFault(row, this.where(kind))
   }
 
   /** Adds the fault that the record holds to a row. */
@@ -187,20 +192,17 @@ export class Reading {
 
   /** The entity at hand becomes a row without edges that says why. */
   refuse(kind: number, code: DxfCode, params: FindingParams = {}): void {
-    this.remark(this.begin(kind), code, { ...this.where(kind), ...params })
+    const row = this.begin(kind)
+    if (!this.shareRemark(row, code)) this.remark(row, code, { ...this.where(kind), ...params })
   }
 
   /** Adds a remark to a row of the sheet. Beyond 2,000 of one code rows share the last one. */
   remark(row: number, code: DxfCode, params: FindingParams, at?: [number, number]): void {
-    const count = (this.countOfCode.get(code) ?? 0) + 1
-    this.countOfCode.set(code, count)
+    if (this.shareRemark(row, code)) return
+    this.countOfCode.set(code, (this.countOfCode.get(code) ?? 0) + 1)
     const { entities } = this.sheet
     const place = this.sheet === this.root ? at : undefined
     const own = entities.remark[row]
-    if (count > LISTED_PER_CODE) {
-      if (own === 0) entities.remark[row] = this.lastOfCode.get(code) ?? 0
-      return
-    }
     const finding = dxfFinding(
       code,
       this.sheet === this.root ? params : { ...params, block: this.decode(this.sheet.name) },
@@ -209,6 +211,14 @@ export class Reading {
     if (own > 0) this.remarks[own - 1].push(finding)
     else entities.remark[row] = this.remarks.push([finding])
     this.lastOfCode.set(code, entities.remark[row])
+  }
+
+  /** Whether enough remarks of that code are kept; then the row shares the last one, unless it has its own. */
+  private shareRemark(row: number, code: DxfCode): boolean {
+    if ((this.countOfCode.get(code) ?? 0) < LISTED_PER_CODE) return false
+    const { remark } = this.sheet.entities
+    if (remark[row] === 0) remark[row] = this.lastOfCode.get(code) ?? 0
+    return true
   }
 
   /** What leads a person to the entity at hand: its kind, handle and line. */

@@ -40,6 +40,9 @@ const BLOCK_RECORD = kindNumber('BLOCK_RECORD')
 const DIMSTYLE = kindNumber('DIMSTYLE')
 const LAYOUT = kindNumber('LAYOUT')
 
+/** Blocks that a file may define; each takes memory even when empty. */
+const MOST_BLOCKS = 100_000
+
 /** What the walk over the file's sections found, besides what is in `Reading`. */
 export interface FileContent {
   facts: FileFacts
@@ -61,6 +64,7 @@ class Walk {
   private entities = 0
   private entitiesComplete = false
   private sectionless = false
+  private blockLimitPassed = false
   private readonly sections = new Map<string, number>()
 
   constructor(
@@ -81,16 +85,22 @@ class Walk {
       more = record.read()
       // a record at which the file ends may be cut short; only the end of a section needs no more
       if (more || (record.kind === ENDSEC && cursor.fault === 'none')) this.take()
-      if (this.entities > this.limits.entities) {
-        const { entities } = this.limits
-        reading.findings.add('too-many-entities', () => dxfFinding('too-many-entities', { limit: entities, setting: 'entities' }))
-        return
-      }
+      if (this.passesLimit()) return
     }
     this.endPolyline(false)
     this.endBlock()
     this.reportEnd(ended)
     this.reportSections()
+  }
+
+  private passesLimit(): boolean {
+    const { findings } = this.reading
+    const { entities } = this.limits
+    if (this.blockLimitPassed) findings.add('too-many-blocks', () => dxfFinding('too-many-blocks', { limit: MOST_BLOCKS }))
+    else if (this.entities > entities) {
+      findings.add('too-many-entities', () => dxfFinding('too-many-entities', { limit: entities, setting: 'entities' }))
+    } else return false
+    return true
   }
 
   private take(): void {
@@ -152,6 +162,10 @@ class Walk {
     if (kind === BLOCK) {
       this.endPolyline(false)
       this.endBlock()
+      if (this.blocks.length >= MOST_BLOCKS) {
+        this.blockLimitPassed = true
+        return
+      }
       const block = openBlock(this.reading)
       this.blocks.push(block)
       this.reading.sheet = block.sheet

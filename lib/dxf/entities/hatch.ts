@@ -4,7 +4,7 @@ import { cosDegrees, sinDegrees } from '../affine'
 import { HATCH_BOUNDARY } from '../drawing'
 import { HATCH_KIND } from '../kinds'
 import type { Reading } from '../reading'
-import { bezierPiece } from '../spline/bezierPieces'
+import { bezierPieces } from '../spline/bezierPieces'
 import { pushPieces } from '../spline/pushPieces'
 import { pushArcDegrees, sweepDegrees } from './arc'
 import { pushEllipticalArc } from './ellipse'
@@ -168,10 +168,5 @@ function readSplineEdge(reading: Reading, boundary: Boundary, row: number): void
   for (let i = 0; i < fit && boundary.fault === null; i++) [11, 21].map((code) => boundary.take(code))
   for (const tangent of [12, 13]) if (boundary.maybe(tangent) !== null) boundary.take(tangent + 10)
   if (boundary.fault !== null) return
-  const homogeneous = Float64Array.from(control)
-  const pieces = []
-  for (let span = degree; span < controlCount; span++) {
-    if (knots[span] < knots[span + 1]) pieces.push(bezierPiece(degree, knots, homogeneous, span))
-  }
-  pushPieces(reading.sheet, row, pieces)
+  pushPieces(reading.sheet, row, bezierPieces(degree, knots, Float64Array.from(control)))
 }

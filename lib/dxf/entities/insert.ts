@@ -33,15 +33,10 @@ export function readInsert(reading: Reading) {
   const row = reading.begin(INSERT_KIND)
   reading.height(facing * record.slot(2, 0))
   const handle = record.find(5)
-  reading.sheet.placements.push({
-    block: reading.blocks.idOf(record.from[g], record.to[g]),
-    row,
-    map: after(seen, { a: scaleX, b: 0, c: 0, d: scaleY, e: 0, f: 0 }),
-    columns,
-    rows,
-    columnStep: [seen.a * columnWidth, seen.b * columnWidth],
-    rowStep: [seen.c * rowHeight, seen.d * rowHeight],
-    line: record.line,
-    handle: handle < 0 ? [0, 0] : [record.from[handle], record.to[handle]],
-  })
+  const { a, b, c, d, e, f } = after(seen, { a: scaleX, b: 0, c: 0, d: scaleY, e: 0, f: 0 })
+  const block = reading.blocks.idOf(record.from[g], record.to[g])
+  const column = [seen.a * columnWidth, seen.b * columnWidth]
+  const step = [seen.c * rowHeight, seen.d * rowHeight]
+  const place = handle < 0 ? [record.line, 0, 0] : [record.line, record.from[handle], record.to[handle]]
+  reading.sheet.placements.push([block, row, a, b, c, d, e, f, columns, rows, ...column, ...step, ...place])
 }

@@ -1,6 +1,6 @@
 import { SPLINE_KIND } from '../kinds'
 import type { Reading } from '../reading'
-import { bezierPiece, type Homogeneous } from '../spline/bezierPieces'
+import { bezierPieces, type Homogeneous } from '../spline/bezierPieces'
 import { type Ends, greatestDistance, interpolate, parametersBy } from '../spline/interpolate'
 import { pushPieces } from '../spline/pushPieces'
 
@@ -52,19 +52,14 @@ export function readSpline(reading: Reading) {
   if (count === 0) reading.remark(row, 'no-length', where)
 }
 
-function piecesOf({ degree, knots, weights, control }: SplineGroups): Homogeneous[] {
+function piecesOf({ degree, knots, weights, control }: SplineGroups): Iterable<Homogeneous> {
   const even = weights.every((w) => w === weights[0])
-  const homogeneous = Float64Array.from(
-    control.flatMap(([x, y], i) => {
-      const w = even ? 1 : weights[i]
-      return [x * w, y * w, w]
-    }),
-  )
-  const pieces: Homogeneous[] = []
-  for (let span = degree; span < control.length; span++) {
-    if (knots[span] < knots[span + 1]) pieces.push(bezierPiece(degree, knots, homogeneous, span))
-  }
-  return pieces
+  const homogeneous = new Float64Array(3 * control.length)
+  control.forEach(([x, y], i) => {
+    const w = even ? 1 : weights[i]
+    homogeneous.set([x * w, y * w, w], 3 * i)
+  })
+  return bezierPieces(degree, knots, homogeneous)
 }
 
 function piecesThrough(reading: Reading, row: number, { fit, flags, start, end }: SplineGroups): Homogeneous[] {

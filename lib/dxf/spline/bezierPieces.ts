@@ -31,6 +31,13 @@ export function bezierPiece(degree: number, knots: ArrayLike<number>, control: H
   return piece
 }
 
+/** The Bézier pieces of a B-spline on its domain [u_p, u_(n+1)], one a knot span that is not empty. */
+export function* bezierPieces(degree: number, knots: ArrayLike<number>, control: Homogeneous): Generator<Homogeneous> {
+  for (let span = degree; span < control.length / 3; span++) {
+    if (knots[span] < knots[span + 1]) yield bezierPiece(degree, knots, control, span)
+  }
+}
+
 /** Both halves of a Bézier piece, cut at t, by de Casteljau's scheme. */
 export function cutBezier(piece: Homogeneous, t: number): [Homogeneous, Homogeneous] {
   const degree = piece.length / 3 - 1

@@ -1,4 +1,4 @@
-import { pushBezier, pushLine } from '../../geometry/edges'
+import { type EdgeTable, pushBezier, pushLine } from '../../geometry/edges'
 import type { Sheet } from '../sheet'
 import { evenWeights, type Homogeneous } from './bezierPieces'
 import { cutAtCusps } from './cusps'
@@ -11,14 +11,10 @@ const LAST_BITS = 1e-14
  * Appends Bézier pieces as edges: cut at cusps and until their weights are even; straight ones become lines, those
  * without length are left out. Joints between pieces are one point to the last bit. Answers how many edges came.
  */
-export function pushPieces({ edges, entities }: Sheet, row: number, pieces: readonly Homogeneous[]): number {
+export function pushPieces({ edges, entities }: Sheet, row: number, pieces: Iterable<Homogeneous>): number {
   const first = edges.count
-  for (const piece of pieces.flatMap(cutAtCusps).flatMap(evenWeights)) {
-    const xyw = plain(piece)
-    const end = xyw.length - 3
-    if (isPoint(xyw)) continue
-    if (isStraight(xyw)) pushLine(edges, xyw[0], xyw[1], xyw[end], xyw[end + 1], row)
-    else pushBezier(edges, end / 3, isRational(xyw), xyw, row)
+  for (const piece of pieces) {
+    for (const part of cutAtCusps(piece)) for (const even of evenWeights(part)) pushPiece(edges, row, plain(even))
   }
   const count = edges.count - first
   if (count > 0) {
@@ -28,6 +24,13 @@ export function pushPieces({ edges, entities }: Sheet, row: number, pieces: read
     if (ends[4 * first] === ends[last + 2] && ends[4 * first + 1] === ends[last + 3]) entities.closed[row] = 1
   }
   return count
+}
+
+function pushPiece(edges: EdgeTable, row: number, xyw: Float64Array): void {
+  const end = xyw.length - 3
+  if (isPoint(xyw)) return
+  if (isStraight(xyw)) pushLine(edges, xyw[0], xyw[1], xyw[end], xyw[end + 1], row)
+  else pushBezier(edges, end / 3, isRational(xyw), xyw, row)
 }
 
 /** Control points as x y w. */
