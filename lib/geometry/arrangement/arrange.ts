@@ -7,8 +7,8 @@ import { emptyVertices, type Vertices, vertexAt } from './vertices'
 import { windings } from './winding'
 import { workTable } from './workTable'
 
-/** Meetings of edges an arrangement takes on before it says that the drawing is too tangled. */
-export const MOST_MEETINGS = 500_000
+/** Crossings an arrangement takes on before it says that the drawing is too tangled: seconds, not minutes. */
+export const MOST_CROSSINGS = 50_000
 
 /**
  * The plane cut by edges. Sub-edge u runs from vertex from[u] to to[u] on edge row[u] of `edges`, between
@@ -53,7 +53,7 @@ export function arrange(
   owner: Uint32Array,
   owners: number,
   tolerance: number,
-  most = MOST_MEETINGS,
+  most = MOST_CROSSINGS,
 ): Arrangement | null {
   const [ox, oy] = middle(edges)
   const work = workTable(edges, ox, oy, tolerance)
@@ -131,21 +131,22 @@ function split(pieces: Pieces, local: Vertices, tolerance: number, most: number)
     )
   }
   index.finish()
-  let meetings = 0
+  const crossings = local.count + most
+  const meetings = 20 * (most + count)
+  const tooMany = () => local.count > crossings || onPiece.length > meetings
   const meet = (i: number, ti: number, j: number, tj: number, x: number, y: number) => {
-    meetings++
     const v = vertexAt(local, x, y)
     add(i, ti, v)
     add(j, tj, v)
   }
-  for (let i = 0; i < count && meetings <= most; i++) {
+  for (let i = 0; i < count && !tooMany(); i++) {
     const [x0, y0, x1, y1] = [ends[4 * i], ends[4 * i + 1], ends[4 * i + 2], ends[4 * i + 3]]
     index.search(Math.min(x0, x1), Math.min(y0, y1), Math.max(x0, x1), Math.max(y0, y1), (j) => {
-      if (j > i && meetings <= most) meetPieces(pieces, i, j, tolerance, meet)
+      if (j > i && !tooMany()) meetPieces(pieces, i, j, tolerance, meet)
       return false
     })
   }
-  return meetings > most + 4 * count ? null : sorted(pieces, onPiece, atT, atVertex)
+  return tooMany() ? null : sorted(pieces, onPiece, atT, atVertex)
 }
 
 function sorted(pieces: Pieces, onPiece: number[], atT: number[], atVertex: number[]): Splits {
@@ -168,7 +169,9 @@ function sorted(pieces: Pieces, onPiece: number[], atT: number[], atVertex: numb
       const at = start[i] + k
       t[at] = atT[n]
       vertex[at] = atVertex[n]
-      if (k > 0 && vertex[at - 1] === vertex[at]) t[at] = t[at - 1] = n < own[k - 1] ? atT[n] : t[at - 1]
+      if (k === 0 || vertex[at - 1] !== vertex[at]) return
+      if (n < own[k - 1]) t[at - 1] = t[at]
+      else t[at] = t[at - 1]
     })
   }
   return { start, t, vertex }

@@ -3,7 +3,7 @@ import type { OutlineSet, Tolerances } from '../outlineSet'
 import { nearestOutlines } from '../pickOutlines'
 import type { Bond, Does, MakeUpStep, XY } from '../recipe'
 import type { Region, Repair } from '../region'
-import { MOST_MEETINGS } from './arrange'
+import { MOST_CROSSINGS } from './arrange'
 import { type Combined, combine, loopsWhere } from './combine'
 import { defaultSteps } from './defaultSteps'
 import { combineFinding } from './findings'
@@ -68,7 +68,7 @@ export function regionOf(
     if (members.length === 0 || (members.length === 1 && cluster.length > 1)) continue
     const tangle = tangleOf(set, members, tolerances.snap)
     const at: XY = [set.at[2 * members[0]], set.at[2 * members[0] + 1]]
-    if (!tangle) return failed(combineFinding('too-many-crossings', { x: at[0], y: at[1], most: MOST_MEETINGS }, at))
+    if (!tangle) return failed(combineFinding('too-many-crossings', { x: at[0], y: at[1], most: MOST_CROSSINGS }, at))
     tangles.push(tangle)
   }
 

@@ -1,4 +1,5 @@
 import Flatbush from 'flatbush'
+import { chainWalk } from './chains'
 import type { Merged } from './merge'
 import type { Pieces } from './monotone'
 import { crossingOf, pointOf } from './stretch'
@@ -84,7 +85,10 @@ export function windings(
     else index.search(mx, a, mx, b, visit)
   }
 
+  const walk = chainWalk(merged, rows, local.count)
+  const done = new Uint8Array(count)
   for (const u of rows) {
+    if (done[u]) continue
     const [x0, y0, x1, y1] = [local.x[from[u]], local.y[from[u]], local.x[to[u]], local.y[to[u]]]
     const axis = Math.abs(y1 - y0) >= Math.abs(x1 - x0) ? 0 : 1
     const middle = axis === 0 ? (x0 + x1) / 2 : (y0 + y1) / 2
@@ -114,6 +118,11 @@ export function windings(
     for (const o of bestTouched) best[o] = 0
     left[u] = forward ? far : near
     right[u] = forward ? near : far
+    walk(u, (w, turned) => {
+      done[w] = 1
+      left[w] = turned ? right[u] : left[u]
+      right[w] = turned ? left[u] : right[u]
+    })
   }
   return { left, right, sets }
 }
