@@ -1,0 +1,38 @@
+import { test } from 'vitest'
+import { edgeAt } from '@/lib/geometry/edges'
+import { random } from '@/tests/support/random'
+import { areaOf, Failures, RUNS, VARIANTS, varied } from './campaign'
+import { arrangementOf, type Combined, where } from './combine'
+import { KINDS, pairOf } from './pairs'
+import type { Shape } from './shapes'
+
+for (const variant of VARIANTS) {
+  test(`${RUNS} pairs of ten kinds with ${variant} keep |A∪B|+|A∩B| = |A|+|B| and |A−B|+|A∩B| = |A| to 1e-9`, () => {
+    const failures = new Failures()
+    for (let seed = 1; seed <= RUNS; seed++) {
+      const next = random(seed)
+      const [a, b] = varied(pairOf(KINDS[seed % KINDS.length], next), variant, next)
+      const both = arrangementOf([a, b])
+      const union = where(both, ([p, q]) => p || q)
+      const common = where(both, ([p, q]) => p && q)
+      const aOnly = where(both, ([p, q]) => p && !q)
+      const bOnly = where(both, ([p, q]) => !p && q)
+      const [A, B] = [areaOf(a), areaOf(b)]
+      failures.check(seed, 'union + common', Math.abs(union.area + common.area - A - B), 1e-9 * (A + B))
+      failures.check(seed, 'A − B', Math.abs(aOnly.area + common.area - A), 1e-9 * A)
+      failures.check(seed, 'B − A', Math.abs(bOnly.area + common.area - B), 1e-9 * B)
+      failures.check(seed, 'open ends', union.faults + common.faults + aOnly.faults + bOnly.faults, 0)
+      if (seed % 4 === 0) {
+        const again = reunited(aOnly, common, [a, b])
+        failures.check(seed, '(A − B) ∪ (A ∩ B)', Math.abs(again - A), 1e-9 * A)
+      }
+    }
+    failures.expectNone()
+  })
+}
+
+/** Area of two answers put together again. */
+function reunited(first: Combined, second: Combined, size: Shape[]): number {
+  const shapes = [first, second].map(({ loops }) => Array.from({ length: loops.edges.count }, (_, i) => edgeAt(loops.edges, i)))
+  return where(arrangementOf(shapes, 1e-9, size), ([p, q]) => p || q).area
+}
