@@ -17,6 +17,7 @@ const Environment = z.object({
     .positive()
     .default(64 * 1024 * 1024),
   COMPUTE_SECONDS: z.coerce.number().positive().default(30),
+  OPINION_SECONDS: z.coerce.number().positive().default(5),
   COMPUTE_MEMORY_MB: z.coerce.number().positive().default(1536),
   COMPUTE_CHILDREN: z.coerce.number().int().positive().optional(),
   SIGN_IN_ATTEMPTS: z.coerce.number().int().positive().default(10),
@@ -38,6 +39,8 @@ export interface Config {
   logLevel: 'silent' | 'error' | 'warn' | 'info' | 'debug'
   maxFileBytes: number
   computeSeconds: number
+  /** time of the second opinions, which keep a child busy after its answer */
+  opinionSeconds: number
   computeMemoryMb: number
   computeChildren: number | undefined
   /** wrong passwords in a row before an account or an address has to wait */
@@ -67,6 +70,7 @@ export function readConfig(environment: Record<string, string | undefined>): Con
     logLevel: e.LOG_LEVEL,
     maxFileBytes: e.MAX_FILE_BYTES,
     computeSeconds: e.COMPUTE_SECONDS,
+    opinionSeconds: e.OPINION_SECONDS,
     computeMemoryMb: e.COMPUTE_MEMORY_MB,
     computeChildren: e.COMPUTE_CHILDREN,
     signInAttempts: e.SIGN_IN_ATTEMPTS,

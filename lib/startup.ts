@@ -19,9 +19,9 @@ function prepareDataDir(dataDir: string, incomingDir: string): void {
 }
 
 function startPool(): void {
-  const { computeSeconds, computeMemoryMb, computeChildren } = config()
+  const { computeSeconds, opinionSeconds, computeMemoryMb, computeChildren } = config()
   const size = computeChildren === undefined ? {} : { size: computeChildren }
-  sectionPool({ seconds: computeSeconds, memoryBytes: computeMemoryMb * 1024 ** 2, ...size }).warm()
+  sectionPool({ seconds: computeSeconds, opinionSeconds, memoryBytes: computeMemoryMb * 1024 ** 2, ...size }).warm()
 }
 
 /** Everything before the first request: folder, secret, migrations, the open database, unfinished work. */

@@ -20,6 +20,8 @@ const work: Work = ({ path, source, recipe, materials, unconfirmedBy }: SectionJ
   return {
     answer: { answer: withFindings(answer, unconfirmed), region: region && packRegion(region) },
     opinions() {
+      // nothing is saved without a section, so nobody would read them while others wait
+      if (!answer.section) return { opinions: [], findings: [] }
       const opinions = askOthers(bytes, drawing, combination)
       const findings = opinions
         .filter(({ agrees }) => agrees === false)

@@ -33,7 +33,14 @@ export async function startServer(dataDir: string, env: Record<string, string> =
     throw new Error('These tests need the built server. Run: node scripts/bootstrap.mjs build')
   }
   const port = await freePort()
-  const settings = { PORT: String(port), HOST: '127.0.0.1', DATA_DIR: dataDir, LOG_LEVEL: 'warn', COMPUTE_SECONDS: '2' }
+  const settings = {
+    PORT: String(port),
+    HOST: '127.0.0.1',
+    DATA_DIR: dataDir,
+    LOG_LEVEL: 'warn',
+    COMPUTE_SECONDS: '2',
+    OPINION_SECONDS: '2',
+  }
   const child = spawn(process.execPath, ['scripts/serve.mjs'], {
     cwd: root,
     env: { ...process.env, ...settings, ...env },
