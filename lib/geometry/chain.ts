@@ -1,4 +1,5 @@
 import { moveEnd } from './carrier'
+import { chordLength } from './chordLength'
 import { type EdgeTable, emptyTable, pushCopy } from './edges'
 import { emitChain, emitLoop } from './emitLoop'
 import { type Join, joinEnds } from './joinEnds'
@@ -33,7 +34,7 @@ export function chain(edges: EdgeTable, rows: Uint32Array, tolerances: Tolerance
   }
   const joins = joinEnds(own, ends, mate, tolerances, mmPerUnit)
   const net = netLabels(ends, mate)
-  return { ...walk(own, mate, net), nets: net ? netTables(own, net) : [], joins }
+  return { ...walk(own, mate, net, tolerances.snap), nets: net ? netTables(own, net) : [], joins }
 }
 
 function copyRows(edges: EdgeTable, rows: Uint32Array): EdgeTable {
@@ -58,8 +59,11 @@ function pairUp(ends: Ends): Int32Array {
   return mate
 }
 
-/** Follows mates: closed walks are loops, walks between ends without mate are open chains; nets are left aside. */
-function walk(own: EdgeTable, mate: Int32Array, net: Int32Array | null): Omit<Chained, 'nets' | 'joins'> {
+/**
+ * Follows mates: closed walks are loops, walks between ends without mate, and those there and back over the same line,
+ * are open chains; nets are left aside.
+ */
+function walk(own: EdgeTable, mate: Int32Array, net: Int32Array | null, snap: number): Omit<Chained, 'nets' | 'joins'> {
   const seen = new Uint8Array(own.count)
   const edges = emptyTable(own.count + 64, own.shapesUsed)
   const openEdges = emptyTable()
@@ -80,13 +84,19 @@ function walk(own: EdgeTable, mate: Int32Array, net: Int32Array | null): Omit<Ch
       steps[count++] = end
     }
     if (closed) {
-      emitLoop(edges, own, steps, count)
-      loopStart.push(edges.count)
-      for (let n = 0; n < count; n++) inLoop[steps[n] >> 1] = 1
-    } else {
-      emitChain(openEdges, own, steps, count)
-      openStart.push(openEdges.count)
+      const from = edges.count
+      const shapes = edges.shapesUsed
+      const area = emitLoop(edges, own, steps, count)
+      if (area > snap * chordLength(edges, from, edges.count)) {
+        loopStart.push(edges.count)
+        for (let n = 0; n < count; n++) inLoop[steps[n] >> 1] = 1
+        continue
+      }
+      edges.count = from
+      edges.shapesUsed = shapes
     }
+    emitChain(openEdges, own, steps, count)
+    openStart.push(openEdges.count)
   }
   return { edges, loopStart, openEdges, openStart, inLoop }
 }

@@ -78,7 +78,12 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
     nets: second.nets,
     onLoops: net,
     repairs: [...before.repairs, ...after.repairs],
-    findings: [...findings, ...before.findings, ...after.findings, ...openFindings(openEdges, openStart, mmPerUnit)],
+    findings: [
+      ...findings,
+      ...before.findings,
+      ...after.findings,
+      ...openFindings(openEdges, openStart, tolerances.snap, mmPerUnit),
+    ],
   }
 }
 
@@ -92,7 +97,7 @@ function addClosed(to: EdgeTable, loopStart: number[], edges: EdgeTable, rows: U
   }
 }
 
-function openFindings(openEdges: EdgeTable, openStart: number[], mmPerUnit: number): Finding[] {
+function openFindings(openEdges: EdgeTable, openStart: number[], snap: number, mmPerUnit: number): Finding[] {
   const e = openEdges.ends
   return openStart.slice(1).map((to, k) => {
     const from = openStart[k]
@@ -100,6 +105,7 @@ function openFindings(openEdges: EdgeTable, openStart: number[], mmPerUnit: numb
     const [x1, y1] = [e[4 * to - 2], e[4 * to - 1]]
     const gap = Math.hypot(x1 - x0, y1 - y0)
     const at: [number, number] = [0.5 * (x0 + x1), 0.5 * (y0 + y1)]
+    if (gap <= snap) return geometryFinding('outline-without-area', { edges: to - from, x: x0, y: y0 }, at)
     return geometryFinding('chain-open', { gap: gap * mmPerUnit, x: at[0], y: at[1], edges: to - from, x0, y0, x1, y1 }, at, gap)
   })
 }

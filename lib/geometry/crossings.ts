@@ -6,6 +6,10 @@ import { mayMeet, mayMeetAgain } from './mayMeet'
 import { nearestOn } from './nearest'
 import type { Loops } from './nest'
 
+/** Pairs of boxes looked at and meetings worked out at most: some seconds of work, far past any drawing that is meant. */
+const MOST_PAIRS = 200_000_000
+const MOST_MEETINGS = 200_000
+
 /** How two loops meet. */
 export interface Contact {
   a: number
@@ -21,7 +25,7 @@ export interface Crossings {
   selfCrossing: { loop: number; at: [number, number] }[]
   /** 1 for each edge that meets another loop */
   touched: Uint8Array
-  /** true where the search was given up: more meetings than `limit` */
+  /** true where the search was given up */
   tooMany: boolean
 }
 
@@ -69,14 +73,13 @@ function meetsItself(edges: EdgeTable, i: number, j: number, first: number, last
 
 /**
  * Finds loops whose boundaries meet one another or themselves within `tolerance` (the snap), other than at the joints
- * of a loop. Boxes first, then quick tests, then the exact intersection; at most `limit` meetings.
+ * of a loop. Boxes first, then quick tests, then the exact intersection, within limits on both.
  */
 export function crossingsOf(
   loops: Loops,
   boxes: Float64Array,
   tolerance: number,
   inside: (loop: number, x: number, y: number) => boolean,
-  limit = 2_000_000,
 ): Crossings {
   const { edges, loopStart } = loops
   const loopOf = new Uint32Array(edges.count)
@@ -90,7 +93,7 @@ export function crossingsOf(
   visitBoxPairs(boxes, edges.count, tolerance, (i, j) => {
     const a = loopOf[i]
     const b = loopOf[j]
-    if (++looked > 100 * limit || met > limit) {
+    if (++looked > MOST_PAIRS || met > MOST_MEETINGS) {
       tooMany = true
       return false
     }

@@ -4,7 +4,10 @@ import { visitBoxPairs } from './boxPairs'
 import { moveEnd } from './carrier'
 import { ARC, type EdgeTable, emptyTable, LINE, pushCopy } from './edges'
 import { jetAt, lengthOf, newJet } from './evaluate'
-import { liesOnEdge, overlapOf, stretchAlong } from './overlap'
+import { liesOnEdge, mayOverlap, overlapOf, stretchAlong } from './overlap'
+
+/** Pairs of boxes looked at most; edges doubled beyond it stay, and are reported as branches. */
+const MOST_PAIRS = 200_000_000
 
 /** Loose edges after what was drawn twice is merged. */
 export interface Merged {
@@ -82,15 +85,17 @@ export function mergeDuplicates(loose: EdgeTable, closed: EdgeTable, tolerance: 
     return root
   }
   let length = 0
+  let looked = 0
   visitBoxPairs(boxes, loose.count, 0.5 * tolerance, (i, j) => {
-    if (dropped[i] || dropped[j]) return true
-    const common = overlapOf(loose, i, j, tolerance)
+    if (dropped[i] || dropped[j] || !mayOverlap(loose, i, j, tolerance)) return ++looked < MOST_PAIRS
+    const a = find(i)
+    const b = find(j)
+    const common = a === b ? 0 : overlapOf(loose, i, j, tolerance)
     if (common > 0) {
-      const [a, b] = [find(i), find(j)]
       parent[Math.max(a, b)] = Math.min(a, b)
       length += common
     }
-    return true
+    return ++looked < MOST_PAIRS
   })
   const groups = new Map<number, number[]>()
   for (let i = 0; i < loose.count; i++) {

@@ -62,13 +62,16 @@ export function joinEnds(own: EdgeTable, ends: Ends, mate: Int32Array, tolerance
     mate,
     found.merges.map((members) => members.map(ref)),
   )
-  for (const members of found.ambiguous) {
-    const at = members.map(ref)
-    let width = 0
-    for (const a of at) for (const b of at) width = Math.max(width, Math.hypot(a.x - b.x, a.y - b.y))
-    const { x, y } = at[0]
-    const finding = geometryFinding('ends-ambiguous', { ends: at.length, width: width * mmPerUnit, x, y }, [x, y], width)
-    joins.push({ edge: at[0].row, repair: null, how: '', small: false, finding })
+  for (const { ends: members, width } of found.ambiguous) {
+    const { row, x, y } = ref(members[0])
+    const params = { ends: members.length, width: width * mmPerUnit, x, y }
+    joins.push({
+      edge: row,
+      repair: null,
+      how: '',
+      small: false,
+      finding: geometryFinding('ends-ambiguous', params, [x, y], width),
+    })
   }
   return joins
 }

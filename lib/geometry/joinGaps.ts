@@ -8,7 +8,7 @@ export interface Joins {
   /** ends that become one vertex together (branches drawn with gaps) */
   merges: number[][]
   /** clusters of ends wider than the tolerance: nothing is joined */
-  ambiguous: number[][]
+  ambiguous: { ends: number[]; width: number }[]
 }
 
 interface Near {
@@ -101,10 +101,22 @@ function settle(
   }
   const members = component.map((d) => dangling[d])
   const oneEdgeTwice = new Set(members.map((end) => end >> 1)).size < members.length
+  const width = widthOf(members, x, y)
+  if (width <= tolerance && !oneEdgeTwice) joins.merges.push(members)
+  else joins.ambiguous.push({ ends: members, width })
+}
+
+/** Greatest distance among ends; of very many the diagonal of their box. */
+function widthOf(members: number[], x: (end: number) => number, y: (end: number) => number): number {
+  if (members.length > 64) {
+    const span = (of: (end: number) => number) =>
+      members.reduce((most, end) => Math.max(most, of(end)), Number.NEGATIVE_INFINITY) -
+      members.reduce((least, end) => Math.min(least, of(end)), Number.POSITIVE_INFINITY)
+    return Math.hypot(span(x), span(y))
+  }
   let width = 0
   for (const a of members) for (const b of members) width = Math.max(width, Math.hypot(x(a) - x(b), y(a) - y(b)))
-  if (width <= tolerance && !oneEdgeTwice) joins.merges.push(members)
-  else joins.ambiguous.push(members)
+  return width
 }
 
 /** A dangling end beside a vertex where edges already meet joins it: a branch drawn with a gap. */

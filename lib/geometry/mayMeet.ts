@@ -1,38 +1,53 @@
 import { orient2d } from 'robust-predicates'
 import { ARC, type EdgeTable, LINE } from './edges'
 
-/** Distance of (x, y) to the line from a to b, ends included. */
-export function distanceToLine(ax: number, ay: number, bx: number, by: number, x: number, y: number): number {
+/** Whether (x, y) lies within the reach of the line from a to b, ends included. Squares, for it runs in the hottest loops. */
+export function nearLine(ax: number, ay: number, bx: number, by: number, x: number, y: number, reach: number): boolean {
   const dx = bx - ax
   const dy = by - ay
-  const t = Math.max(0, Math.min(1, ((x - ax) * dx + (y - ay) * dy) / (dx * dx + dy * dy || 1)))
-  return Math.hypot(ax + t * dx - x, ay + t * dy - y)
+  const along = (x - ax) * dx + (y - ay) * dy
+  const length2 = dx * dx + dy * dy
+  const t = along <= 0 ? 0 : along >= length2 ? 1 : along / length2
+  const px = ax + t * dx - x
+  const py = ay + t * dy - y
+  return px * px + py * py <= reach * reach
 }
 
 /** Whether two lines cross or come within the tolerance. */
 function linesMeet(e: Float64Array, i: number, j: number, tolerance: number): boolean {
-  const [ax, ay, bx, by] = [e[4 * i], e[4 * i + 1], e[4 * i + 2], e[4 * i + 3]]
-  const [cx, cy, dx, dy] = [e[4 * j], e[4 * j + 1], e[4 * j + 2], e[4 * j + 3]]
+  const ax = e[4 * i]
+  const ay = e[4 * i + 1]
+  const bx = e[4 * i + 2]
+  const by = e[4 * i + 3]
+  const cx = e[4 * j]
+  const cy = e[4 * j + 1]
+  const dx = e[4 * j + 2]
+  const dy = e[4 * j + 3]
   if (orient2d(ax, ay, bx, by, cx, cy) > 0 !== orient2d(ax, ay, bx, by, dx, dy) > 0)
     if (orient2d(cx, cy, dx, dy, ax, ay) > 0 !== orient2d(cx, cy, dx, dy, bx, by) > 0) return true
   return (
-    distanceToLine(ax, ay, bx, by, cx, cy) <= tolerance ||
-    distanceToLine(ax, ay, bx, by, dx, dy) <= tolerance ||
-    distanceToLine(cx, cy, dx, dy, ax, ay) <= tolerance ||
-    distanceToLine(cx, cy, dx, dy, bx, by) <= tolerance
+    nearLine(ax, ay, bx, by, cx, cy, tolerance) ||
+    nearLine(ax, ay, bx, by, dx, dy, tolerance) ||
+    nearLine(cx, cy, dx, dy, ax, ay, tolerance) ||
+    nearLine(cx, cy, dx, dy, bx, by, tolerance)
   )
 }
 
 /** Whether a line comes near the circle of an arc. */
 function lineNearCircle(edges: EdgeTable, line: number, arc: number, tolerance: number): boolean {
-  const [ax, ay, bx, by] = [edges.ends[4 * line], edges.ends[4 * line + 1], edges.ends[4 * line + 2], edges.ends[4 * line + 3]]
+  const e = edges.ends
+  const ax = e[4 * line]
+  const ay = e[4 * line + 1]
+  const bx = e[4 * line + 2]
+  const by = e[4 * line + 3]
   const k = edges.shape[arc]
   const cx = edges.shapes[k]
   const cy = edges.shapes[k + 1]
   const r = edges.shapes[k + 2]
   const inside = r - tolerance
-  if (Math.hypot(ax - cx, ay - cy) < inside && Math.hypot(bx - cx, by - cy) < inside) return false
-  return distanceToLine(ax, ay, bx, by, cx, cy) <= r + tolerance
+  const within = (x: number, y: number) => inside > 0 && (x - cx) * (x - cx) + (y - cy) * (y - cy) < inside * inside
+  if (within(ax, ay) && within(bx, by)) return false
+  return nearLine(ax, ay, bx, by, cx, cy, r + tolerance)
 }
 
 function circlesMeet(edges: EdgeTable, i: number, j: number, tolerance: number): boolean {

@@ -8,6 +8,7 @@ import { geometryFinding } from './findings'
 import { insideLoop } from './inside'
 import { interiorPoint } from './interiorPoint'
 import type { Tolerances } from './outlineSet'
+import { pruneNet } from './pruneNet'
 import type { Bond } from './recipe'
 
 export interface NetOutlines {
@@ -57,7 +58,10 @@ export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUn
     findings.push(geometryFinding('face-answered', { ...params, is: metal ? 'metal' : 'void' }, face.inside, size))
   }
   for (const net of closed.nets) {
-    const { faces, dangling, tooMany } = facesIn(net, tolerances)
+    const { net: closing, pruned } = pruneNet(net, tolerances.snap)
+    const found = closing.count > 0 ? facesIn(closing, tolerances) : NO_FACES
+    const { faces, tooMany } = found
+    const dangling = pruned + found.dangling
     if (tooMany || dangling > 0 || faces.length === 0) {
       const at: [number, number] = [net.ends[0], net.ends[1]]
       const code = tooMany ? 'crossings-too-many' : 'branches'
@@ -70,6 +74,8 @@ export function netOutlines(closed: ClosedLoops, tolerances: Tolerances, mmPerUn
   for (const face of faces) if (!isDrawn(closed, drawn, face, tolerances.chaining)) ask(face)
   return { undecided: Uint8Array.from(undecided), findings }
 }
+
+const NO_FACES = { faces: [], dangling: 0, tooMany: false }
 
 function facesIn(net: EdgeTable, tolerances: Tolerances): { faces: Face[]; dangling: number; tooMany: boolean } {
   const { edges, loopStart, area, dangling, tooMany } = facesOf(net, null, tolerances)

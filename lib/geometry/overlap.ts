@@ -59,6 +59,24 @@ function alongArc(edges: EdgeTable, i: number, j: number, tolerance: number): [n
   return [r * (turned - half), r * (turned + half)]
 }
 
+/** False where two edges surely do not run along one another: another kind, or lines off each other's carrier. */
+export function mayOverlap(edges: EdgeTable, i: number, j: number, tolerance: number): boolean {
+  if (edges.kind[i] !== edges.kind[j]) return false
+  if (edges.kind[i] !== LINE) return true
+  const e = edges.ends
+  const ix = e[4 * i + 2] - e[4 * i]
+  const iy = e[4 * i + 3] - e[4 * i + 1]
+  const jx = e[4 * j + 2] - e[4 * j]
+  const jy = e[4 * j + 3] - e[4 * j + 1]
+  const i2 = ix * ix + iy * iy
+  const j2 = jx * jx + jy * jy
+  const cross = ix * jy - iy * jx
+  if (cross * cross > 4 * tolerance * tolerance * Math.max(i2, j2)) return false
+  const off = (e[4 * j] - e[4 * i]) * iy - (e[4 * j + 1] - e[4 * i + 1]) * ix
+  const offBack = (e[4 * i] - e[4 * j]) * jy - (e[4 * i + 1] - e[4 * j + 1]) * jx
+  return off * off <= tolerance * tolerance * i2 || offBack * offBack <= tolerance * tolerance * j2
+}
+
 /** Length over which two edges of one kind run along one another; 0 for less than the tolerance, unless one lies wholly on the other. */
 export function overlapOf(edges: EdgeTable, i: number, j: number, tolerance: number): number {
   if (edges.kind[i] !== edges.kind[j]) return 0

@@ -83,10 +83,11 @@ export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, u
     const point = interiorPoint(edges, loopStart[k], loopStart[k + 1])
     if (point) probes.set(point, 2 * k)
   }
-  const depth = nest(loops, inside, probes)
-  for (const { a, b, crosses } of crossings.contacts) if (crosses) for (const k of [a, b]) depth[k] = -1
-  for (const { loop } of crossings.selfCrossing) depth[loop] = -1
-  for (let k = 0; k < loops.count; k++) if (undecided[k] || crossings.tooMany) depth[k] = -1
+  const crossing = new Uint8Array(loops.count)
+  for (const { a, b, crosses } of crossings.contacts) if (crosses) for (const k of [a, b]) crossing[k] = 1
+  for (const { loop } of crossings.selfCrossing) crossing[loop] = 1
+  const depth = nest(loops, inside, probes, crossing)
+  for (let k = 0; k < loops.count; k++) if (crossing[k] || undecided[k] || crossings.tooMany) depth[k] = -1
   const at = namesOf(loops, crossings.touched)
   return { ...loops, at, source, depth, undecided, clusters, findings: contactFindings(crossings) }
 }

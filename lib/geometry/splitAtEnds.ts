@@ -1,9 +1,13 @@
 import Flatbush from 'flatbush'
 import { boundsOfEdges } from './bounds'
-import { edgeAt, type EdgeTable, emptyTable, pushCopy, pushEdge } from './edges'
+import { edgeAt, type EdgeTable, emptyTable, LINE, pushCopy, pushEdge } from './edges'
+import { nearLine } from './mayMeet'
 import { nearestOn } from './nearest'
 import { snapEnds } from './snapEnds'
 import { splitEdge } from './splitEdge'
+
+/** Pairs of end and box looked at most: hatching of a whole sheet goes past it, outlines never. */
+const MOST_LOOKS = 200_000_000
 
 /**
  * Cuts edges where another edge's free end lies on them within the tolerance (a T drawn without a vertex), so that
@@ -17,6 +21,7 @@ export function splitAtEnds(edges: EdgeTable, snap: number, tolerance: number): 
   const index = new Flatbush(edges.count)
   for (let i = 0; i < edges.count; i++) index.add(boxes[4 * i], boxes[4 * i + 1], boxes[4 * i + 2], boxes[4 * i + 3])
   index.finish()
+  let looked = 0
   const cuts = new Map<number, number[]>()
   for (let end = 0; end < ends.count; end++) {
     const v = ends.vertex[end]
@@ -24,8 +29,9 @@ export function splitAtEnds(edges: EdgeTable, snap: number, tolerance: number): 
     const x = ends.x[v]
     const y = ends.y[v]
     index.search(x - tolerance, y - tolerance, x + tolerance, y + tolerance, (i) => {
-      if (i === end >> 1) return false
+      if (i === end >> 1 || ++looked > MOST_LOOKS) return false
       const e = edges.ends
+      if (edges.kind[i] === LINE && !nearLine(e[4 * i], e[4 * i + 1], e[4 * i + 2], e[4 * i + 3], x, y, tolerance)) return false
       const beside = [0, 2].some((c) => Math.hypot(e[4 * i + c] - x, e[4 * i + c + 1] - y) <= 2 * tolerance)
       const near = nearestOn(edges, i, x, y)
       if (!beside && near.distance <= tolerance) cuts.set(i, [...(cuts.get(i) ?? []), near.t])
