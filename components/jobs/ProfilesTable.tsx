@@ -26,6 +26,9 @@ const FIGURES: { key: keyof Figures; name: string; sub?: 'x' | 'y'; quantity: Qu
 
 /** All columns of a list of profiles, as table and export show them. */
 export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): Column<Profile>[] {
+  const mayUpload = useMay('revision.add')
+  // a profile without a revision waits for its drawing
+  const hrefOf = ({ id, latest }: Profile) => (latest || !mayUpload ? `/profiles/${id}` : `/profiles/${id}/upload`)
   const names = axisNames(useMe().team.settings.axes)
   const columns: Column<Profile>[] = [
     {
@@ -98,9 +101,6 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
   ]
   return ofJob ? columns.filter(({ key }) => key !== 'job') : columns
 }
-
-/** A profile without a revision waits for its drawing. */
-const hrefOf = ({ id, latest }: Profile) => (latest ? `/profiles/${id}` : `/profiles/${id}/upload`)
 
 export function ProfilesTable({
   profiles,

@@ -46,7 +46,10 @@ export function Waiting() {
 function Undrawn({ profile, zone, may }: { profile: Profile; zone: string; may: boolean }) {
   return (
     <li className="flex flex-wrap items-center gap-x-4 border-b border-line py-1">
-      <Link href={`/profiles/${profile.id}/upload`} className="font-mono text-accent hover:underline">
+      <Link
+        href={may ? `/profiles/${profile.id}/upload` : `/profiles/${profile.id}`}
+        className="font-mono text-accent hover:underline"
+      >
         {profile.number}
       </Link>
       <span>{profile.title}</span>

@@ -7,7 +7,17 @@ import { toast } from '@/components/ui/toastStore'
 import { type CsvDialect, PLAIN, SPREADSHEET, toCsv } from './csv'
 
 /** Exports all rows of a list as they are filtered and sorted, not only the page in view. */
-export function ExportMenu<Row>({ name, columns, all }: { name: string; columns: Column<Row>[]; all: () => Promise<Row[]> }) {
+export function ExportMenu<Row>({
+  name,
+  columns,
+  align = 'left',
+  all,
+}: {
+  name: string
+  columns: Column<Row>[]
+  align?: 'left' | 'right'
+  all: () => Promise<readonly Row[]>
+}) {
   const save = async (dialect: CsvDialect) => {
     try {
       const rows = await all()
@@ -22,8 +32,8 @@ export function ExportMenu<Row>({ name, columns, all }: { name: string; columns:
   return (
     <Menu
       label="Export"
-      name="Export this list"
-      align="left"
+      name={`Export ${name}`}
+      align={align}
       items={[
         { label: 'CSV', onChoose: () => save(PLAIN) },
         { label: 'CSV for spreadsheets (; and byte order mark)', onChoose: () => save(SPREADSHEET) },

@@ -1,5 +1,7 @@
 'use client'
 import { useState } from 'react'
+import { ExportMenu } from '@/components/lists/ExportMenu'
+import { useLocalSort } from '@/components/lists/useLocalSort'
 import { useMay } from '@/components/shell/Me'
 import { Button } from '@/components/ui/Button'
 import { Dialog } from '@/components/ui/Dialog'
@@ -16,10 +18,13 @@ export function MaterialsTable() {
   const may = useMay('material.edit')
   const [opened, setOpened] = useState<Material | 'new' | null>(null)
   const columns: Column<Material>[] = [
-    { key: 'name', head: 'Material', cell: ({ name }) => name },
+    { key: 'name', head: 'Material', sort: 'name', plain: ({ name }) => name, cell: ({ name }) => name },
     {
       key: 'density',
       head: 'Density',
+      sort: 'density',
+      plainHead: 'Density [kg/m³]',
+      plain: ({ density }) => density,
       figure: true,
       cell: ({ density }) => (
         <>
@@ -27,7 +32,14 @@ export function MaterialsTable() {
         </>
       ),
     },
-    { key: 'source', head: 'Source', wide: true, cell: ({ source }) => <span className="text-soft">{source}</span> },
+    {
+      key: 'source',
+      head: 'Source',
+      sort: 'source',
+      plain: ({ source }) => source,
+      wide: true,
+      cell: ({ source }) => <span className="text-soft">{source}</span>,
+    },
   ]
   if (may) {
     columns.push({
@@ -42,15 +54,19 @@ export function MaterialsTable() {
       ),
     })
   }
+  const sorted = useLocalSort('materials', materials, columns)
   return (
     <section aria-labelledby="materials" className="border-t border-hair py-4">
       <div className="flex items-center justify-between gap-4">
         <h2 id="materials" className="font-semibold text-lg">
           Materials
         </h2>
-        {may && <Button onClick={() => setOpened('new')}>Add a material</Button>}
+        <div className="flex gap-2">
+          <ExportMenu name="materials" columns={columns} align="right" all={async () => materials} />
+          {may && <Button onClick={() => setOpened('new')}>Add a material</Button>}
+        </div>
       </div>
-      <Table caption="Materials" columns={columns} rows={materials} rowKey={({ id }) => id} />
+      <Table caption="Materials" columns={columns} {...sorted} rowKey={({ id }) => id} />
       <p className="mt-2 text-small text-soft">
         A saved revision keeps the density it was computed with; a change here alters no stored section.
       </p>

@@ -1,5 +1,7 @@
 'use client'
 import { useState } from 'react'
+import { ExportMenu } from '@/components/lists/ExportMenu'
+import { useLocalSort } from '@/components/lists/useLocalSort'
 import { useMay, useMe } from '@/components/shell/Me'
 import { Button } from '@/components/ui/Button'
 import { Dialog } from '@/components/ui/Dialog'
@@ -11,6 +13,9 @@ import type { Invitation, Person } from '@/lib/api/schemas/people'
 import { useInvitations, usePeople, withdraw } from './data'
 import { InviteForm } from './InviteForm'
 import { PersonForm } from './PersonForm'
+
+const rolesOf = ({ roles, administrator, disabled }: Person) =>
+  disabled ? 'disabled' : [...roles, ...(administrator ? ['administrator'] : [])].join(', ')
 
 /** Who is in the team, with roles; an administrator invites, changes and disables. */
 export function PeopleTable() {
@@ -25,12 +30,16 @@ export function PeopleTable() {
     {
       key: 'name',
       head: 'Name',
+      sort: 'name',
+      plain: ({ name }) => name,
       cell: ({ id, name }) => (id === me.id ? `${name} (you)` : name),
     },
-    { key: 'email', head: 'E-mail', wide: true, cell: ({ email }) => email },
+    { key: 'email', head: 'E-mail', sort: 'email', plain: ({ email }) => email, wide: true, cell: ({ email }) => email },
     {
       key: 'roles',
       head: 'Roles',
+      sort: 'roles',
+      plain: rolesOf,
       cell: ({ roles, administrator, disabled }) =>
         disabled ? (
           <span className="text-brick">disabled</span>
@@ -52,6 +61,7 @@ export function PeopleTable() {
       ),
     })
   }
+  const sorted = useLocalSort('people', people, columns)
   const withdrawn = async ({ id, email }: Invitation) => {
     try {
       await withdraw(id)
@@ -66,13 +76,16 @@ export function PeopleTable() {
         <h2 id="people" className="font-semibold text-lg">
           People
         </h2>
-        {mayManage && (
-          <Button look="main" onClick={() => setInviting(true)}>
-            Invite
-          </Button>
-        )}
+        <div className="flex gap-2">
+          <ExportMenu name="people" columns={columns} align="right" all={async () => people} />
+          {mayManage && (
+            <Button look="main" onClick={() => setInviting(true)}>
+              Invite
+            </Button>
+          )}
+        </div>
       </div>
-      <Table caption="People" columns={columns} rows={people} rowKey={({ id }) => id} />
+      <Table caption="People" columns={columns} {...sorted} rowKey={({ id }) => id} />
       {invitations.length > 0 && (
         <>
           <h3 className="mt-4 text-small font-semibold text-soft">Open invitations</h3>

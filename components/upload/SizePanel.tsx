@@ -136,7 +136,7 @@ function Confirm({
           ))}
         </Select>
         <Field
-          label="is in truth"
+          label="Known to be"
           unit="mm"
           inputMode="decimal"
           value={typed}

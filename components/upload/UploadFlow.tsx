@@ -22,6 +22,7 @@ import { Saved } from './Saved'
 import { SavePanel } from './SavePanel'
 import type { Target } from './target'
 import { useFlowKeys } from './useFlowKeys'
+import { useLeaving } from './useLeaving'
 import { useUpload } from './useUpload'
 
 /** From a file to a saved revision: the picture stays in view, every question stands beside it. */
@@ -60,6 +61,8 @@ export function UploadFlow({
     redo: useCallback(() => dispatch({ type: 'redo' }), [dispatch]),
     save: ready && !saving ? save : null,
   })
+
+  useLeaving(state.history.past.length > 0 && !saved)
 
   const show = (at: XY, size: number) => {
     if (!result) return
