@@ -1,5 +1,6 @@
 import type { Point } from '../geometry/edges'
 import { type Bundles, boxOf } from './bundles'
+import { circleLeverage } from './circleLeverage'
 import { type Circle, circleThrough, enclosingCircle, type HeldCircle } from './enclosingCircle'
 import { type BoundaryPoint, farthest, peakNear } from './farthest'
 
@@ -46,9 +47,9 @@ function polished(bundles: Bundles, start: HeldCircle<BoundaryPoint>): HeldCircl
 /**
  * Circumscribing circle: the smallest circle round the region. The smallest circle round a few boundary points grows by the
  * boundary's farthest point from its centre until nothing lies outside; then its points of contact are made exact. The radius
- * given reaches the farthest point.
+ * given reaches the farthest point. With it, how far its centre answers to its points of contact.
  */
-export function circumscribingCircle(bundles: Bundles): Circle {
+export function circumscribingCircle(bundles: Bundles): { circle: Circle; leverage: number } {
   const { minX, minY, maxX, maxY } = boxOf(bundles)
   const points: BoundaryPoint[] = [farthest(bundles, { x: 0.5 * (minX + maxX), y: 0.5 * (minY + maxY) })]
   points.push(farthest(bundles, points[0]))
@@ -63,6 +64,7 @@ export function circumscribingCircle(bundles: Bundles): Circle {
   }
   const best = polished(bundles, held)
   const reachOf = (centre: Point) => Math.sqrt(farthest(bundles, centre).square)
-  const { x, y } = reachOf(best) <= reachOf(held) * (1 + 1e-14) ? best : held
-  return { x, y, radius: reachOf({ x, y }) }
+  const found = reachOf(best) <= reachOf(held) * (1 + 1e-14) ? best : held
+  const { x, y } = found
+  return { circle: { x, y, radius: reachOf(found) }, leverage: circleLeverage(found) }
 }

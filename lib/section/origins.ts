@@ -1,6 +1,6 @@
 import type { Boundary } from './boundary'
 import type { Change } from './change'
-import type { Figure, PlasticWidths } from './figures/figure'
+import type { Figure, Response } from './figures/figure'
 import { FIGURES } from './figures/index'
 import type { Origin, OriginKind, PlusMinus, Section } from './types'
 
@@ -18,7 +18,7 @@ function kindOf({ origin, iteratedOn = [] }: Figure, { hasEllipse, hasBezier, ha
 }
 
 /** Origin of every figure that has a value: the weakest of its edges', and its three ± in its own unit. */
-export function originsOf(section: Section, boundary: Boundary, causes: Causes, widths: PlasticWidths): Record<string, Origin> {
+export function originsOf(section: Section, boundary: Boundary, causes: Causes, response: Response): Record<string, Origin> {
   const origins: Record<string, Origin> = {}
   for (const figure of FIGURES) {
     const value = figure.value(section)
@@ -29,9 +29,9 @@ export function originsOf(section: Section, boundary: Boundary, causes: Causes, 
       continue
     }
     const plusMinus: PlusMinus = {}
-    if (causes.digits) plusMinus.digits = spread(section, causes.digits, widths)
-    if (causes.repairs) plusMinus.repairs = spread(section, causes.repairs, widths)
-    plusMinus.numerics = spread(section, causes.numerics, widths)
+    if (causes.digits) plusMinus.digits = spread(section, causes.digits, response)
+    if (causes.repairs) plusMinus.repairs = spread(section, causes.repairs, response)
+    plusMinus.numerics = spread(section, causes.numerics, response)
     origins[figure.key] = { kind: kindOf(figure, boundary), plusMinus }
   }
   return origins

@@ -3,7 +3,7 @@ import type { Region } from '../geometry/region'
 import { bendingFrame } from './bendingFrame'
 import type { Bundles } from './bundles'
 import { type Extremes, extremesOf } from './extremes'
-import type { PlasticWidths } from './figures/figure'
+import type { Response } from './figures/figure'
 import { BENDING_AXES } from './figures/spread'
 import { SECTION_FINDINGS } from './findings'
 import { frameAt } from './frame'
@@ -15,7 +15,7 @@ import type { Section } from './types'
 
 export interface PlasticFigures {
   plastic: Section['plastic']
-  widths: PlasticWidths
+  widths: Response['widths']
   /** moment about the other axis that comes with x and y, mm³ */
   across: { x: number; y: number }
   shape: (elastic: Section['elastic']) => Section['plasticShape']
@@ -28,7 +28,7 @@ const over = (a: number | null, b: number | null): number | null => (a === null 
 /** Plastic figures about x, y and, unless every axis is principal, about axes 1 and 2. */
 export function plasticFigures(region: Region, bundles: Bundles, theta: number | null, causes: Causes): PlasticFigures {
   const plastic: Section['plastic'] = { x: 0, y: 0, axis1: null, axis2: null, at: { x: 0, y: 0, axis1: null, axis2: null } }
-  const widths: PlasticWidths = { x: 0, y: 0, axis1: 0, axis2: 0 }
+  const widths: Response['widths'] = { x: 0, y: 0, axis1: 0, axis2: 0 }
   const across = { x: 0, y: 0 }
   const findings: Finding[] = []
   const areas = region.pieces > 1 ? piecesMoments(region, frameAt(bundles.x, bundles.y)).map((piece) => piece.area) : []

@@ -68,6 +68,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   const freeX = freeBending(vectorAt, 0, degrees(Math.atan2(ixy, iy)))
   const freeY = freeBending(vectorAt, -90, degrees(Math.atan2(ix, ixy)) - 90)
   const mass = massOf(area, inputs)
+  const { circle, leverage } = circumscribingCircle(bundles)
   const section: Section = {
     area,
     ...(mass === undefined ? {} : { mass }),
@@ -97,11 +98,11 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
       restrainedMyForX: across.x,
       restrainedMxForY: 0 - across.y,
     },
-    circle: circumscribingCircle(bundles),
+    circle,
     ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
     origin: {},
   }
-  section.origin = originsOf(section, boundary, causes, widths)
+  section.origin = originsOf(section, boundary, causes, { widths, circle: leverage })
   return { section, findings: [...sayings(section), ...findings] }
 }
 

@@ -11,7 +11,8 @@ function circleFigure(key: keyof Section['circle'], symbol: FigureSymbol, word: 
     origin: 'iterated',
     shows: 'circle',
     value: (section) => section.circle[key],
-    spread: (section, change) => change.point + change.relative * section.circle.radius,
+    spread: (section, change, response) =>
+      (key === 'radius' ? 1 : response.circle) * (change.point + change.relative * section.circle.radius),
   }
 }
 

@@ -54,12 +54,12 @@ export type Shows =
 /** The kinds of edges that make an otherwise exact figure an iterated one. */
 export type IteratedOn = 'ellipse' | 'bezier'
 
-/** Widths of metal along the plastic neutral axes, mm; 0 in a gap. */
-export interface PlasticWidths {
-  x: number
-  y: number
-  axis1: number
-  axis2: number
+/** What the spread of some figures needs beside the section: how hard they answer to a change. */
+export interface Response {
+  /** width of metal along each plastic neutral axis, mm; 0 in a gap */
+  widths: { x: number; y: number; axis1: number; axis2: number }
+  /** how far the circle's centre moves when its points of contact move by 1 */
+  circle: number
 }
 
 /** One row of the table of figures. Sheet, CSV, JSON and schema walk this table. */
@@ -76,5 +76,5 @@ export interface Figure {
   shows: Shows
   value: (section: Section) => number | null | undefined
   /** first-order bound of what a change does to the figure, in its own unit; absent for counts */
-  spread?: (section: Section, change: Change, widths: PlasticWidths) => number
+  spread?: (section: Section, change: Change, response: Response) => number
 }

@@ -45,7 +45,7 @@ export function plasticOffset(axis: BendingAxis): Figure {
     origin: 'iterated',
     shows: SHOWS[axis],
     value: (section) => section.plastic.at[axis],
-    spread: (section, change, widths) => {
+    spread: (section, change, { widths }) => {
       const halving = widths[axis] > 0 ? change.area / (2 * widths[axis]) : change.point
       const turned = axis === 'x' || axis === 'y' ? 0 : (thetaSpread(section, change) * Math.PI) / 180
       return halving + centroidSpread(section, change, axis) + (turned + change.relative) * section.circle.radius

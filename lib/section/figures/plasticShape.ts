@@ -18,8 +18,8 @@ export function plasticShape(axis: BendingAxis): Figure {
     origin: 'iterated',
     shows: plastic.shows,
     value: (section) => section.plasticShape[axis],
-    spread: (section, change, widths) => {
-      const relative = ({ value, spread }: Figure) => (spread?.(section, change, widths) ?? 0) / (value(section) || 1)
+    spread: (section, change, response) => {
+      const relative = ({ value, spread }: Figure) => (spread?.(section, change, response) ?? 0) / (value(section) || 1)
       return (section.plasticShape[axis] ?? 0) * (relative(plastic) + Math.max(...elastic.map(relative)))
     },
   }
