@@ -51,3 +51,19 @@ export function pieceSpans(region: Region, bundles: Bundles, frame: Frame, areas
   }
   return spans
 }
+
+/** Whether a loop has vertices more than `margin` above and below v = c: no gap between pieces can lie there. */
+export function isCrossed({ edges, loopStart }: Region, { x, y, cos, sin }: Frame, c: number, margin: number): boolean {
+  const { ends } = edges
+  for (let loop = 0; loop + 1 < loopStart.length; loop++) {
+    let isAbove = false
+    let isBelow = false
+    for (let i = loopStart[loop]; i < loopStart[loop + 1]; i++) {
+      const v = (ends[4 * i + 1] - y) * cos - (ends[4 * i] - x) * sin
+      isAbove ||= v > c + margin
+      isBelow ||= v < c - margin
+      if (isAbove && isBelow) return true
+    }
+  }
+  return false
+}
