@@ -42,39 +42,43 @@ export function footOn(pieces: Pieces, i: number, x: number, y: number, out: Flo
   return t
 }
 
+const SAMPLES = 6
+
+/** Newton on (P − q)·P′ = 0 from the nearest of a few samples, kept between that sample's neighbours. */
 function newtonFoot(pieces: Pieces, i: number, x: number, y: number): number {
   const { table } = pieces
   const e = pieces.edge[i]
   const t0 = pieces.t0[i]
-  const t1 = pieces.t1[i]
-  let best = t0
+  const step = (pieces.t1[i] - t0) / SAMPLES
   let nearest = Number.POSITIVE_INFINITY
-  for (const t of [t0, t1, levelOn(pieces, i, 0, x), levelOn(pieces, i, 1, y)]) {
-    pointAt(table, e, t, jet)
-    const d = Math.hypot(jet[0] - x, jet[1] - y)
-    if (d < nearest) {
-      nearest = d
-      best = t
-    }
+  let best = 0
+  for (let n = 0; n <= SAMPLES; n++) {
+    pointAt(table, e, n === SAMPLES ? pieces.t1[i] : t0 + n * step, jet)
+    const d = (jet[0] - x) ** 2 + (jet[1] - y) ** 2
+    if (d >= nearest) continue
+    nearest = d
+    best = n
   }
-  let t = best
-  for (let n = 0; n < 20; n++) {
+  let low = t0 + Math.max(0, best - 1) * step
+  let high = best >= SAMPLES - 1 ? pieces.t1[i] : t0 + (best + 1) * step
+  const forward = step > 0 ? 1 : -1
+  let t = t0 + best * step
+  for (let n = 0; n < 60; n++) {
     jetAt(table, e, t, jet)
     const dx = jet[0] - x
     const dy = jet[1] - y
-    const d = Math.hypot(dx, dy)
-    if (d <= nearest) {
-      nearest = d
-      best = t
-    } else if (n > 2) break
-    const speed = jet[2] * jet[2] + jet[3] * jet[3]
-    const curved = speed + dx * jet[4] + dy * jet[5]
-    const step = (dx * jet[2] + dy * jet[3]) / (curved > 0.1 * speed ? curved : speed)
-    const next = clamp(t - step, t0, t1)
-    if (!(Math.abs(next - t) > 1e-16 * Math.abs(t1 - t0))) break
+    const slope = dx * jet[2] + dy * jet[3]
+    if (slope === 0) return t
+    if (slope * forward > 0) high = t
+    else low = t
+    const bend = jet[2] * jet[2] + jet[3] * jet[3] + dx * jet[4] + dy * jet[5]
+    let next = t - slope / bend
+    const kept = bend > 0 && (forward > 0 ? next >= low && next <= high : next <= low && next >= high)
+    if (!kept || (n > 8 && n % 3 === 0)) next = (low + high) / 2
+    if (Math.abs(next - t) <= 1e-16 * Math.max(Math.abs(t), Math.abs(step))) return next
     t = next
   }
-  return best
+  return t
 }
 
 /**

@@ -37,8 +37,10 @@ export function meetBySubdivision(pieces: Pieces, i: number, j: number, toleranc
   const found = (s: number, t: number) => {
     if (!inside(s, t0[i], t1[i]) || !inside(t, t0[j], t1[j])) return
     if (known.some((other) => Math.abs(other - s) <= 1e-12 * Math.abs(t1[i] - t0[i]))) return
-    known.push(s)
     pointAt(table, edge[i], s, p)
+    pointAt(table, edge[j], t, q)
+    if (!(Math.hypot(p[0] - q[0], p[1] - q[1]) <= tolerance)) return
+    known.push(s)
     meet(i, s, j, t, p[0], p[1])
   }
   const whole = (n: number) => stretch(pieces, n, t0[n], t1[n], ends[4 * n], ends[4 * n + 1], ends[4 * n + 2], ends[4 * n + 3])
@@ -57,7 +59,8 @@ export function meetBySubdivision(pieces: Pieces, i: number, j: number, toleranc
     }
     const transversal = Math.abs(between(a, b, la, lb)) > Math.max(1e-3, 1.5 * (a.turn + b.turn))
     const crossing = transversal ? newton(pieces, i, j, a, b, tolerance / 16) : 'unsure'
-    if (crossing === 'unsure') sideBySide(pieces, i, j, a, tolerance, found)
+    if (crossing === 'unsure' && la > 3 * lb + tolerance) for (const half of halves(pieces, i, a)) stack.push(half, b)
+    else if (crossing === 'unsure') sideBySide(pieces, i, j, a, tolerance, found)
     else if (crossing !== 'outside') found(...crossing)
   }
 }
