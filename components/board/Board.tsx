@@ -25,8 +25,8 @@ import { ZoneMarks } from './ZoneMarks'
 import { sheetAround } from './zones'
 
 /** Room around what is fitted: for axes, their names, dimensions and the zones' marks, px. */
-const INSET = { top: 84, right: 84, bottom: 76, left: 92 }
-const NARROW_INSET = { top: 56, right: 50, bottom: 58, left: 60 }
+const INSET = { top: 92, right: 84, bottom: 76, left: 96 }
+const NARROW_INSET = { top: 64, right: 50, bottom: 58, left: 74 }
 /** How near an outline the pointer must be to pick it, px. */
 const REACH = 8
 

@@ -36,7 +36,7 @@ export interface Frame {
 /** Dash period of chain lines, px; rays start at whole periods, so that dashes stay where they are while the board moves. */
 const PERIOD = 24
 /** Kept free along the edges for the zones' names and the labels, px. */
-const EDGE = { top: 34, left: 34, right: 26, bottom: 20 }
+const EDGE = { top: 46, left: 46, right: 26, bottom: 20 }
 
 const cornersOf = (box: Box): Point[] => [
   { x: box.minX, y: box.minY },

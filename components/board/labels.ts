@@ -48,8 +48,10 @@ export function crossesBox({ a, b }: Segment, box: Box): boolean {
 }
 
 const overlap = (a: Box, b: Box) => a.minX < b.maxX && b.minX < a.maxX && a.minY < b.maxY && b.minY < a.maxY
+/** Along the top and the left stand the names of the zones, px. */
+const ZONES = 20
 const inside = (box: Box, viewport: Viewport) =>
-  box.minX >= 0 && box.minY >= 0 && box.maxX <= viewport.width && box.maxY <= viewport.height
+  box.minX >= ZONES && box.minY >= ZONES && box.maxX <= viewport.width && box.maxY <= viewport.height
 
 /**
  * The place each label takes: the first of its places inside the board that no line crosses and no
