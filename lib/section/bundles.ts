@@ -3,7 +3,7 @@ import { type EdgeTable, LINE } from '../geometry/edges'
 import type { Region } from '../geometry/region'
 import { add, newSum, sumOf } from '../geometry/sum'
 import { frameAt } from './frame'
-import { AREA, lineMoments, U, UU, UV, V, VV } from './momentArray'
+import { AREA, addShifted, lineMoments, U, UU, UV, V, VV } from './momentArray'
 import { type Moments, runMoments } from './moments'
 
 /**
@@ -126,18 +126,38 @@ function fillSegments(bundles: Bundles): void {
   bundles.moments = { area, u, v, uu, vv, uv }
 }
 
+const shifted = new Float64Array(6)
+
+/** The six moments from `at` on, as seen from an origin moved by (dx, dy): parallel axes. */
+function shift(moments: Float64Array, at: number, dx: number, dy: number): Float64Array {
+  const m = (j: number) => moments[at + j]
+  shifted.fill(0)
+  addShifted(shifted, -dx, -dy, m(AREA), m(U), m(V), m(UU), m(VV), m(UV))
+  return shifted
+}
+
+/** The same bundles about (x, y). */
+function movedTo(bundles: Bundles, x: number, y: number): Bundles {
+  const { count, segments } = bundles
+  const dx = x - bundles.x
+  const dy = y - bundles.y
+  for (let k = 0; k < count; k++) segments.set(shift(segments, 6 * k, dx, dy), 6 * k)
+  const { area, u, v, uu, vv, uv } = bundles.moments
+  const whole = shift(Float64Array.of(area, u, v, uu, vv, uv), 0, dx, dy)
+  const moments = { area, u: whole[U], v: whole[V], uu: whole[UU], vv: whole[VV], uv: whole[UV] }
+  return { ...bundles, x, y, moments }
+}
+
 /**
- * Bundles of a region about its own centroid, found from a first sum about the middle of its box, so that no far origin costs
- * digits. With no metal (area ≤ 0) the origin stays in the middle of the box.
+ * Bundles of a region about its own centroid: summed about the middle of its box, so that no far origin costs digits, and moved
+ * from there. With no metal (area ≤ 0) the origin stays in the middle of the box.
  */
 export function bundlesOf(region: Region): Bundles {
   const { start, loopRun } = runsOf(region)
   const count = start.length - 1
   const boxes = boxesOf(region.edges, start)
   const { minX, minY, maxX, maxY } = boxOf({ boxes, count })
-  const moments: Moments = { area: 0, u: 0, v: 0, uu: 0, vv: 0, uv: 0 }
-  const segments = new Float64Array(6 * count)
-  const middle: Bundles = {
+  const bundles: Bundles = {
     edges: region.edges,
     count,
     start,
@@ -146,13 +166,10 @@ export function bundlesOf(region: Region): Bundles {
     boxes,
     x: minX + 0.5 * (maxX - minX),
     y: minY + 0.5 * (maxY - minY),
-    segments,
-    moments,
+    segments: new Float64Array(6 * count),
+    moments: { area: 0, u: 0, v: 0, uu: 0, vv: 0, uv: 0 },
   }
-  fillSegments(middle)
-  const { area, u, v } = middle.moments
-  if (!(area > 0)) return middle
-  const bundles = { ...middle, x: middle.x + u / area, y: middle.y + v / area }
   fillSegments(bundles)
-  return bundles
+  const { area, u, v } = bundles.moments
+  return area > 0 ? movedTo(bundles, bundles.x + u / area, bundles.y + v / area) : bundles
 }

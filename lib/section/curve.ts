@@ -135,8 +135,8 @@ export function addSegment(curve: Curve, t0: number, t1: number, k: number, l: n
   }
   const { area, p, pp, qq } = unitSegment(t1 - t0, unit)
   const middle = 0.5 * (t0 + t1)
-  const c = Math.cos(middle)
-  const s = Math.sin(middle)
+  const c = middle === 0 ? 1 : Math.cos(middle)
+  const s = middle === 0 ? 0 : Math.sin(middle)
   const eu = curve.eu * c + curve.fu * s
   const ev = curve.ev * c + curve.fv * s
   const fu = curve.fu * c - curve.eu * s
