@@ -8,7 +8,7 @@ const number = (value: FindingParams[string]) =>
     : String(value)
 const plural = (n: FindingParams[string], one: string, many = `${one}s`) => `${number(n)} ${n === 1 ? one : many}`
 const where = (p: FindingParams) =>
-  [`${p.kind}`, p.handle && `handle ${p.handle}`, p.line && `line ${p.line} of the file`, p.block && `in block ${p.block}`]
+  [`${p.kind}`, p.handle && `handle ${p.handle}`, p.place && `${p.place} of the file`, p.block && `in block ${p.block}`]
     .filter(Boolean)
     .join(', ')
 const error = (say: FindingRow['say']): FindingRow => ({ severity: 'error', say })
@@ -26,14 +26,14 @@ export const DXF_FINDINGS = {
     (p) =>
       `The file has ${number(p.bytes)} bytes; this server takes ${number(p.limit)} (setting ${p.setting}). Purge the drawing, or delete what is not the profile.`,
   ),
-  'file-cut': error((p) => `The file ends too early, at line ${p.line} (${p.in}): it was cut off on its way. ${AGAIN}`),
+  'file-cut': error((p) => `The file ends too early, at ${p.place} (${p.in}): it was cut off on its way. ${AGAIN}`),
   'file-broken': error(
-    (p) => `Line ${p.line} should hold a group code and holds "${p.text}": from there on the file cannot be read. ${AGAIN}`,
+    (p) => `A group code should stand at ${p.place}, and "${p.text}" does: from there on the file cannot be read. ${AGAIN}`,
   ),
   'file-without-eof': warning(
-    (p) => `The file ends without EOF, at line ${p.line}; the entities before it are complete and were read.`,
+    (p) => `The file ends without EOF, at ${p.place}; the entities before it are complete and were read.`,
   ),
-  'file-goes-on': note((p) => `What follows EOF at line ${p.line} was not read.`),
+  'file-goes-on': note((p) => `What follows EOF at ${p.place} was not read.`),
   'file-without-sections': note(() => 'The file has no sections, only entities; read as model space.'),
   'sections-repeated': note((p) => `The ${p.section} section stands in the file ${number(p.count)} times; all were read.`),
   'too-many-entities': error(
@@ -65,12 +65,12 @@ export const DXF_FINDINGS = {
 
   'number-bad': error((p) =>
     p.text === ''
-      ? `${where(p)}: the number of group ${p.code} (line ${p.at}) is empty. ${MEND}`
-      : `${where(p)}: "${p.text}" (group ${p.code}, line ${p.at}) is not a number. Write numbers with a decimal point and without a unit.`,
+      ? `${where(p)}: the number of group ${p.code} (${p.at}) is empty. ${MEND}`
+      : `${where(p)}: "${p.text}" (group ${p.code}, ${p.at}) is not a number. Write numbers with a decimal point and without a unit.`,
   ),
   'number-large': error(
     (p) =>
-      `${where(p)}: ${p.text} (group ${p.code}, line ${p.at}) is too large to compute with; the range ends at 1e12. Move or scale the drawing.`,
+      `${where(p)}: ${p.text} (group ${p.code}, ${p.at}) is too large to compute with; the range ends at 1e12. Move or scale the drawing.`,
   ),
   'group-repeated': error((p) => `${where(p)}: ${p.what} (group ${p.code}) is given twice with different values. ${MEND}`),
   'group-missing': error((p) => `${where(p)}: ${p.what} (group ${p.code}) is missing. ${MEND}`),

@@ -133,7 +133,7 @@ class Measuring {
     const handle = bytesToText(reading.cursor.bytes, at('handleFrom'), at('handleTo')).trim()
     const name = reading.decode(reading.blocks.raw[at('block')])
     reading.sheet = sheet
-    reading.remark(at('row'), code, { kind: 'INSERT', handle, line: at('line'), name, chain })
+    reading.remark(at('row'), code, { kind: 'INSERT', handle, place: reading.place(at('line')), name, chain })
     reading.sheet = reading.root
     return -1
   }

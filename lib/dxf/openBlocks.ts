@@ -72,7 +72,7 @@ export class BlockOpener {
     const { root } = this.reading
     const first = this.placeRows(sheet.entities, around)
     const far = placeEdges(root.edges, sheet.edges, map, first)
-    if (far >= 0) this.reading.remark(first + far, 'placed-too-far', { kind: 'INSERT', handle: '', line: 0, block: sheet.name })
+    if (far >= 0) this.reading.remark(first + far, 'placed-too-far', { kind: 'INSERT', handle: '', place: '', block: sheet.name })
     this.count(sheet)
     this.openAll(sheet, map, first)
   }

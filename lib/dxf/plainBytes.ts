@@ -7,14 +7,15 @@ export interface PlainBytes {
   start: number
   /** a byte-order mark says that texts are UTF-8 */
   marked: boolean
+  binary: boolean
 }
 
 export function plainBytes(bytes: Uint8Array): PlainBytes {
-  if (isBinary(bytes)) return { text: binaryToText(bytes), start: 0, marked: false }
-  if (bytes[0] === 0xef && bytes[1] === 0xbb && bytes[2] === 0xbf) return { text: bytes, start: 3, marked: true }
-  if (bytes[0] === 0xff && bytes[1] === 0xfe) return { text: toUtf8(bytes, 0), start: 0, marked: true }
-  if (bytes[0] === 0xfe && bytes[1] === 0xff) return { text: toUtf8(bytes, 1), start: 0, marked: true }
-  return { text: bytes, start: 0, marked: false }
+  if (isBinary(bytes)) return { text: binaryToText(bytes), start: 0, marked: false, binary: true }
+  if (bytes[0] === 0xef && bytes[1] === 0xbb && bytes[2] === 0xbf) return { text: bytes, start: 3, marked: true, binary: false }
+  if (bytes[0] === 0xff && bytes[1] === 0xfe) return { text: toUtf8(bytes, 0), start: 0, marked: true, binary: false }
+  if (bytes[0] === 0xfe && bytes[1] === 0xff) return { text: toUtf8(bytes, 1), start: 0, marked: true, binary: false }
+  return { text: bytes, start: 0, marked: false, binary: false }
 }
 
 /** UTF-16 (after its mark) as UTF-8; `low` is where the low byte of a unit stands: 0 little-endian, 1 big-endian. */

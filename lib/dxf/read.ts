@@ -19,11 +19,11 @@ export function readDrawing(bytes: Uint8Array, limits: ReadLimits = DEFAULT_LIMI
   if (bytes.length > limits.bytes) {
     return emptyDrawing(dxfFinding('file-too-large', { bytes: bytes.length, limit: limits.bytes, setting: 'bytes' }))
   }
-  const { text, start, marked } = plainBytes(bytes)
+  const { text, start, marked, binary } = plainBytes(bytes)
   if (isBlank(text, start)) return emptyDrawing(dxfFinding('file-empty'))
   const other = otherFileKind(text, start)
   if (other) return emptyDrawing(dxfFinding('file-not-dxf', { what: other.what, cure: other.cure }))
-  const reading = new Reading(new GroupCursor(text, start), marked)
+  const reading = new Reading(new GroupCursor(text, start), marked, binary)
   const content = readSections(reading, limits)
   return finishDrawing(reading, content, limits)
 }

@@ -86,6 +86,7 @@ export class Reading {
   constructor(
     readonly cursor: GroupCursor,
     readonly marked: boolean,
+    private readonly binary: boolean,
   ) {
     const { bytes } = cursor
     this.decode = textReader('', '', marked).read
@@ -187,7 +188,13 @@ export class Reading {
     const { record } = this
     const { fault, faultCode: code, faultGroup: g } = record
     const what = WORDS_OF_KIND[String(where.kind)]?.[code] ?? WORDS[code] ?? 'a value'
-    this.remark(row, fault, { ...where, code, what, text: g < 0 ? '' : this.text(g), at: g < 0 ? 0 : record.lines[g] + 1 })
+    this.remark(row, fault, {
+      ...where,
+      code,
+      what,
+      text: g < 0 ? '' : this.text(g),
+      at: g < 0 ? '' : this.place(record.lines[g] + 1),
+    })
   }
 
   /** The entity at hand becomes a row without edges that says why. */
@@ -224,7 +231,12 @@ export class Reading {
   /** What leads a person to the entity at hand: its kind, handle and line. */
   where(kind: number): FindingParams {
     const g = this.record.find(5)
-    return { kind: this.record.kinds.raw[kind], handle: g < 0 ? '' : this.text(g), line: this.record.line }
+    return { kind: this.record.kinds.raw[kind], handle: g < 0 ? '' : this.text(g), place: this.place(this.record.line) }
+  }
+
+  /** A line of the file for a sentence; a binary file has groups instead. */
+  place(line: number): string {
+    return this.binary ? `group ${Math.ceil(line / 2)}` : `line ${line}`
   }
 
   /** The value of group g as it stands, for a sentence. */

@@ -227,17 +227,17 @@ class Walk {
   private reportEnd(ended: boolean): void {
     const { reading } = this
     const { cursor, findings } = reading
-    const { line } = cursor
+    const place = reading.place(cursor.line)
     if (cursor.fault === 'code') {
       const text = this.badLine()
-      findings.add('file-broken', () => dxfFinding('file-broken', { line, text }))
+      findings.add('file-broken', () => dxfFinding('file-broken', { place, text }))
     } else if (ended) {
-      if (cursor.goesOn()) findings.add('file-goes-on', () => dxfFinding('file-goes-on', { line }))
+      if (cursor.goesOn()) findings.add('file-goes-on', () => dxfFinding('file-goes-on', { place }))
     } else if (cursor.fault === 'none' && this.entitiesComplete && this.section === '') {
-      findings.add('file-without-eof', () => dxfFinding('file-without-eof', { line }))
+      findings.add('file-without-eof', () => dxfFinding('file-without-eof', { place }))
     } else {
       const where = this.section === '' ? 'outside all sections' : `in section ${quoted(this.section)}`
-      findings.add('file-cut', () => dxfFinding('file-cut', { line, in: where }))
+      findings.add('file-cut', () => dxfFinding('file-cut', { place, in: where }))
     }
   }
 

@@ -21,11 +21,15 @@ export function readCircle(reading: Reading) {
   pushArc(reading.sheet.edges, cx + radius, y, cx + radius, y, cx, y, radius, 0, 2 * Math.PI, row)
 }
 
-/** Sweep in degrees, in (0, 360], from start to end counter-clockwise; 0 where they are the same angle. */
-export function sweepDegrees(start: number, end: number): number {
-  const turn = (end - start) % 360
-  if (turn === 0) return start === end ? 0 : 360
-  return turn < 0 ? turn + 360 : turn
+/** Angles and parameters closer than this (degrees or rad) are one: they are written with so many digits. */
+const SAME_ANGLE = 1e-9
+
+/** Sweep from start to end counter-clockwise, in (0, turn]; 0 where they are the same angle. `turn` is 360 or 2π. */
+export function sweepFrom(start: number, end: number, turn: number): number {
+  const turns = Math.round((end - start) / turn)
+  if (Math.abs(end - start - turns * turn) <= SAME_ANGLE) return turns === 0 ? 0 : turn
+  const sweep = (end - start) % turn
+  return sweep < 0 ? sweep + turn : sweep
 }
 
 /** ARC: centre, radius and angles in degrees, counter-clockwise in the entity's own plane. */
@@ -34,7 +38,7 @@ export function readArc(reading: Reading) {
   const { record, facing } = reading
   const [x, y, radius, start, end] = record.values
   if (!(radius > 0)) return reading.refuse(ARC_KIND, 'radius-bad', { radius })
-  const sweep = sweepDegrees(start, end)
+  const sweep = sweepFrom(start, end, 360)
   if (sweep === 0) return reading.refuse(ARC_KIND, 'arc-without-sweep')
   const row = reading.begin(ARC_KIND)
   reading.height(facing * record.slot(5, 0))

@@ -2,21 +2,10 @@ import { pushArc, pushEllipse } from '../../geometry/edges'
 import { ELLIPSE_KIND } from '../kinds'
 import type { Reading } from '../reading'
 import { slots } from '../record'
+import { sweepFrom } from './arc'
 
 const ELLIPSE = slots([10, 20, 11, 21, 40, 41, 42], [30, 31])
 const TURN = 2 * Math.PI
-/** A parameter range this close to a whole turn is one: it is written with so many digits. */
-const WHOLE_TURN_WITHIN = 1e-9
-
-/** Sweep in rad, in (0, 2π], from start to end; 0 where they are the same parameter. */
-export function sweepRadians(start: number, end: number): number {
-  let sweep = end - start
-  if (sweep === 0) return 0
-  if (sweep < 0) sweep += TURN * Math.ceil(-sweep / TURN)
-  if (sweep > TURN + 1e-6) sweep %= TURN
-  return sweep >= TURN - WHOLE_TURN_WITHIN || sweep < WHOLE_TURN_WITHIN ? TURN : sweep
-}
-
 /**
  * ELLIPSE, in world coordinates: P(t) = C + M cos t + r (N × M) sin t, M the major axis from the centre, t from
  * 41 to 42 (rad). N = (0, 0, −1) reverses the sense. r > 1 means the same curve.
@@ -32,7 +21,7 @@ export function readEllipse(reading: Reading) {
   if (Math.abs(axisZ) > 1e-7 * Math.hypot(ux, uy)) {
     return reading.refuse(ELLIPSE_KIND, 'ellipse-bad', { what: 'its major axis leaves the drawing plane' })
   }
-  const sweep = sweepRadians(start, end)
+  const sweep = sweepFrom(start, end, TURN)
   if (sweep === 0) return reading.refuse(ELLIPSE_KIND, 'arc-without-sweep')
   const row = reading.begin(ELLIPSE_KIND)
   reading.height(record.slot(7, 0))

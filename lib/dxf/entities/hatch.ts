@@ -6,7 +6,7 @@ import { HATCH_KIND } from '../kinds'
 import type { Reading } from '../reading'
 import { bezierPieces } from '../spline/bezierPieces'
 import { pushPieces } from '../spline/pushPieces'
-import { pushArcDegrees, sweepDegrees } from './arc'
+import { pushArcDegrees, sweepFrom } from './arc'
 import { pushEllipticalArc } from './ellipse'
 
 const POLYLINE = 2
@@ -117,7 +117,7 @@ function readArcEdge(reading: Reading, boundary: Boundary, row: number): void {
   const [x, y, radius, from, to] = [10, 20, 40, 50, 51].map((code) => boundary.take(code))
   const sense = boundary.take(73) === 0 ? -1 : 1
   if (!(radius > 0)) boundary.fail(`its boundary has an arc of radius ${radius}`)
-  const sweep = sense * sweepDegrees(from, to)
+  const sweep = sense * sweepFrom(from, to, 360)
   if (sweep === 0) boundary.fail('its boundary has an arc that starts and ends at the same angle')
   if (boundary.fault !== null) return
   const { facing } = reading
@@ -130,7 +130,7 @@ function readEllipseEdge(reading: Reading, boundary: Boundary, row: number): voi
   const [x, y, ux, uy, ratio, from, to] = [10, 20, 11, 21, 40, 50, 51].map((code) => boundary.take(code))
   const sense = boundary.take(73) === 0 ? -1 : 1
   if (!(ratio > 0) || (ux === 0 && uy === 0)) boundary.fail('its boundary has an ellipse without axes')
-  const sweep = sweepDegrees(from, to)
+  const sweep = sweepFrom(from, to, 360)
   if (sweep === 0) boundary.fail('its boundary has an elliptical arc that starts and ends at the same angle')
   if (boundary.fault !== null) return
   const { facing } = reading

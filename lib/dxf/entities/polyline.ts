@@ -72,7 +72,7 @@ export function readVertex(reading: Reading, open: OpenPolyline): void {
       ...open.where,
       kind: 'VERTEX',
       handle: g < 0 ? open.where.handle : reading.text(g),
-      line: record.line,
+      place: reading.place(record.line),
     })
     return
   }

@@ -8,6 +8,10 @@ const HIGHEST_DEGREE = 25
 const LARGEST_WEIGHT_RATIO = 1e6
 /** A fit tolerance above this leaves the curve open. */
 const LARGEST_FIT_TOLERANCE = 1e-6
+const LEAST_WEIGHT = 1e-100
+/** Fit points closer than this share of the curve, or of their distance from the origin, are one. */
+const SAME_POINT = 1e-12
+const LEAST_EXTENT = 1e-14
 const CLOSED = 1
 const RATIONAL = 4
 
@@ -63,7 +67,7 @@ function piecesOf({ degree, knots, weights, control }: SplineGroups): Iterable<H
 }
 
 function piecesThrough(reading: Reading, row: number, { fit, flags, start, end }: SplineGroups): Homogeneous[] {
-  const points = fit.filter(([x, y], i) => i === 0 || x !== fit[i - 1][0] || y !== fit[i - 1][1])
+  const points = distinct(fit)
   const closed = (flags & CLOSED) === 1
   const [first, last] = [points[0], points[points.length - 1]]
   if (closed && (first[0] !== last[0] || first[1] !== last[1])) points.push(first)
@@ -74,6 +78,20 @@ function piecesThrough(reading: Reading, row: number, { fit, flags, start, end }
   const difference = greatestDistance(pieces, other)
   reading.remark(row, 'spline-fit-points', { ...reading.where(SPLINE_KIND), ends: words, difference }, first)
   return pieces
+}
+
+const extentOf = (points: readonly Vector[]): number =>
+  points.reduce((most, [x, y]) => Math.max(most, Math.abs(x - points[0][0]), Math.abs(y - points[0][1])), 0)
+
+/** Points without those that only repeat the one before. */
+function distinct(points: readonly Vector[]): Vector[] {
+  const least = SAME_POINT * extentOf(points)
+  const kept = [points[0]]
+  for (const [x, y] of points) {
+    const [lastX, lastY] = kept[kept.length - 1]
+    if (Math.hypot(x - lastX, y - lastY) > least) kept.push([x, y])
+  }
+  return kept
 }
 
 /** Why control points, knots and weights make no curve; null where they do. */
@@ -106,6 +124,7 @@ function faultOfWeights(flags: number, weights: readonly number[], count: number
     low = Math.min(low, w)
     high = Math.max(high, w)
   }
+  if (high < LEAST_WEIGHT) return `its weights are too small to compute with, at most ${high}`
   return high > LARGEST_WEIGHT_RATIO * low
     ? `its weights lie ${(high / low).toPrecision(3)} times apart; up to 1e6 can be computed`
     : null
@@ -115,7 +134,7 @@ function faultOfFit({ says, fit, fitTolerance }: SplineGroups): string | null {
   if (says.fit >= 0 && says.fit !== fit.length) return `it says ${says.fit} fit points and has ${fit.length}`
   if (fitTolerance > LARGEST_FIT_TOLERANCE) return `it has fit points only, and passes them by up to ${fitTolerance}`
   const [first] = fit
-  return fit.some(([x, y]) => x !== first[0] || y !== first[1]) ? null : 'its fit points are all one point'
+  return extentOf(fit) > LEAST_EXTENT * Math.hypot(...first) ? null : 'its fit points are all one point'
 }
 
 /** The groups of the spline at hand; a sentence, or null (with the record's fault), where they cannot be read. */

@@ -3,13 +3,15 @@ import { cutBezier, type Homogeneous } from './bezierPieces'
 const SAMPLES = 32
 /** Speed at a cusp against the piece's greatest. */
 const STILL = 1e-9
+/** No piece has more cusps one in another; one as small as its own rounding may seem to. */
+const MOST_CUTS = 5
 
 /**
  * Cuts a piece where its point stands still (a zero of the hodograph inside the piece: a cusp), so that every piece
  * has a tangent throughout. A piece whose control polygon always goes forward along its chord has none.
  */
-export function cutAtCusps(piece: Homogeneous): Homogeneous[] {
-  if (goesForward(piece)) return [piece]
+export function cutAtCusps(piece: Homogeneous, cuts = MOST_CUTS): Homogeneous[] {
+  if (cuts === 0 || goesForward(piece)) return [piece]
   let top = 0
   for (let i = 0; i <= SAMPLES; i++) top = Math.max(top, speed(piece, i / SAMPLES))
   if (top === 0) return [piece]
@@ -17,7 +19,8 @@ export function cutAtCusps(piece: Homogeneous): Homogeneous[] {
     const here = speed(piece, i / SAMPLES)
     if (here > speed(piece, (i - 1) / SAMPLES) || here > speed(piece, (i + 1) / SAMPLES)) continue
     const t = slowest(piece, (i - 1) / SAMPLES, (i + 1) / SAMPLES)
-    if (t > 1e-6 && t < 1 - 1e-6 && speed(piece, t) <= STILL * top) return cutBezier(piece, t).flatMap(cutAtCusps)
+    if (t > 1e-6 && t < 1 - 1e-6 && speed(piece, t) <= STILL * top)
+      return cutBezier(piece, t).flatMap((half) => cutAtCusps(half, cuts - 1))
   }
   return [piece]
 }
