@@ -12,23 +12,11 @@ export function previewOf(
   onStage: (stage: Stage) => void,
 ): PreviewResult {
   const { answer, drawing, tallies, outlines, roles, region } = task.run(recipe, materials, onStage)
+  const { edges, openEdges, ...columns } = outlines
   return {
     answer,
     drawing: viewOf(drawing, tallies),
-    outlines: {
-      ...outlines,
-      edges: cut(outlines.edges),
-      loopStart: outlines.loopStart.slice(),
-      area: outlines.area.slice(),
-      bounds: outlines.bounds.slice(),
-      at: outlines.at.slice(),
-      source: outlines.source.slice(),
-      depth: outlines.depth.slice(),
-      undecided: outlines.undecided.slice(),
-      group: outlines.group.slice(),
-      openEdges: cut(outlines.openEdges),
-      openStart: outlines.openStart.slice(),
-    },
+    outlines: { ...structuredClone(columns), edges: cut(edges), openEdges: cut(openEdges) },
     roles,
     region: region && {
       edges: cut(region.edges),
@@ -58,12 +46,13 @@ function cut(edges: EdgeTable): EdgeTable {
   }
 }
 
-/** The buffers of a result, to be handed over instead of copied. */
+/** The buffers of a result, each once, to be handed over instead of copied. */
 export function buffersOf({ outlines, region }: PreviewResult): ArrayBuffer[] {
   const tables = [outlines, outlines.edges, outlines.openEdges, ...(region ? [region, region.edges] : [])]
-  return tables.flatMap((table) =>
+  const buffers = tables.flatMap((table) =>
     Object.values(table).flatMap((value: unknown) =>
       ArrayBuffer.isView(value) && value.buffer instanceof ArrayBuffer ? [value.buffer] : [],
     ),
   )
+  return [...new Set(buffers)]
 }
