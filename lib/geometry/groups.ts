@@ -1,4 +1,5 @@
 import Flatbush from 'flatbush'
+import type { OutlineSet } from './outlineSet'
 
 /** Outlines that lie apart from all others: a detail of a sheet. */
 export interface OutlineGroup {
@@ -13,43 +14,34 @@ export interface OutlineGroup {
 const APART = 0.25
 
 /**
- * Groups outlines by the distance of their boxes: two belong together where it is at most a quarter of the smaller
- * one's greater side, and so on from one to the next. `alone` outlines (frames) are groups of their own. Groups are
- * numbered in the order of their first outline.
+ * Groups outlines by the distance of their boxes: two that no other holds belong together where it is at most a quarter
+ * of the smaller one's greater side, and so on from one to the next; what lies inside goes with what holds it. `alone`
+ * outlines (frames) are groups of their own and hold nothing. Groups are numbered in the order of their first outline.
  */
 export function groupOutlines(
-  bounds: Float64Array,
-  count: number,
+  { bounds, count, parent }: Pick<OutlineSet, 'bounds' | 'count' | 'parent'>,
   alone: Uint8Array,
 ): { group: Uint32Array; groups: OutlineGroup[] } {
-  const parent = new Uint32Array(count).map((_, k) => k)
+  const leader = new Uint32Array(count).map((_, k) => k)
   const find = (k: number): number => {
     let root = k
-    while (parent[root] !== root) {
-      parent[root] = parent[parent[root]]
-      root = parent[root]
+    while (leader[root] !== root) {
+      leader[root] = leader[leader[root]]
+      root = leader[root]
     }
     return root
   }
-  const side = (k: number) => Math.max(bounds[4 * k + 2] - bounds[4 * k], bounds[4 * k + 3] - bounds[4 * k + 1])
-  if (count > 1) {
-    const index = new Flatbush(count)
-    for (let k = 0; k < count; k++) index.add(bounds[4 * k], bounds[4 * k + 1], bounds[4 * k + 2], bounds[4 * k + 3])
-    index.finish()
-    for (let k = 0; k < count; k++) {
-      if (alone[k]) continue
-      const own = side(k)
-      const reach = APART * own
-      const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
-      index.search(minX - reach, minY - reach, maxX + reach, maxY + reach, (other) => {
-        if (!alone[other] && (side(other) > own || (side(other) === own && other < k))) {
-          const [a, b] = [find(k), find(other)]
-          parent[Math.max(a, b)] = Math.min(a, b)
-        }
-        return false
-      })
-    }
+  const unite = (a: number, b: number) => {
+    const [p, q] = [find(a), find(b)]
+    leader[Math.max(p, q)] = Math.min(p, q)
   }
+  const outer: number[] = []
+  for (let k = 0; k < count; k++) {
+    if (alone[k]) continue
+    if (parent[k] >= 0 && !alone[parent[k]]) unite(k, parent[k])
+    else outer.push(k)
+  }
+  uniteNear(bounds, outer, unite)
   const number = new Map<number, number>()
   const group = new Uint32Array(count)
   const groups: OutlineGroup[] = []
@@ -74,4 +66,21 @@ export function groupOutlines(
     }
   }
   return { group, groups }
+}
+
+function uniteNear(bounds: Float64Array, outer: number[], unite: (a: number, b: number) => void): void {
+  if (outer.length < 2) return
+  const side = (k: number) => Math.max(bounds[4 * k + 2] - bounds[4 * k], bounds[4 * k + 3] - bounds[4 * k + 1])
+  const index = new Flatbush(outer.length)
+  for (const k of outer) index.add(bounds[4 * k], bounds[4 * k + 1], bounds[4 * k + 2], bounds[4 * k + 3])
+  index.finish()
+  for (const k of outer) {
+    const own = side(k)
+    const reach = APART * own
+    const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
+    index.search(minX - reach, minY - reach, maxX + reach, maxY + reach, (n) => {
+      if (side(outer[n]) >= own && outer[n] !== k) unite(k, outer[n])
+      return false
+    })
+  }
 }

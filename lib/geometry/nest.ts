@@ -59,16 +59,18 @@ export function loopTester(
 /**
  * Nesting depth of each loop: how many other loops hold its probe point (x y per loop), which must lie inside or on the
  * loop and on no other. Candidates come from an index of boxes; a loop can lie only in one of greater area, and one more
- * deep than the smallest that holds it, unless that one is among the `crossing`: then all are counted.
+ * deep than the smallest that holds it, its parent (−1 outside all), unless that one is among the `crossing`: then all
+ * are counted.
  */
 export function nest(
   loops: Loops,
   inside: (loop: number, x: number, y: number) => boolean,
   probes: Float64Array,
   crossing: Uint8Array,
-): Int32Array {
+): { depth: Int32Array; parent: Int32Array } {
   const depth = new Int32Array(loops.count)
-  if (loops.count < 2) return depth
+  const parent = new Int32Array(loops.count).fill(-1)
+  if (loops.count < 2) return { depth, parent }
   const index = new Flatbush(loops.count)
   const b = loops.bounds
   for (let k = 0; k < loops.count; k++) index.add(b[4 * k], b[4 * k + 1], b[4 * k + 2], b[4 * k + 3])
@@ -78,19 +80,20 @@ export function nest(
   for (const k of order) {
     const x = probes[2 * k]
     const y = probes[2 * k + 1]
-    let parent = -1
+    let least = -1
     index.search(x, y, x, y, (other) => {
-      const between = area[other] > area[k] && (parent < 0 || area[other] < area[parent])
-      if (between && other !== k && inside(other, x, y)) parent = other
+      const between = area[other] > area[k] && (least < 0 || area[other] < area[least])
+      if (between && other !== k && inside(other, x, y)) least = other
       return false
     })
-    if (parent < 0) continue
-    if (!crossing[parent]) depth[k] = depth[parent] + 1
+    if (least < 0) continue
+    parent[k] = least
+    if (!crossing[least]) depth[k] = depth[least] + 1
     else
       index.search(x, y, x, y, (other) => {
         if (other !== k && area[other] > area[k] && inside(other, x, y)) depth[k]++
         return false
       })
   }
-  return depth
+  return { depth, parent }
 }

@@ -26,6 +26,8 @@ export interface OutlineSet {
    * overlaps another, so that nesting says nothing and a person must state the make-up.
    */
   depth: Int32Array
+  /** the smallest outline that holds this one, −1 for none */
+  parent: Int32Array
   /** 1 where a person has to say whether the outline is metal or void (a face of branching edges); its depth is −1 */
   undecided: Uint8Array
   /** number of the group that lies apart from the others (a detail of the sheet), from 0 */

@@ -98,7 +98,7 @@ export function completed(related: Related, tolerances: Tolerances, mmPerUnit: n
   const { frames, titleBlocks } = sheetParts(related, related.depth, related.clusters, mmPerUnit)
   const alone = new Uint8Array(count)
   for (const k of frames) alone[k] = 1
-  const { group, groups } = groupOutlines(bounds, count, alone)
+  const { group, groups } = groupOutlines(related, alone)
   const place = (k: number): [number, number] => [at[2 * k], at[2 * k + 1]]
   for (const k of frames) {
     const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)

@@ -11,7 +11,18 @@ import type { OutlineSet } from './outlineSet'
 
 export type Related = Pick<
   OutlineSet,
-  'edges' | 'loopStart' | 'count' | 'area' | 'bounds' | 'at' | 'source' | 'depth' | 'undecided' | 'clusters' | 'findings'
+  | 'edges'
+  | 'loopStart'
+  | 'count'
+  | 'area'
+  | 'bounds'
+  | 'at'
+  | 'source'
+  | 'depth'
+  | 'parent'
+  | 'undecided'
+  | 'clusters'
+  | 'findings'
 >
 
 /** Areas and bounds of loops. */
@@ -86,8 +97,8 @@ export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, u
   const crossing = new Uint8Array(loops.count)
   for (const { a, b, crosses } of crossings.contacts) if (crosses) for (const k of [a, b]) crossing[k] = 1
   for (const { loop } of crossings.selfCrossing) crossing[loop] = 1
-  const depth = nest(loops, inside, probes, crossing)
+  const { depth, parent } = nest(loops, inside, probes, crossing)
   for (let k = 0; k < loops.count; k++) if (crossing[k] || undecided[k] || crossings.tooMany) depth[k] = -1
   const at = namesOf(loops, crossings.touched)
-  return { ...loops, at, source, depth, undecided, clusters, findings: contactFindings(crossings) }
+  return { ...loops, at, source, depth, parent, undecided, clusters, findings: contactFindings(crossings) }
 }
