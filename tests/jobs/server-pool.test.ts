@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process'
+import { existsSync, readFileSync } from 'node:fs'
 import { setTimeout as sleep } from 'node:timers/promises'
 import { afterEach, beforeAll, describe, expect, it } from 'vitest'
 import { DEFAULT_RECIPE } from '@/lib/geometry/recipe'
@@ -124,11 +125,13 @@ describe('the pool of child processes', () => {
   })
 })
 
+/** False for a process that has ended and only waits to be collected by its new parent. */
 function isAlive(pid: number): boolean {
   try {
     process.kill(pid, 0)
-    return true
   } catch {
     return false
   }
+  const stat = `/proc/${pid}/stat`
+  return !existsSync(stat) || !readFileSync(stat, 'utf8').includes(') Z ')
 }

@@ -1,4 +1,4 @@
-import { mkdirSync, mkdtempSync } from 'node:fs'
+import { mkdirSync, mkdtempSync, readdirSync, rmSync, statSync } from 'node:fs'
 import path from 'node:path'
 import { build } from 'esbuild'
 
@@ -11,6 +11,7 @@ const root = path.resolve(import.meta.dirname, '../..')
 export async function bundle(...entries: string[]): Promise<string[]> {
   const folder = path.join(root, 'dist-worker', 'tests')
   mkdirSync(folder, { recursive: true })
+  removeOld(folder)
   const outdir = mkdtempSync(path.join(folder, 'bundle-'))
   await build({
     absWorkingDir: root,
@@ -25,4 +26,15 @@ export async function bundle(...entries: string[]): Promise<string[]> {
     logLevel: 'error',
   })
   return entries.map((entry) => path.join(outdir, `${path.basename(entry, '.ts')}.mjs`))
+}
+
+const HOUR = 3_600_000
+
+/** Earlier runs may still use what is newer than an hour. */
+function removeOld(folder: string): void {
+  for (const name of readdirSync(folder)) {
+    const at = path.join(folder, name)
+    const { mtimeMs = Date.now() } = statSync(at, { throwIfNoEntry: false }) ?? {}
+    if (Date.now() - mtimeMs > HOUR) rmSync(at, { recursive: true, force: true })
+  }
 }
