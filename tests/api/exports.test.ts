@@ -4,13 +4,18 @@ import { GET as csv } from '@/app/api/v1/revisions/[id]/figures.csv/route'
 import { GET as picture } from '@/app/api/v1/revisions/[id]/picture.svg/route'
 import { GET as regionDxf } from '@/app/api/v1/revisions/[id]/region.dxf/route'
 import { GET as profiles } from '@/app/api/v1/profiles/route'
+import { readBlob } from '@/db/blobs'
 import type { Database } from '@/db/client'
+import { listMaterials } from '@/db/materials'
+import { getRevision, getStored } from '@/db/revisions'
 import { createTeam } from '@/db/teams'
 import { page } from '@/lib/api/schemas/common'
 import { Profile } from '@/lib/api/schemas/profile'
 import { RevisionAdded } from '@/lib/api/schemas/revision'
+import { DEFAULT_RECIPE } from '@/lib/geometry/recipe'
 import { opinionsSettled } from '@/lib/jobs/saveRevision'
 import type { SectionPool } from '@/lib/jobs/server-pool'
+import { readTask, sectionTask } from '@/lib/jobs/tasks'
 import { ROLES } from '@/lib/auth/permissions'
 import { call, givenDatabase } from '@/tests/support/call'
 import { givenMember, givenTeam, type Member } from '@/tests/support/team'
@@ -62,6 +67,20 @@ test('the picture is one SVG without script, style or text that needs a font', a
   expect(text).not.toMatch(/<script|<text|style=|href=/)
 })
 
+/** Bytes, recipe and engine version are the whole input: the stored section comes out again to the last bit. */
+async function expectSameWhenRecomputed(teamId: string, id: string) {
+  const { answer, file } = await getRevision(database.read, teamId, id)
+  const { blobId } = await getStored(database.read, teamId, id)
+  const chunks: Uint8Array[] = []
+  for await (const chunk of readBlob(database.read, blobId)) chunks.push(chunk)
+  const used = await listMaterials(database.read, teamId)
+  const materials = Object.fromEntries(used.map(({ id: key, name, density, source }) => [key, { name, density, source }]))
+  const { name, bytes, sha256 } = file
+  const recipe = { ...DEFAULT_RECIPE, ...answer.recipe }
+  const again = sectionTask(readTask(Buffer.concat(chunks)), { name, bytes, sha256 }, recipe, materials)
+  expect(again.answer.section).toEqual(answer.section)
+}
+
 test('the demo loads 13 profiles in 3 jobs, twice alike to the last digit, and once a team', async () => {
   const stories: string[] = []
   for (const _ of [1, 2]) {
@@ -76,6 +95,7 @@ test('the demo loads 13 profiles in 3 jobs, twice alike to the last digit, and o
     stories.push(JSON.stringify(items.map(({ owner: _, material, ...item }) => ({ ...item, material: material?.name }))))
     expect((await call(demo, { method: 'POST', cookie: me.cookie })).json).toMatchObject({ status: 409, code: 'taken' })
     await opinionsSettled()
+    for (const { latest } of items) await expectSameWhenRecomputed(teamId, latest?.id ?? '')
   }
   expect(stories[0]).toBe(stories[1])
 })

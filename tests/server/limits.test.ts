@@ -1,0 +1,67 @@
+import { afterAll, beforeAll, expect, test } from 'vitest'
+import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
+import { inspect, WHOLE } from './inspect'
+import { firstPerson, type Person } from './person'
+import { newDataDir, removeDataDir, type Server, startServer } from './server'
+
+const dataDir = newDataDir()
+let server: Server
+let me: Person
+let profileId = ''
+beforeAll(async () => {
+  server = await startServer(dataDir, { COMPUTE_CHILDREN: '1', SIGN_IN_ATTEMPTS: '1' })
+  me = await firstPerson(server.url)
+  profileId = await me.profile()
+})
+afterAll(async () => {
+  await server.stop()
+  removeDataDir(dataDir)
+})
+
+/** n bars lying over n bars: n² crossings from 2n outlines. */
+function lattice(n: number): string {
+  const bars = Array.from({ length: n }, (_, k): [number, number, number, number][] => [
+    [3 * k, -1, 1, 3 * n + 1],
+    [-1, 3 * k, 3 * n + 1, 1],
+  ])
+  return rectanglesDxf(...bars.flat())
+}
+
+test('a drawing of 9,000,000 crossings is stopped after 2 s with a sentence, and the next one is computed', async () => {
+  const started = Date.now()
+  const { status, json } = await me.upload(profileId, lattice(3000))
+  expect(Date.now() - started).toBeLessThan(15_000)
+  expect([status, json.code], JSON.stringify(json).slice(0, 500)).toEqual([422, 'compute_limit'])
+  expect(json.detail).toContain('more than the 2 s')
+  expect((await me.upload(profileId, rectanglesDxf([0, 0, 40, 60]))).status).toBe(201)
+})
+
+test('of six uploads at once by one person three are computed, the others told to wait with Retry-After', async () => {
+  const answers = await Promise.all(Array.from({ length: 6 }, () => me.upload(profileId, rectanglesDxf([0, 0, 40, 60]))))
+  const statuses = answers.map(({ status }) => status)
+  expect(statuses.filter((status) => status === 201).length).toBeGreaterThanOrEqual(3)
+  expect(statuses.every((status) => status === 201 || status === 429)).toBe(true)
+})
+
+test('an address made up in X-Forwarded-For does not get round the limit of attempts', async () => {
+  const statuses: (string | null)[] = []
+  for (let k = 0; k < 7; k++) {
+    const csrf = await fetch(`${server.url}/api/auth/csrf`)
+    const { csrfToken } = Object(await csrf.json())
+    const cookie = csrf.headers
+      .getSetCookie()
+      .map((each) => each.split(';')[0])
+      .join('; ')
+    const body = new URLSearchParams({ csrfToken, email: `n${k}@example.org`, password: 'x', json: 'true', callbackUrl: '/' })
+    const headers = { cookie, origin: server.url, 'x-forwarded-for': `10.0.0.${k}` }
+    const response = await fetch(`${server.url}/api/auth/callback/credentials`, { method: 'POST', body, headers })
+    statuses.push(new URL(Object(await response.json()).url).searchParams.get('error'))
+  }
+  expect(statuses.slice(0, 5)).toEqual(Array.from({ length: 5 }, () => 'wrong_password'))
+  expect(statuses.at(-1)).toBe('too_many')
+})
+
+test('nothing is left of what was stopped or sent away', async () => {
+  await server.stop()
+  expect(inspect(dataDir)).toMatchObject(WHOLE)
+})
