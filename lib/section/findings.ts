@@ -8,6 +8,12 @@ export const SECTION_FINDINGS = {
     severity: 'error',
     say: () => 'The make-up leaves no metal, so there is nothing to compute. Check which outlines add and which cut.',
   },
+  'too-thin': {
+    severity: 'error',
+    say: () =>
+      'The metal is so thin for its size, or lies so far from the drawing’s origin, that its figures would be rounding. ' +
+      'Check the unit, and move the drawing near its origin.',
+  },
   'all-axes-principal': {
     severity: 'note',
     say: () =>

@@ -43,16 +43,15 @@ function massOf(area: number, { density, parts }: SectionInputs): number | undef
 
 /**
  * All figures of a region (mm, turned upright) by exact integrals along its edges. Signs and axes as in `Section`; a region
- * without metal gives no section but a finding.
+ * without metal, or with less than rounding can tell, gives no section but a finding.
  */
 export function sectionOf(region: Region, inputs: SectionInputs): SectionResult {
   const { edges } = region
-  const nothing = { section: null, findings: [makeFinding(SECTION_FINDINGS, 'no-metal')] }
-  if (edges.count === 0) return nothing
+  if (edges.count === 0) return nothing('no-metal')
   const bundles = bundlesOf(region)
   const { moments } = bundles
   const { area } = moments
-  if (!(area > 0)) return nothing
+  if (!(area > 0)) return nothing('no-metal')
   const frame = frameAt(bundles.x, bundles.y)
   const ix = moments.vv - moments.v ** 2 / area
   const iy = moments.uu - moments.u ** 2 / area
@@ -61,6 +60,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   const boundary = boundaryOf(region, frame.x, frame.y)
   const causes = causesOf(region, inputs, boundary, frame)
   const principal = principalOf(edges, frame, { ix, iy, ixy }, causes)
+  if (!(ix > 0 && iy > 0 && principal.i2 > 0 && area > causes.numerics.area)) return nothing('too-thin')
   const { plastic, shape, widths, across, findings } = plasticFigures(region, bundles, principal.theta, causes)
   const elastic = elasticOf(bundles, principal, ix, iy)
   const degrees = (radians: number) => (radians * 180) / Math.PI
@@ -105,6 +105,11 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   section.origin = originsOf(section, boundary, causes, { widths, circle: leverage })
   return { section, findings: [...sayings(section), ...findings] }
 }
+
+const nothing = (code: 'no-metal' | 'too-thin'): SectionResult => ({
+  section: null,
+  findings: [makeFinding(SECTION_FINDINGS, code)],
+})
 
 function causesOf({ edges }: Region, { lastDigit, repairs }: SectionInputs, boundary: Boundary, { x, y }: Frame): Causes {
   let largest = 0

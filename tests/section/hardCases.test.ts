@@ -25,14 +25,17 @@ describe('far origins and thin shapes', () => {
   })
 
   // bd³/12 in the strip's own axes; what is lost is the rounding of its corners, 1e-13 mm on a thickness of 0.3 mm
-  test.each([1, 17.3, 44.999, 60, 89.9])('a strip 800 × 0.3 turned by %d° keeps I2 = bt³/12 to 1e-10 and θ across it to 1e-12°', (turn) => {
-    const s = sectionFor(transformRegion(regionOf(rectangle(0, 0, 800, 0.3)), { turn }))
-    expect(s.i2).toBeWithin((800 * 0.3 ** 3) / 12, { relative: 1e-10 })
-    expect(s.i1).toBeWithin((0.3 * 800 ** 3) / 12, { relative: 1e-11 })
-    expect(s.theta).toBeWithin(turn - 90, { absolute: 1e-12 })
-    expect(s.plastic.axis2).toBeWithin((800 * 0.3 ** 2) / 4, { relative: 1e-9 })
-    expect(s.elastic.axis2Left).toBeWithin((800 * 0.3 ** 2) / 6, { relative: 1e-9 })
-  })
+  test.each([1, 17.3, 44.999, 60, 89.9])(
+    'a strip 800 × 0.3 turned by %d° keeps I2 = bt³/12 to 1e-10 and θ across it to 1e-12°',
+    (turn) => {
+      const s = sectionFor(transformRegion(regionOf(rectangle(0, 0, 800, 0.3)), { turn }))
+      expect(s.i2).toBeWithin((800 * 0.3 ** 3) / 12, { relative: 1e-10 })
+      expect(s.i1).toBeWithin((0.3 * 800 ** 3) / 12, { relative: 1e-11 })
+      expect(s.theta).toBeWithin(turn - 90, { absolute: 1e-12 })
+      expect(s.plastic.axis2).toBeWithin((800 * 0.3 ** 2) / 4, { relative: 1e-9 })
+      expect(s.elastic.axis2Left).toBeWithin((800 * 0.3 ** 2) / 6, { relative: 1e-9 })
+    },
+  )
 
   test('from Ix, Iy, Ixy alone the turned strip’s I2 would have lost ten digits', () => {
     const region = transformRegion(regionOf(rectangle(0, 0, 800, 0.003)), { turn: 30 })
@@ -318,6 +321,12 @@ describe('plus and minus, and origin', () => {
 })
 
 describe('no metal', () => {
+  test('a hair of 1e-9 mm at 1e6 mm from the origin is refused as too thin, not computed from rounding', () => {
+    const { section, findings } = sectionOf(regionOf(rectangle(1e6, 1e6, 50, 1e-9)), { lastDigit: 0, repairs: [] })
+    expect(section).toBeNull()
+    expect(findings.map(({ code, severity }) => [code, severity])).toEqual([['too-thin', 'error']])
+  })
+
   test('an empty region and one of negative area give no section but a finding', () => {
     const empty: Region = {
       ...regionOf(rectangle(0, 0, 1, 1)),
