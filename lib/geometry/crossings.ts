@@ -22,7 +22,7 @@ export interface Contact {
 export interface Crossings {
   contacts: Contact[]
   /** loops that meet themselves, with the place */
-  selfCrossing: { loop: number; at: [number, number] }[]
+  selfMeeting: { loop: number; at: [number, number] }[]
   /** 1 for each edge that meets another loop */
   touched: Uint8Array
   /** true where the search was given up */
@@ -128,7 +128,7 @@ export function crossingsOf(
   }))
   return {
     contacts: contacts.sort((p, q) => p.a - q.a || p.b - q.b),
-    selfCrossing: [...self].map(([loop, at]) => ({ loop, at })).sort((p, q) => p.loop - q.loop),
+    selfMeeting: [...self].map(([loop, at]) => ({ loop, at })).sort((p, q) => p.loop - q.loop),
     touched,
     tooMany,
   }

@@ -77,6 +77,10 @@ export const GEOMETRY_FINDINGS = {
     severity: 'error',
     say: (p) => `An outline crosses itself at ${place(p)}. Mend it in the drawing, or leave the outline out.`,
   },
+  'outline-touches-itself': {
+    severity: 'note',
+    say: (p) => `An outline touches itself, or runs back over itself, at ${place(p)}; zero wall or zero gap there.`,
+  },
   'crossings-too-many': {
     severity: 'error',
     say: () =>

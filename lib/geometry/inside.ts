@@ -4,8 +4,8 @@ import { type BezierXy, bezierXy, turnsOf } from './bezierXy'
 import { ARC, ELLIPSE, type EdgeTable, LINE } from './edges'
 
 /**
- * Crossings of the ray from (x, y) to the right with edge i, counted by the half-open rule on y-monotone pieces
- * (lower end in, upper end out), so that a loop's total is odd inside. Signs by robust predicates for lines (their
+ * Crossings of the ray from (x, y) to the right with edge i, upward ones +1, downward ones −1, by the half-open rule on
+ * y-monotone pieces (lower end in, upper end out): a loop's total is how often it winds round the point. Signs by robust predicates for lines (their
  * y axis points down: the sign is turned here), by the circle's and the curve's own equation else.
  */
 function crossings(edges: EdgeTable, i: number, x: number, y: number): number {
@@ -16,7 +16,7 @@ function crossings(edges: EdgeTable, i: number, x: number, y: number): number {
   const by = e[4 * i + 3]
   switch (edges.kind[i]) {
     case LINE:
-      return crossesLine(ax, ay, bx, by, x, y) ? 1 : 0
+      return crossesLine(ax, ay, bx, by, x, y) ? (by > ay ? 1 : -1) : 0
     case ARC:
       return crossesArc(edges, i, x, y)
     case ELLIPSE:
@@ -65,7 +65,7 @@ function crossesArc(edges: EdgeTable, i: number, x: number, y: number): number {
     const toY = last ? e[4 * i + 3] : Math.sin(toAngle) > 0 ? cy + r : cy - r
     if (fromY <= y !== toY <= y) {
       const rightSide = Math.cos(0.5 * (fromAngle + toAngle)) > 0
-      if (rightSide ? x < cx || inCircle : x < cx && !inCircle) count++
+      if (rightSide ? x < cx || inCircle : x < cx && !inCircle) count += toY > fromY ? 1 : -1
     }
     fromY = toY
     fromAngle = toAngle
@@ -93,7 +93,7 @@ function crossesEllipse(edges: EdgeTable, i: number, x: number, y: number): numb
       const middle = 0.5 * (fromAngle + toAngle)
       const side = Math.sin(middle - extreme) > 0 ? 1 : -1
       const t = extreme + side * away
-      if (cx + ux * Math.cos(t) + vx * Math.sin(t) > x) count++
+      if (cx + ux * Math.cos(t) + vx * Math.sin(t) > x) count += toY > fromY ? 1 : -1
     }
     fromY = toY
     fromAngle = toAngle
@@ -118,7 +118,7 @@ function crossesBezier(edges: EdgeTable, i: number, x: number, y: number): numbe
   const ay = e[4 * i + 1]
   const by = e[4 * i + 3]
   if (y > Math.max(maxY, ay, by) || y < Math.min(minY, ay, by) || x > Math.max(maxX, e[4 * i], e[4 * i + 2])) return 0
-  if (x < Math.min(minX, e[4 * i], e[4 * i + 2])) return ay <= y !== by <= y ? 1 : 0
+  if (x < Math.min(minX, e[4 * i], e[4 * i + 2])) return ay <= y === by <= y ? 0 : by > ay ? 1 : -1
   const curve = bezierXy(edges, i)
   const knots = [0, ...turnsOf(curve.y, curve), 1]
   let count = 0
@@ -127,7 +127,7 @@ function crossesBezier(edges: EdgeTable, i: number, x: number, y: number): numbe
     const toY = p === knots.length - 1 ? by : yAt(curve, knots[p])
     if (fromY <= y === toY <= y) continue
     const t = level(curve, knots[p - 1], knots[p], y, toY > fromY)
-    if (valueAt(curve.x, t) / valueAt(curve.w, t) > x) count++
+    if (valueAt(curve.x, t) / valueAt(curve.w, t) > x) count += toY > fromY ? 1 : -1
   }
   return count
 }
@@ -145,16 +145,21 @@ function level(curve: BezierXy, from: number, to: number, y: number, rising: boo
   return 0.5 * (low + high)
 }
 
-/** True where (x, y) lies inside the loop of edges from … to − 1 (even–odd); on the boundary either may come out. */
-export function insideLoop(edges: EdgeTable, from: number, to: number, x: number, y: number): boolean {
+/** How often the loop of edges from … to − 1 winds round (x, y), counter-clockwise positive. */
+export function windingOf(edges: EdgeTable, from: number, to: number, x: number, y: number): number {
   let count = 0
   for (let i = from; i < to; i++) count += crossings(edges, i, x, y)
-  return count % 2 === 1
+  return count
+}
+
+/** True where (x, y) lies inside the loop of edges from … to − 1 (even–odd); on the boundary either may come out. */
+export function insideLoop(edges: EdgeTable, from: number, to: number, x: number, y: number): boolean {
+  return windingOf(edges, from, to, x, y) % 2 !== 0
 }
 
 /** The same over a list of rows: the only edges whose span in y can hold the point's. */
 export function insideRows(edges: EdgeTable, rows: Uint32Array, from: number, to: number, x: number, y: number): boolean {
   let count = 0
   for (let r = from; r < to; r++) count += crossings(edges, rows[r], x, y)
-  return count % 2 === 1
+  return count % 2 !== 0
 }

@@ -44,6 +44,7 @@ const OF_THE_WHOLE: ReadonlySet<string> = new Set<GeometryCode>([
   'outlines-cross',
   'outlines-touch',
   'outline-crosses-itself',
+  'outline-touches-itself',
   'crossings-too-many',
   'groups-apart',
   'frame-found',

@@ -1,9 +1,11 @@
+import { facesOf } from './arrangement/faces'
 import { boundsOfEdges, unionOfBoxes } from './bounds'
 import { type Crossings, crossingsOf } from './crossings'
 import { loopArea } from './edgeArea'
 import type { EdgeTable } from './edges'
 import type { Finding } from './finding'
 import { geometryFinding } from './findings'
+import { windingOf } from './inside'
 import { interiorPoint } from './interiorPoint'
 import { namesOf } from './names'
 import { type Loops, loopTester, nest } from './nest'
@@ -25,6 +27,22 @@ export type Related = Pick<
   | 'findings'
 >
 
+/**
+ * Whether a counter-clockwise loop that meets itself crosses itself: it winds round some face more than once or
+ * backwards. One that only touches itself (a pinch point, a cut to a hole and back) winds round every point once or not.
+ */
+function crossesItself(edges: EdgeTable, from: number, to: number, snap: number): boolean {
+  const rows = Uint32Array.from({ length: to - from }, (_, n) => from + n)
+  const faces = facesOf(edges, rows, { snap })
+  if (faces.tooMany) return true
+  for (let f = 0; f < faces.area.length; f++) {
+    const point = interiorPoint(faces.edges, faces.loopStart[f], faces.loopStart[f + 1])
+    const winding = point ? windingOf(edges, from, to, point[0], point[1]) : 0
+    if (winding !== 0 && winding !== 1) return true
+  }
+  return false
+}
+
 /** Areas and bounds of loops. */
 export function measured(edges: EdgeTable, loopStart: Uint32Array, boxes: Float64Array): Loops {
   const count = loopStart.length - 1
@@ -38,7 +56,7 @@ export function measured(edges: EdgeTable, loopStart: Uint32Array, boxes: Float6
 }
 
 /** Connected sets of loops that meet, each ascending. */
-function clustersOf(count: number, { contacts, selfCrossing }: Crossings): number[][] {
+function clustersOf(count: number, { contacts, selfMeeting }: Crossings): number[][] {
   const parent = new Map<number, number>()
   const find = (k: number): number => {
     let root = k
@@ -50,7 +68,7 @@ function clustersOf(count: number, { contacts, selfCrossing }: Crossings): numbe
     const [p, q] = [find(a), find(b)]
     parent.set(Math.max(p, q), Math.min(p, q))
   }
-  for (const { loop } of selfCrossing) find(loop)
+  for (const { loop } of selfMeeting) find(loop)
   const clusters = new Map<number, number[]>()
   for (let k = 0; k < count; k++) {
     if (!parent.has(k)) continue
@@ -61,8 +79,10 @@ function clustersOf(count: number, { contacts, selfCrossing }: Crossings): numbe
   return [...clusters.values()]
 }
 
-function contactFindings({ contacts, selfCrossing, tooMany }: Crossings): Finding[] {
-  const findings: Finding[] = selfCrossing.map(({ at }) => geometryFinding('outline-crosses-itself', { x: at[0], y: at[1] }, at))
+function contactFindings({ contacts, selfMeeting, tooMany }: Crossings, crossing: Uint8Array): Finding[] {
+  const findings: Finding[] = selfMeeting.map(({ loop, at }) =>
+    geometryFinding(crossing[loop] ? 'outline-crosses-itself' : 'outline-touches-itself', { x: at[0], y: at[1] }, at),
+  )
   for (const crosses of [true, false]) {
     const those = contacts.filter((contact) => contact.crosses === crosses)
     if (those.length === 0) continue
@@ -95,10 +115,12 @@ export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, u
     if (point) probes.set(point, 2 * k)
   }
   const crossing = new Uint8Array(loops.count)
+  for (const { loop } of crossings.selfMeeting)
+    if (crossesItself(edges, loopStart[loop], loopStart[loop + 1], snap)) crossing[loop] = 1
+  const ofThemselves = crossing.slice()
   for (const { a, b, crosses } of crossings.contacts) if (crosses) for (const k of [a, b]) crossing[k] = 1
-  for (const { loop } of crossings.selfCrossing) crossing[loop] = 1
   const { depth, parent } = nest(loops, inside, probes, crossing)
   for (let k = 0; k < loops.count; k++) if (crossing[k] || undecided[k] || crossings.tooMany) depth[k] = -1
   const at = namesOf(loops, crossings.touched)
-  return { ...loops, at, source, depth, parent, undecided, clusters, findings: contactFindings(crossings) }
+  return { ...loops, at, source, depth, parent, undecided, clusters, findings: contactFindings(crossings, ofThemselves) }
 }

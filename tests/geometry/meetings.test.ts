@@ -61,22 +61,47 @@ test('a figure of eight crosses itself at (5, 5)', () => {
   expect([...set.depth]).toEqual([-1])
 })
 
-test('a bow of two halves that meet in one point touches itself there', () => {
+test('two halves that meet in one point touch themselves there, and keep depth 0', () => {
+  const hourglass = new Drawn()
+    .polyline([
+      [0, 0],
+      [10, 0],
+      [5, 5],
+      [10, 10],
+      [0, 10],
+      [5, 5],
+    ])
+    .outlines()
+  expect(codesOf(hourglass)).toEqual(['outline-touches-itself'])
+  expect(hourglass.findings[0].at).toEqual([5, 5])
+  expect([...hourglass.depth]).toEqual([0])
+  expect(hourglass.clusters).toEqual([[0]])
+})
+
+test('a plate with a hole drawn as one polyline, by a cut there and back, has area 84 and depth 0', () => {
   const set = new Drawn()
     .polyline([
       [0, 0],
-      [5, 5],
       [10, 0],
       [10, 10],
-      [5, 5],
       [0, 10],
+      [0, 5],
+      [3, 5],
+      [3, 7],
+      [7, 7],
+      [7, 3],
+      [3, 3],
+      [3, 5],
+      [0, 5],
     ])
+    .circle(5, 5, 1)
     .outlines()
-  expect(codesOf(set)).toEqual(['outline-crosses-itself'])
-  expect(set.findings[0].at).toEqual([5, 5])
+  expect(codesOf(set)).toEqual(['outline-touches-itself'])
+  expect(set.area[0]).toBe(84)
+  expect([...set.depth]).toEqual([0, 0])
 })
 
-test('a line that runs back over itself crosses itself', () => {
+test('a spike there and back is told as touching itself', () => {
   const set = new Drawn()
     .polyline([
       [0, 0],
@@ -85,7 +110,15 @@ test('a line that runs back over itself crosses itself', () => {
       [4, 10],
     ])
     .outlines()
-  expect(codesOf(set)).toEqual(['outline-crosses-itself'])
+  expect(codesOf(set)).toEqual(['outline-touches-itself'])
+})
+
+test('an outline that winds twice round its middle crosses itself', () => {
+  const star: [number, number][] = [0, 2, 4, 1, 3].map((n) => [
+    10 * Math.cos((2 * Math.PI * n) / 5),
+    10 * Math.sin((2 * Math.PI * n) / 5),
+  ])
+  expect(codesOf(new Drawn().polyline(star).outlines())).toEqual(['outline-crosses-itself'])
 })
 
 test('an elliptical outline and a rectangle that cross are found', () => {
