@@ -76,9 +76,17 @@ export function useTool({ model, state, dispatch, view, viewport, writing }: Opt
     layer: (
       <>
         <UserAxisLayer {...{ model, state, dispatch, view, viewport }} />
-        {state.tool === 'measure' && <MeasureLayer points={state.points} pointer={snapped} view={view} length={writing.length} />}
+        {state.tool !== 'look' && <MeasureLayer points={state.points} pointer={snapped} view={view} length={writing.length} />}
       </>
     ),
-    readout: state.tool === 'measure' && <MeasureReadout points={state.points} pointer={snapped} writing={writing} />,
+    readout:
+      state.tool === 'measure' ? (
+        <MeasureReadout points={state.points} pointer={snapped} writing={writing} />
+      ) : state.tool === 'axis' ? (
+        <p className="text-small text-soft">
+          Choose a point, by click or with arrow keys and Enter. Drag the ring to turn the axis, or press [ and ]. Its figures
+          stand in the sheet.
+        </p>
+      ) : null,
   }
 }

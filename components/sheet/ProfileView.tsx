@@ -16,8 +16,8 @@ interface Props {
   profileId: string
   /** the revision the address names, or the newest; null before there is one */
   revisionId: string | null
-  /** its metal, where it is small enough to come with the page */
-  packed: Uint8Array | null
+  /** its metal in base64, where it is small enough to come with the page */
+  packed: string | null
 }
 
 /** The page of a profile: its head, and the revision that is looked at. */

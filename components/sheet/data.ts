@@ -24,8 +24,10 @@ export const useEvents = (profileId: string) => useSWR(eventsOf(profileId), getJ
 
 const getRegion = async (path: string): Promise<Region> => unpackRegion(new Uint8Array(await getBytes(path)))
 
-/** The metal of a revision; it never changes, so it is read once. */
-export function useRegion(revisionId: string | null, packed: Uint8Array | null) {
-  const came = useMemo(() => (packed ? unpackRegion(packed) : undefined), [packed])
+const fromBase64 = (text: string) => Uint8Array.from(atob(text), (character) => character.charCodeAt(0))
+
+/** The metal of a revision; it never changes, so it is read once. `packed`: its bytes in base64, where they came with the page. */
+export function useRegion(revisionId: string | null, packed: string | null) {
+  const came = useMemo(() => (packed ? unpackRegion(fromBase64(packed)) : undefined), [packed])
   return useSWRImmutable(revisionId && keys.region(revisionId), getRegion, { fallbackData: came })
 }

@@ -42,3 +42,15 @@ export function zShape(): Region {
   ])
   return { edges, loopStart: Uint32Array.from([0, 8]), hole: Uint8Array.from([0]), piece: Uint32Array.from([0]), pieces: 1 }
 }
+
+/** A rectangle with its corner at the origin. */
+export function rectangle(width: number, height: number): Region {
+  const edges = emptyTable()
+  polygon(edges, [
+    [0, 0],
+    [width, 0],
+    [width, height],
+    [0, height],
+  ])
+  return { edges, loopStart: Uint32Array.from([0, 4]), hole: Uint8Array.from([0]), piece: Uint32Array.from([0]), pieces: 1 }
+}

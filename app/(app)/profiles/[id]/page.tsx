@@ -14,9 +14,9 @@ import { requireActor } from '@/lib/auth/actor'
 import { orNotFound } from '../../orNotFound'
 
 /** A region up to this size comes with the page, so that the drawing is there at once; a larger one is fetched. */
-const WITH_PAGE = 128 * 1024
+const WITH_PAGE = 48 * 1024
 
-async function smallRegion(db: Db, teamId: string, revisionId: string): Promise<Uint8Array | null> {
+async function smallRegion(db: Db, teamId: string, revisionId: string): Promise<string | null> {
   const { regionBlobId } = await getStored(db, teamId, revisionId)
   const chunks: Uint8Array[] = []
   let bytes = 0
@@ -25,7 +25,7 @@ async function smallRegion(db: Db, teamId: string, revisionId: string): Promise<
     if (bytes > WITH_PAGE) return null
     chunks.push(chunk)
   }
-  return new Uint8Array(Buffer.concat(chunks))
+  return Buffer.concat(chunks).toString('base64')
 }
 
 export async function generateMetadata({ params }: PageProps<'/profiles/[id]'>): Promise<Metadata> {
