@@ -66,6 +66,8 @@ export function createSectionPool(given: Partial<PoolOptions> = {}): SectionPool
   const options = { ...defaultPoolOptions(), ...given }
   const waiting: Waiting[] = []
   const slots: Slot[] = []
+  const servedAt = new Map<string, number>()
+  let turns = 0
   let lastId = 0
   let closed = false
 
@@ -146,11 +148,15 @@ export function createSectionPool(given: Partial<PoolOptions> = {}): SectionPool
     slot.child.kill('SIGKILL')
   }
 
-  /** People take turns: whoever has nothing running comes first, then the longest wait. */
+  /** People take turns: whoever was served longest ago comes next. */
   function nextWaiting(): Waiting | undefined {
-    const served = new Set(slots.map((slot) => slot.item?.person))
-    const at = waiting.findIndex((item) => !served.has(item.person))
-    return waiting.splice(Math.max(0, at), 1)[0]
+    const turn = ({ person }: Waiting) => servedAt.get(person) ?? 0
+    const next = waiting.reduce<Waiting | undefined>((best, item) => (!best || turn(item) < turn(best) ? item : best), undefined)
+    if (next) {
+      waiting.splice(waiting.indexOf(next), 1)
+      servedAt.set(next.person, ++turns)
+    }
+    return next
   }
 
   function idleSlot(): Slot | undefined {
