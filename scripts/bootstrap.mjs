@@ -140,10 +140,12 @@ function sourcesStamp() {
   return hash.digest('hex')
 }
 
-function build() {
+async function build() {
   const stamp = sourcesStamp()
-  const worker = run(process.execPath, ['scripts/build-worker.mjs'])
-  if (!worker) throw new Refusal('The worker could not be built; the lines above say why.')
+  const { ensureBuilt } = await import('./build-worker.mjs')
+  await ensureBuilt().catch(() => {
+    throw new Refusal('The worker could not be built; the lines above say why.')
+  })
   if (isStamped(at(dist, '.setup'), stamp)) return
   console.log('Building the pages; this takes a minute …')
   rmSync(at(dist, '.setup'), { force: true })
@@ -166,7 +168,7 @@ try {
   try {
     installPackages()
     if (wanted.includes('browser')) findBrowser()
-    if (wanted.includes('build')) build()
+    if (wanted.includes('build')) await build()
   } finally {
     rmSync(lock, { recursive: true, force: true })
   }
