@@ -27,11 +27,27 @@ export interface ViewControl {
   goTo: (at: DrawingPoint, size: number) => void
 }
 
+const middleOf = (box: Box) => ({ x: (box.minX + box.maxX) / 2, y: (box.minY + box.maxY) / 2 })
+const sizeOf = (box: Box) => Math.max(box.maxX - box.minX, box.maxY - box.minY)
+
+/** Is it a drawing of another size or at another place, so that the old view shows nothing of use? */
+export function isAnother(before: Box, after: Box): boolean {
+  const growth = sizeOf(after) / sizeOf(before)
+  const a = middleOf(before)
+  const b = middleOf(after)
+  return !(growth > 0.5 && growth < 2) || Math.hypot(a.x - b.x, a.y - b.y) > sizeOf(before) / 2
+}
+
 /** Where the board looks: fitted until somebody moves it. */
 export function useView(extents: Box, viewport: Viewport, inset: Inset): ViewControl {
   const [moved, setMoved] = useState<View | null>(null)
   const [moving, setMoving] = useState(false)
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined)
+  const [fittedTo, setFittedTo] = useState(extents)
+  if (fittedTo !== extents) {
+    setFittedTo(extents)
+    if (isAnother(fittedTo, extents)) setMoved(null)
+  }
   const fitted = fitView(extents, viewport, inset)
   const now = useRef({ fitted, limits: zoomLimits(extents, viewport), viewport })
   useEffect(() => {

@@ -2,46 +2,19 @@
 import { useMe } from '@/components/shell/Me'
 import { formatMoment } from '@/components/ui/dates'
 import type { Event } from '@/lib/api/schemas/event'
+import type { RevisionSummary } from '@/lib/api/schemas/revision'
+import { eventSentence } from './eventSentence'
 
-const FIELDS: Record<string, string> = {
-  title: 'title',
-  drawingNumber: 'drawing number',
-  jobId: 'job',
-  materialId: 'material',
-  ownerId: 'owner',
-  letter: 'revision',
-  state: 'state',
-}
-
-const shown = (value: unknown): string | null =>
-  typeof value === 'string' && !/^[a-z2-7]{26}$/.test(value) ? value : typeof value === 'number' ? String(value) : null
-
-/** What changed, as far as a person can read it: "title from “A” to “B”". */
-function changes({ before, after }: Event): string {
-  if (!before || !after) return ''
-  const parts = Object.keys(after).flatMap((key) => {
-    const name = FIELDS[key]
-    if (!name) return []
-    const from = shown(before[key])
-    const to = shown(after[key])
-    return [from && to ? `${name} from “${from}” to “${to}”` : name]
-  })
-  return parts.length === 0 ? '' : `: ${parts.join(', ')}`
-}
-
-/** What happened to the profile, newest first, in sentences. */
-export function History({ events, total }: { events: Event[]; total: number }) {
+/** What happened to the profile and its revisions, newest first, in sentences. */
+export function History({ events, total, revisions }: { events: Event[]; total: number; revisions: RevisionSummary[] }) {
   const { zone } = useMe()
+  const letterOf = (id: string) => revisions.find((revision) => revision.id === id)?.letter ?? null
   return (
     <>
       <ol className="text-small">
         {events.map((event) => (
           <li key={event.id} className="border-line border-b py-1.5">
-            <span>
-              {event.actor?.name ?? 'The server'} {event.sentence}
-              {changes(event)}.
-            </span>{' '}
-            <span className="whitespace-nowrap text-soft">{formatMoment(event.at, zone)}</span>
+            {eventSentence(event, letterOf)} <span className="whitespace-nowrap text-soft">{formatMoment(event.at, zone)}</span>
           </li>
         ))}
       </ol>

@@ -93,7 +93,11 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
       label: 'Revisions',
       panel: <RevisionsList profileId={profile.id} revisions={revisions} shown={revision.id} />,
     },
-    { key: 'history', label: 'History', panel: events && <History events={events.items} total={events.total} /> },
+    {
+      key: 'history',
+      label: 'History',
+      panel: events && <History events={events.items} total={events.total} revisions={revisions} />,
+    },
   ]
   return (
     <div className="grid grid-cols-1 items-start gap-x-5 gap-y-4 lg:grid-cols-[minmax(0,1fr)_25.5rem] xl:grid-cols-[minmax(0,1fr)_28rem]">

@@ -1,4 +1,5 @@
 'use client'
+import { memo } from 'react'
 import type { HoverStore } from '@/components/board/hover'
 import type { TeamSettings } from '@/lib/api/schemas/people'
 import type { Figure, FigureGroup } from '@/lib/section/figures/figure'
@@ -7,6 +8,7 @@ import { axisNames } from '@/lib/section/naming'
 import type { Section } from '@/lib/section/types'
 import { FigureRow } from './FigureRow'
 import { OriginLegend } from './OriginMark'
+import { writingOf } from './writing'
 
 type Names = ReturnType<typeof axisNames>
 
@@ -30,8 +32,14 @@ function rowsOf(section: Section, group: FigureGroup): Row[] {
   })
 }
 
+interface Props {
+  section: Section
+  display: TeamSettings
+  hover: HoverStore
+}
+
 /** Every figure of the section, from the one table of figures, in groups. */
-export function SectionSheet({ section, display, hover }: { section: Section; display: TeamSettings; hover: HoverStore }) {
+export const SectionSheet = memo(function SectionSheet({ section, display, hover }: Props) {
   const names = axisNames(display.axes)
   return (
     <>
@@ -55,6 +63,7 @@ export function SectionSheet({ section, display, hover }: { section: Section; di
           {group === 'size' && section.mass === undefined && (
             <p className="text-small text-soft">No mass: no material was chosen for this revision.</p>
           )}
+          {group === 'plastic' && <FreeAxes section={section} display={display} />}
           {group === 'principal' && section.theta === null && (
             <p className="text-small text-soft">
               Every axis through the centroid is principal: the two second moments agree within what the drawing's digits tell, so
@@ -66,4 +75,17 @@ export function SectionSheet({ section, display, hover }: { section: Section; di
       <OriginLegend />
     </>
   )
+})
+
+/** Plastic neutral axes that lie in a gap: any place between two metals halves the area, and the modulus is the same. */
+function FreeAxes({ section, display }: Omit<Props, 'hover'>) {
+  const names = axisNames(display.axes)
+  const { length } = writingOf(display)
+  const ranges = Object.entries(section.plastic.atRange ?? {}) as [keyof Names, [number, number]][]
+  return ranges.map(([axis, [from, to]]) => (
+    <p key={axis} className="text-small text-soft">
+      The plastic neutral axis parallel to {names[axis]} may lie anywhere from {length(from)} to {length(to)} from the centroid:
+      no metal lies between. The modulus is the same for all.
+    </p>
+  ))
 }

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
 import { axisRows } from '@/components/sheet/axisRows'
+import { eventSentence } from '@/components/sheet/eventSentence'
 import { roleOf } from '@/components/sheet/makeUp'
 import { contributions, totalPlusMinus } from '@/components/sheet/plusMinus'
 import { shareSummary } from '@/components/sheet/shareWords'
@@ -81,4 +82,33 @@ test('about axis 1 of a Z the second moment is I1 and the product is nil', () =>
   const value = (word: string) => rows.find((row) => row.word === word)?.value ?? Number.NaN
   expect(value('about the axis')).toBeWithin(section?.i1 ?? 0, { relative: 1e-9 })
   expect(value('product')).toBeWithin(0, { absolute: 1e-9 * (section?.ip ?? 0) })
+})
+
+const happened = {
+  id: 'a'.repeat(26),
+  at: '2026-12-01T12:00:00.000Z',
+  actor: { id: 'b'.repeat(26), name: 'Ada Brandt' },
+  verb: 'profile.changed',
+  sentence: 'changed the profile',
+  subjectType: 'profile' as const,
+  subjectId: 'c'.repeat(26),
+  before: null,
+  after: null,
+}
+
+test('a changed title reads from what to what, a changed material by its name only', () => {
+  const before = { title: 'Bar', materialId: 'd'.repeat(26) }
+  const after = { title: 'Frame bar', materialId: 'e'.repeat(26) }
+  const sentence = eventSentence({ ...happened, before, after }, () => null)
+  expect(sentence).toBe('Ada Brandt changed the profile: title from “Bar” to “Frame bar”, material.')
+})
+
+test('an event about a revision names its letter, and what nobody did was done by the server', () => {
+  const stored = {
+    ...happened,
+    actor: null,
+    sentence: 'stored the second opinions on a revision',
+    subjectType: 'revision' as const,
+  }
+  expect(eventSentence(stored, () => 'B')).toBe('The server stored the second opinions on revision B.')
 })

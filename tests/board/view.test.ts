@@ -10,6 +10,7 @@ import {
   zoomAt,
   zoomLimits,
 } from '@/components/board/view'
+import { isAnother } from '@/components/board/useView'
 import { random } from '../support/random'
 
 const box = { minX: -25, minY: 0, maxX: 60, maxY: 118 }
@@ -73,4 +74,10 @@ test('a place is brought to the middle, its size a third of the board', () => {
 test('the SVG transform puts the origin of the paths where toScreen puts it', () => {
   const view = { scale: 4, x: 100, y: 300 }
   expect(transformOf(view, { x: 10, y: 20 })).toBe('translate(140 220) scale(4)')
+})
+
+test('the view stays while the drawing changes a little, and fits anew when the unit makes it 25.4 times larger', () => {
+  expect(isAnother(box, { ...box, maxX: 66 })).toBe(false)
+  expect(isAnother(box, { minX: -25 * 25.4, minY: 0, maxX: 60 * 25.4, maxY: 118 * 25.4 })).toBe(true)
+  expect(isAnother(box, { minX: 400, minY: 0, maxX: 485, maxY: 118 })).toBe(true)
 })
