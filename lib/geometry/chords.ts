@@ -77,7 +77,7 @@ function fits(vertex: Vertex, first: number, last: number, circle: Circle, digit
   }
   if (longest > 2 * circle.r * Math.sin(MOST_TURN / 2) || shortest < 0.8 * longest) return false
   const sagitta = (longest * longest) / (8 * circle.r)
-  const allowed = Math.max(0.02 * sagitta, 3 * digit)
+  const allowed = Math.max(0.002 * sagitta, 3 * digit)
   if (allowed > 0.25 * sagitta) return false
   for (let n = first; n <= last; n++) {
     const [x, y] = vertex(n)
@@ -108,6 +108,27 @@ function runsOf(vertex: Vertex, chords: number, digit: number): Run[] {
     first = last
   }
   return runs
+}
+
+/** Length of chord n, and by how much the walk turns from chord n to the next. */
+function stepAt(vertex: Vertex, n: number): { length: number; turn: number } {
+  const [[ax, ay], [bx, by], [cx, cy]] = [vertex(n), vertex(n + 1), vertex(n + 2)]
+  const [ux, uy, vx, vy] = [bx - ax, by - ay, cx - bx, cy - by]
+  return { length: Math.hypot(ux, uy), turn: Math.atan2(ux * vy - uy * vx, ux * vx + uy * vy) }
+}
+
+const alike = (a: number, b: number) => a * b > 0 && a / b > 0.7 && b / a > 0.7
+
+/** Whether the chords go on beyond either end of a run much as within: then they follow a free curve, not an arc. */
+function goesOn(vertex: Vertex, isLine: (n: number) => boolean, { first, last }: Run): boolean {
+  const inside = stepAt(vertex, (first + last) >> 1)
+  const before = stepAt(vertex, first - 1)
+  const after = stepAt(vertex, last - 1)
+  const beyond = stepAt(vertex, last).length
+  return (
+    (isLine(first - 1) && alike(before.length, inside.length) && alike(before.turn, inside.turn)) ||
+    (isLine(last) && alike(beyond, inside.length) && alike(after.turn, inside.turn))
+  )
 }
 
 function offer(outline: number, vertex: Vertex, { first, last, circle }: Run, middle: [number, number]): ArcOffer {
@@ -158,7 +179,7 @@ export function chordRuns(set: Pick<OutlineSet, 'edges' | 'loopStart' | 'count' 
     const size = loopStart[k + 1] - from
     if (size <= FEWEST) continue
     const turn = firstBreak(edges, from, size)
-    const row = (n: number) => from + ((n + turn) % size)
+    const row = (n: number) => from + ((n + turn + size) % size)
     let middle: [number, number] | null = null
     for (let start = 0; start < size; ) {
       if (edges.kind[row(start)] !== LINE) {
@@ -173,8 +194,10 @@ export function chordRuns(set: Pick<OutlineSet, 'edges' | 'loopStart' | 'count' 
         return [edges.ends[4 * i], edges.ends[4 * i + 1]]
       }
       for (const run of chords >= FEWEST ? runsOf(vertex, chords, lastDigit) : []) {
+        const closed = isClosed(vertex, run)
+        if (!closed && goesOn(vertex, (n) => edges.kind[row(first + n)] === LINE, run)) continue
         middle ??= centroid(edges, from, from + size)
-        for (const part of halves(vertex, run)) offers.push(offer(k, vertex, part, middle))
+        for (const part of closed ? halves(run) : [run]) offers.push(offer(k, vertex, part, middle))
       }
       start += chords
     }
@@ -182,10 +205,13 @@ export function chordRuns(set: Pick<OutlineSet, 'edges' | 'loopStart' | 'count' 
   return offers
 }
 
+function isClosed(vertex: Vertex, { first, last }: Run): boolean {
+  const [a, b] = [vertex(first), vertex(last)]
+  return a[0] === b[0] && a[1] === b[1]
+}
+
 /** A run that closes on itself has no ends of its own: two halves. */
-function halves(vertex: Vertex, run: Run): Run[] {
-  const [a, b] = [vertex(run.first), vertex(run.last)]
-  if (a[0] !== b[0] || a[1] !== b[1]) return [run]
+function halves(run: Run): Run[] {
   const middle = (run.first + run.last) >> 1
   return [
     { ...run, last: middle },

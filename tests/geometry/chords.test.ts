@@ -83,3 +83,11 @@ test('a run that is not in the drawing is named and changes nothing', () => {
   const set = bar(15).outlines({ lastDigit: 0 }, [{ from: [100, 100], through: [105, 105], to: [110, 100] }])
   expect(codesOf(set)).toEqual(['arc-run-not-found', 'chords-on-circle'])
 })
+
+test('an ellipse of 400 chords is a free curve: no arcs are offered', () => {
+  const ellipse = Array.from({ length: 400 }, (_, n): [number, number] => [
+    30 * Math.cos((Math.PI * n) / 200),
+    12 * Math.sin((Math.PI * n) / 200),
+  ])
+  expect(new Drawn().polyline(ellipse).outlines({ lastDigit: 0 }).arcOffers).toEqual([])
+})
