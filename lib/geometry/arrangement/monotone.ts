@@ -1,6 +1,6 @@
 import { bezierXy, turnsOf } from '../bezierXy'
 import { ARC, type EdgeTable, ELLIPSE, LINE } from '../edges'
-import { endOf, pointAt, startOf } from './curve'
+import { endOf, jetAt, pointAt, startOf } from './curve'
 
 /**
  * Edges cut where they turn round in x or y. Piece i is edge[i] from parameter t0[i] to t1[i], in the
@@ -69,29 +69,30 @@ function grow(pieces: Pieces, room: number): void {
 }
 
 /**
- * Parameters strictly inside edge e, in its direction, where its carrier is level or upright: quadrants
- * of an arc, extremes of an ellipse or Bézier. Those within the tolerance of an end or of the one before
- * are left out: the piece is then monotone but for less than the tolerance.
+ * Parameters strictly inside edge e, in its direction, where its carrier is level or upright: quadrants of an arc,
+ * extremes of an ellipse or Bézier. Left out are those beyond which the edge turns back by less than a quarter of the
+ * tolerance before it ends or turns again: it is monotone all but for that, and needs no vertex there.
  */
 export function turningParameters(table: EdgeTable, e: number, tolerance: number): number[] {
   const start = startOf(table, e)
   const end = endOf(table, e)
   const found = table.kind[e] === ARC || table.kind[e] === ELLIPSE ? angles(table, e, start, end) : bezierTurns(table, e)
   found.sort((a, b) => (end > start ? a - b : b - a))
-  const kept: number[] = []
-  const at = new Float64Array(2)
-  const [x0, y0, x1, y1] = table.ends.subarray(4 * e, 4 * e + 4)
-  let x = x0
-  let y = y0
+  const turns: { t: number; axis: number; value: number }[] = []
+  const at = new Float64Array(6)
+  const before = table.ends.slice(4 * e, 4 * e + 2)
   for (const t of found) {
-    pointAt(table, e, t, at)
-    const [px, py] = at
-    if (Math.hypot(px - x, py - y) <= tolerance || Math.hypot(px - x1, py - y1) <= tolerance) continue
-    kept.push(t)
-    x = px
-    y = py
+    jetAt(table, e, t, at)
+    const axis = Math.abs(at[2]) < Math.abs(at[3]) ? 0 : 1
+    if (Math.abs(at[axis] - before[axis]) <= tolerance / 4) continue
+    turns.push({ t, axis, value: at[axis] })
+    before.set(at.subarray(0, 2))
   }
-  return kept
+  for (let last = turns.at(-1); last; last = turns.at(-1)) {
+    if (Math.abs(last.value - table.ends[4 * e + 2 + last.axis]) > tolerance / 4) break
+    turns.pop()
+  }
+  return turns.map(({ t }) => t)
 }
 
 function angles(table: EdgeTable, e: number, start: number, end: number): number[] {

@@ -1,7 +1,7 @@
 import { test } from 'vitest'
 import { edgeAt } from '@/lib/geometry/edges'
 import { random } from '@/tests/support/random'
-import { areaOf, Failures, RUNS, VARIANTS, varied } from './campaign'
+import { areaOf, Failures, perimeterOf, RUNS, VARIANTS, varied } from './campaign'
 import { arrangementOf, type Combined, where } from './combine'
 import { KINDS, pairOf } from './pairs'
 import type { Shape } from './shapes'
@@ -18,13 +18,15 @@ for (const variant of VARIANTS) {
       const aOnly = where(both, ([p, q]) => p && !q)
       const bOnly = where(both, ([p, q]) => !p && q)
       const [A, B] = [areaOf(a), areaOf(b)]
-      failures.check(seed, 'union + common', Math.abs(union.area + common.area - A - B), 1e-9 * (A + B))
-      failures.check(seed, 'A − B', Math.abs(aOnly.area + common.area - A), 1e-9 * A)
-      failures.check(seed, 'B − A', Math.abs(bOnly.area + common.area - B), 1e-9 * B)
+      // where a curve comes within the snap of an edge without a vertex there, the edge bends to it
+      const bent = variant === 'arcs' ? 0 : 0.5 * both.tolerance * (perimeterOf(a) + perimeterOf(b))
+      failures.check(seed, 'union + common', Math.abs(union.area + common.area - A - B), 1e-9 * (A + B) + bent)
+      failures.check(seed, 'A − B', Math.abs(aOnly.area + common.area - A), 1e-9 * A + bent)
+      failures.check(seed, 'B − A', Math.abs(bOnly.area + common.area - B), 1e-9 * B + bent)
       failures.check(seed, 'open ends', union.faults + common.faults + aOnly.faults + bOnly.faults, 0)
       if (seed % 4 === 0) {
         const again = reunited(aOnly, common, [a, b])
-        failures.check(seed, '(A − B) ∪ (A ∩ B)', Math.abs(again - A), 1e-9 * A)
+        failures.check(seed, '(A − B) ∪ (A ∩ B)', Math.abs(again - A), 1e-9 * A + bent)
       }
     }
     failures.expectNone()
