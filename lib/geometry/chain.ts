@@ -16,7 +16,7 @@ export interface Chained {
   /** edges connected with a vertex where more than two meet, one table a net */
   nets: EdgeTable[]
   joins: Join[]
-  /** 1 for each given edge that went into a loop */
+  /** for each given edge 0 where it is in no loop, 1 where a loop walks it as given, 2 where the other way */
   inLoop: Uint8Array
 }
 
@@ -87,9 +87,9 @@ function walk(own: EdgeTable, mate: Int32Array, net: Int32Array | null, snap: nu
       const from = edges.count
       const shapes = edges.shapesUsed
       const area = emitLoop(edges, own, steps, count)
-      if (area > snap * chordLength(edges, from, edges.count)) {
+      if (Math.abs(area) > snap * chordLength(edges, from, edges.count)) {
         loopStart.push(edges.count)
-        for (let n = 0; n < count; n++) inLoop[steps[n] >> 1] = 1
+        for (let n = 0; n < count; n++) inLoop[steps[n] >> 1] = area > 0 === ((steps[n] & 1) === 0) ? 1 : 2
         continue
       }
       edges.count = from

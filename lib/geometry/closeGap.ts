@@ -6,7 +6,7 @@ export interface Closing {
   how: 'carriers extended' | 'joined at the tangent point' | 'ends joined' | 'bridged by a straight edge'
   /** where both ends go; null: they stay and a straight edge joins them */
   meet: [number, number] | null
-  /** signed area between this closing and the other reasonable one, drawing units², positive left of first → second */
+  /** area that the other reasonable closing would add to a loop that is counter-clockwise from p to q, drawing units² */
   area: number
 }
 
@@ -21,7 +21,8 @@ export interface EndRef {
 const SIN_10_DEGREES = Math.sin(Math.PI / 18)
 
 type XY = [number, number]
-const area2 = (a: XY, b: XY, c: XY) => 0.5 * ((b[0] - a[0]) * (c[1] - a[1]) - (b[1] - a[1]) * (c[0] - a[0]))
+/** What a loop gains by going from a to c instead of a to b to c. */
+const shortcut = (a: XY, b: XY, c: XY) => -0.5 * ((b[0] - a[0]) * (c[1] - a[1]) - (b[1] - a[1]) * (c[0] - a[0]))
 
 /** Crossing of the two carriers nearest to the gap; lines and arcs in closed form, other curves by their tangent. */
 function crossing(edges: EdgeTable, p: EndRef, q: EndRef, u: XY, v: XY): XY | null {
@@ -107,10 +108,10 @@ export function closeGap(edges: EdgeTable, p: EndRef, q: EndRef, tolerance: numb
   const sine = Math.abs(u[0] * v[1] - u[1] * v[0])
   if (sine > SIN_10_DEGREES) {
     const meet = crossing(edges, p, q, u, v)
-    if (within(meet, p, q, tolerance)) return { how: 'carriers extended', meet, area: area2(P, meet, Q) }
+    if (within(meet, p, q, tolerance)) return { how: 'carriers extended', meet, area: shortcut(P, meet, Q) }
   } else if (u[0] * v[0] + u[1] * v[1] < 0) {
     const meet = footPoint(edges, p, q, u) ?? footPoint(edges, q, p, v)
-    if (within(meet, p, q, tolerance)) return { how: 'joined at the tangent point', meet, area: area2(P, meet, Q) }
+    if (within(meet, p, q, tolerance)) return { how: 'joined at the tangent point', meet, area: shortcut(P, meet, Q) }
     const overlap = (q.x - p.x) * u[0] + (q.y - p.y) * u[1] < 0
     if (overlap) return { how: 'ends joined', meet: middle(P, Q), area: 0 }
   }
@@ -133,5 +134,5 @@ function swing(edges: EdgeTable, p: EndRef, q: EndRef): number {
   const a = far(p)
   const b = far(q)
   const length = (e: EndRef, f: XY) => Math.hypot(e.x - f[0], e.y - f[1])
-  return length(p, a) <= length(q, b) ? area2(a, [p.x, p.y], [q.x, q.y]) : area2([p.x, p.y], [q.x, q.y], b)
+  return length(p, a) <= length(q, b) ? shortcut(a, [p.x, p.y], [q.x, q.y]) : shortcut([p.x, p.y], [q.x, q.y], b)
 }

@@ -40,7 +40,7 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
   const { loopStart } = first
   addClosed(first.edges, loopStart, edges, sorted.closedRows, sorted.closedStart)
   if (first.nets.length === 0 && first.openStart.length === 1) {
-    const { repairs, findings: closings } = reportJoins(first.joins, () => true, mmPerUnit)
+    const { repairs, findings: closings } = reportJoins(first.joins, first.inLoop, false, mmPerUnit)
     return { ...first, onLoops: null, openStart: Uint32Array.of(0), repairs, findings: [...findings, ...closings] }
   }
   const left = emptyTable()
@@ -68,8 +68,8 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
     second.openStart,
     tolerances.chaining,
   )
-  const before = reportJoins(first.joins, (k) => first.inLoop[k] === 1, mmPerUnit)
-  const after = reportJoins(second.joins, () => true, mmPerUnit)
+  const before = reportJoins(first.joins, first.inLoop, true, mmPerUnit)
+  const after = reportJoins(second.joins, second.inLoop, false, mmPerUnit)
   return {
     edges: first.edges,
     loopStart,

@@ -32,7 +32,10 @@ export function emitChain(to: EdgeTable, from: EdgeTable, steps: ArrayLike<numbe
   }
 }
 
-/** Appends a closed walk as a counter-clockwise loop that begins with its first step's edge; its area. */
+/**
+ * Appends a closed walk as a counter-clockwise loop that begins with its first step's edge. Its area, negative where the
+ * walk had to be turned round.
+ */
 export function emitLoop(to: EdgeTable, from: EdgeTable, steps: Int32Array, count: number): number {
   const first = to.count
   const shapes = to.shapesUsed
@@ -49,5 +52,5 @@ export function emitLoop(to: EdgeTable, from: EdgeTable, steps: Int32Array, coun
     last = emitStep(to, from, step)
   }
   bridge(to, to.count - 1, first)
-  return loopArea(to, first, to.count)
+  return -loopArea(to, first, to.count)
 }

@@ -19,7 +19,7 @@ export const GEOMETRY_FINDINGS = {
   'gap-closed': {
     severity: 'warning',
     say: (p) =>
-      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how})${p.area === 0 ? '' : `; another reasonable closing would change the area by ${text(p.area)} mm²`}. Check the drawing there.`,
+      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how})${p.area === 0 ? '' : `; another reasonable closing would change its area by ${text(p.area)} mm²`}. Check the drawing there.`,
   },
   'chain-open': {
     severity: 'warning',

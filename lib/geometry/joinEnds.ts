@@ -13,6 +13,8 @@ import type { Ends } from './snapEnds'
 /** A gap closed, or a cluster of ends that was not: which edge it belongs to, and what is to be said. */
 export interface Join {
   edge: number
+  /** the end of that edge, 0 or 1 */
+  end: 0 | 1
   repair: Repair | null
   how: string
   /** no wider than the drawing's last digits explain */
@@ -54,7 +56,14 @@ export function joinEnds(own: EdgeTable, ends: Ends, mate: Int32Array, tolerance
     if (meet) for (const e of [p, q]) moveEnd(own, e.row, e.end, meet[0], meet[1])
     mate[found.pairs[j]] = found.pairs[j + 1]
     mate[found.pairs[j + 1]] = found.pairs[j]
-    joins.push({ edge: p.row, repair: { x: 0.5 * (p.x + q.x), y: 0.5 * (p.y + q.y), gap, area }, how, small, finding: null })
+    joins.push({
+      edge: p.row,
+      end: p.end,
+      repair: { x: 0.5 * (p.x + q.x), y: 0.5 * (p.y + q.y), gap, area },
+      how,
+      small,
+      finding: null,
+    })
   }
   merge(
     own,
@@ -67,6 +76,7 @@ export function joinEnds(own: EdgeTable, ends: Ends, mate: Int32Array, tolerance
     const params = { ends: members.length, width: width * mmPerUnit, x, y }
     joins.push({
       edge: row,
+      end: 0,
       repair: null,
       how: '',
       small: false,
@@ -92,22 +102,28 @@ function merge(own: EdgeTable, ends: Ends, mate: Int32Array, clusters: EndRef[][
   }
 }
 
-/** What is to be said of the joins whose edges `keep` takes: gaps that the digits explain in one note. */
+/**
+ * What is to be said of joins: all, or those in loops only; gaps that the digits explain in one note. `inLoop` is the
+ * chain's: with it the areas get the sign they have for the counter-clockwise loop.
+ */
 export function reportJoins(
   joins: Join[],
-  keep: (edge: number) => boolean,
+  inLoop: Uint8Array,
+  loopsOnly: boolean,
   mmPerUnit: number,
 ): { repairs: Repair[]; findings: Finding[] } {
   const repairs: Repair[] = []
   const findings: Finding[] = []
   let widest = 0
   let count = 0
-  for (const { edge, repair, how, small, finding } of joins) {
-    if (!keep(edge)) continue
+  for (const { edge, end, repair, how, small, finding } of joins) {
+    if (loopsOnly && inLoop[edge] === 0) continue
     if (finding) findings.push(finding)
     if (!repair) continue
-    repairs.push(repair)
-    const { x, y, gap, area } = repair
+    const { x, y, gap } = repair
+    // the closing is worked out for a walk that leaves the edge by this end
+    const area = inLoop[edge] === (end === 1 ? 2 : 1) ? -repair.area : repair.area
+    repairs.push({ x, y, gap, area })
     if (small) {
       count++
       widest = Math.max(widest, gap)

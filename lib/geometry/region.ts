@@ -14,11 +14,14 @@ export interface Region {
   pieces: number
 }
 
-/** A repair that joined two ends which did not meet: where, how wide, and the signed area it decided. */
+/**
+ * A repair that joined two ends which did not meet: where, how wide, and the signed area it decided; its share of a second
+ * moment is that area times the square of its distance.
+ */
 export interface Repair {
   x: number
   y: number
   gap: number
-  /** signed area between the closing taken and the other reasonable closing (region's unit²) */
+  /** area that the outline would gain by the other reasonable closing (region's unit²) */
   area: number
 }
