@@ -6,7 +6,7 @@ import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import { useForm } from '@/components/ui/useForm'
 import { sendJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-import { adoptZone } from './signIn'
+import { adoptZone } from './session'
 
 /** Joins a team by a link. `known`: the address has an account here, and its password opens the door. */
 export function AcceptForm({ token, email, known }: { token: string; email: string; known: boolean }) {

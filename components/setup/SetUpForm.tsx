@@ -7,7 +7,7 @@ import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import { useForm } from '@/components/ui/useForm'
 import { sendJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-import { adoptZone } from './signIn'
+import { adoptZone } from './session'
 
 /** The first visit: the team, its administrator, and the demo data where wanted. */
 export function SetUpForm({ codeAsked }: { codeAsked: boolean }) {

@@ -5,7 +5,7 @@ import { Field } from '@/components/ui/Field'
 import { Notice } from '@/components/ui/Notice'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import { useForm } from '@/components/ui/useForm'
-import { adoptZone, signIn } from './signIn'
+import { adoptZone, signIn } from './session'
 
 /** `to` is a path of this app where the person wanted to go. */
 export function SignInForm({ to }: { to: string }) {

@@ -5,10 +5,10 @@ import { Mark } from './Mark'
 export function Door({ title, lead, children }: { title: string; lead?: ReactNode; children: ReactNode }) {
   return (
     <div className="mx-auto grid min-h-dvh max-w-lg content-center gap-6 px-4 py-10">
-      <div className="flex items-center gap-2 font-bold tracking-tight">
+      <header className="flex items-center gap-2 font-bold tracking-tight">
         <Mark />
         Sectionwright
-      </div>
+      </header>
       <main id="main" className="border border-hair bg-sheet px-5 py-6 md:px-8">
         <h1 className="text-2xl font-semibold tracking-tight">{title}</h1>
         {lead && <div className="mt-1 text-soft">{lead}</div>}

@@ -1,8 +1,8 @@
 'use client'
 import { useRouter } from 'next/navigation'
-import { signOut } from 'next-auth/react'
 import { useState } from 'react'
 import { changeMe } from '@/components/people/data'
+import { signOut } from '@/components/setup/session'
 import { Dialog } from '@/components/ui/Dialog'
 import { Menu, type MenuItem } from '@/components/ui/Menu'
 import { problemOf } from '@/components/ui/problem'
@@ -25,6 +25,7 @@ export function PersonMenu({ theme: first }: { theme: Theme }) {
     .join('')
     .toUpperCase()
 
+  const leave = () => signOut().catch((error) => toast(problemOf(error).sentence, { tone: 'error' }))
   const toTeam = async (teamId: string) => {
     try {
       await changeMe({ teamId })
@@ -54,7 +55,7 @@ export function PersonMenu({ theme: first }: { theme: Theme }) {
     ),
     'line',
     { label: `Time zone: ${me.zone}`, onChoose: () => setZoneOpen(true) },
-    { label: 'Sign out', onChoose: () => signOut({ callbackUrl: '/sign-in' }) },
+    { label: 'Sign out', onChoose: leave },
   ]
   return (
     <>

@@ -43,7 +43,7 @@ export function Table<Row>({
   const cellClass = (column: Column<Row>) =>
     classes('py-2 pr-4 last:pr-0', column.figure && 'text-right', column.wide && 'max-md:hidden')
   return (
-    <section aria-label={caption} tabIndex={-1} className="overflow-x-auto">
+    <div className="overflow-x-auto">
       <table aria-busy={busy} className={classes('w-full border-collapse', busy && 'opacity-60')}>
         <caption className="sr-only">{caption}</caption>
         <thead>
@@ -79,7 +79,7 @@ export function Table<Row>({
           ))}
         </tbody>
       </table>
-    </section>
+    </div>
   )
 }
 
