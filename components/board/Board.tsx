@@ -55,7 +55,7 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
   const frame = useMemo(() => ({ view, viewport, extents: model.extents }), [view, viewport, model.extents])
   const base = useMemo(() => annotate(model.section, frame, state.shown, writing), [model.section, frame, state.shown, writing])
   const choices = useLabels(base, model, frame, control.moving)
-  const tool = useTool({ model, state, dispatch, view, viewport, writing })
+  const tool = useTool({ model, state, dispatch, view, viewport, writing, lines: base.lines })
   const { goTo } = control
 
   useEffect(() => {

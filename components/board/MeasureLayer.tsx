@@ -1,7 +1,8 @@
 import { AnnotationLayer } from './AnnotationLayer'
 import { drawDimension } from './dimensionLines'
+import { placeLabels, type Segment } from './labels'
 import type { Snapped } from './snapper'
-import { type DrawingPoint, type ScreenPoint, toScreen, type View } from './view'
+import { type DrawingPoint, type ScreenPoint, toScreen, type View, type Viewport } from './view'
 
 function mark(kind: Snapped['kind'], { x, y }: ScreenPoint): string {
   if (kind === 'end') return `M${x - 5} ${y - 5}h10v10h-10Z`
@@ -15,22 +16,28 @@ export function MeasureLayer({
   points,
   pointer,
   view,
+  viewport,
+  lines,
   length,
 }: {
   points: DrawingPoint[]
   pointer: Snapped | null
   view: View
+  viewport: Viewport
+  /** what the figure must not lie on */
+  lines: Segment[]
   length: (mm: number) => string
 }) {
   const ends = points.length === 1 && pointer ? [points[0], pointer.at] : points
   const [a, b] = ends.map((point) => toScreen(view, point))
   const text = ends.length === 2 ? length(Math.hypot(ends[1].x - ends[0].x, ends[1].y - ends[0].y)) : ''
+  const dimension = a && b && drawDimension({ id: 'measure', a, b, off: 0, text, look: 'hot', textLook: 'principal' })
   return (
     <g pointerEvents="none">
-      {a && b && (
+      {dimension && (
         <AnnotationLayer
-          annotations={drawDimension({ id: 'measure', a, b, off: 0, text, look: 'hot', textLook: 'principal' })}
-          choices={{}}
+          annotations={dimension}
+          choices={placeLabels(dimension.labels, [...lines, ...dimension.lines], viewport)}
         />
       )}
       {points.map((point, k) => {

@@ -11,7 +11,7 @@ export function ZoneMarks({ sheet, view, viewport }: { sheet: Sheet; view: View;
   return (
     <g>
       <path d={borders.join('')} className="fill-none stroke-edge" strokeWidth={1} />
-      <g className="fill-soft font-mono" fontSize={11} textAnchor="middle">
+      <g className="fill-soft stroke-sheet font-mono" fontSize={11} textAnchor="middle" strokeWidth={3} paintOrder="stroke">
         {columns.map(
           ({ text, at }) =>
             at !== null && (

@@ -2,6 +2,7 @@
 import { type Dispatch, type KeyboardEvent, type ReactNode, useMemo, useState } from 'react'
 import type { Writing } from './annotate'
 import type { BoardAction, BoardState } from './boardState'
+import type { Segment } from './labels'
 import { MeasureLayer } from './MeasureLayer'
 import { MeasureReadout } from './MeasureReadout'
 import type { BoardModel } from './model'
@@ -20,6 +21,8 @@ interface Options {
   view: View
   viewport: Viewport
   writing: Writing
+  /** what is drawn already and no figure may lie on */
+  lines: Segment[]
 }
 
 interface ToolControl {
@@ -38,7 +41,7 @@ const ARROWS: Record<string, [number, number]> = {
 }
 
 /** The tool in hand: where its pointer is, what a click and a key do, what it draws. */
-export function useTool({ model, state, dispatch, view, viewport, writing }: Options): ToolControl {
+export function useTool({ model, state, dispatch, view, viewport, writing, lines }: Options): ToolControl {
   const snapper = useMemo(() => snapperOf(model.region), [model.region])
   const [pointer, setPointer] = useState<ScreenPoint | null>(null)
   const snapped: Snapped | null = pointer && snapper(toDrawing(view, pointer), REACH / view.scale)
@@ -76,7 +79,9 @@ export function useTool({ model, state, dispatch, view, viewport, writing }: Opt
     layer: (
       <>
         <UserAxisLayer {...{ model, state, dispatch, view, viewport }} />
-        {state.tool !== 'look' && <MeasureLayer points={state.points} pointer={snapped} view={view} length={writing.length} />}
+        {state.tool !== 'look' && (
+          <MeasureLayer points={state.points} pointer={snapped} {...{ view, viewport, lines }} length={writing.length} />
+        )}
       </>
     ),
     readout:

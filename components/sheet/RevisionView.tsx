@@ -67,7 +67,7 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
   }
   const pick = (id: string | null) => {
     setPicked(id)
-    if (id) setTab('makeUp')
+    if (answer.outlines.some((outline) => outline.id === id)) setTab('makeUp')
   }
 
   const tabs = [

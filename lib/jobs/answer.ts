@@ -1,7 +1,7 @@
 import type { Drawing } from '../dxf/drawing'
 import type { Finding } from '../geometry/finding'
 import type { OutlineSet } from '../geometry/outlineSet'
-import { mmPerUnit, type Recipe } from '../geometry/recipe'
+import { type Does, mmPerUnit, type Recipe } from '../geometry/recipe'
 import { ENGINE_VERSION } from '../section/engineVersion'
 import type { OutlineView, Section, SectionAnswer } from '../section/types'
 
@@ -27,6 +27,8 @@ export interface AnswerParts {
   recipe: Recipe
   drawing: Drawing
   outlines: OutlineSet | null
+  /** what each outline does, in their order */
+  roles: readonly (Does | null)[]
   findings: Finding[]
   /** where more were found than are listed */
   findingsTotal: number
@@ -34,13 +36,22 @@ export interface AnswerParts {
 }
 
 /** The answer as API, command line and screens show it. */
-export function answerOf({ source, recipe, drawing, outlines, findings, findingsTotal, section }: AnswerParts): SectionAnswer {
+export function answerOf({
+  source,
+  recipe,
+  drawing,
+  outlines,
+  roles,
+  findings,
+  findingsTotal,
+  section,
+}: AnswerParts): SectionAnswer {
   return {
     engineVersion: ENGINE_VERSION,
     source,
     recipe,
     unit: { drawing: String(recipe.unit), mmPerUnit: mmPerUnit(recipe), declared: drawing.declared },
-    outlines: outlines ? outlineViews(outlines, drawing) : [],
+    outlines: outlines ? outlineViews(outlines, drawing, roles) : [],
     outlinesTotal: outlines?.count ?? 0,
     findings: listed(findings),
     findingsTotal,
@@ -54,7 +65,7 @@ export function withFindings(answer: SectionAnswer, more: Finding[]): SectionAns
   return { ...answer, findings: listed([...answer.findings, ...more]), findingsTotal: answer.findingsTotal + more.length }
 }
 
-function outlineViews(outlines: OutlineSet, drawing: Drawing): OutlineView[] {
+function outlineViews(outlines: OutlineSet, drawing: Drawing, roles: readonly (Does | null)[]): OutlineView[] {
   const views: OutlineView[] = []
   for (let k = 0; k < Math.min(outlines.count, LISTED); k++) {
     const depth = outlines.depth[k]
@@ -65,6 +76,7 @@ function outlineViews(outlines: OutlineSet, drawing: Drawing): OutlineView[] {
       area: outlines.area[k],
       depth: depth < 0 ? null : depth,
       at: [outlines.at[2 * k], outlines.at[2 * k + 1]],
+      does: roles[k] ?? undefined,
     })
   }
   return views

@@ -72,7 +72,7 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
       const section = isBlocked ? null : figures.section
       const { layers, lineTypes, kinds, spaces } = selection
       return {
-        answer: answerOf({ source, recipe, drawing, outlines, findings, findingsTotal, section }),
+        answer: answerOf({ source, recipe, drawing, outlines, roles: combine.roles, findings, findingsTotal, section }),
         drawing,
         tallies: { layers, lineTypes, kinds, spaces },
         outlines,

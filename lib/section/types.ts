@@ -1,5 +1,5 @@
 import type { Finding } from '../geometry/finding'
-import type { Recipe, XY } from '../geometry/recipe'
+import type { Does, Recipe, XY } from '../geometry/recipe'
 
 /** How a figure was found: in closed form, by iteration to rounding, or by finite elements. */
 export type OriginKind = 'exact' | 'iterated' | 'element'
@@ -78,6 +78,8 @@ export interface OutlineView {
   area: number
   depth: number | null
   at: XY
+  /** what it does in the make-up taken; absent in answers stored before this was told */
+  does?: Does
 }
 
 /** The answer of the engine to bytes and a recipe: what API, command line and screens show. */

@@ -40,18 +40,12 @@ test('by nesting an even depth adds and an odd depth cuts; an outline that cross
   expect(roleOf(crossing, 'o1')).toBe(null)
 })
 
-test('in a stated make-up each outline does what the step nearest to it says, and an outline not named is left out', () => {
-  const outlines = [
-    { id: 'o1', at: [10, 40] as [number, number] },
-    { id: 'o2', at: [38, 40] as [number, number] },
-    { id: 'o3', at: [90, 90] as [number, number] },
-  ]
-  const makeUp = [
-    { at: [38.2, 40] as [number, number], does: 'common' as const },
-    { at: [10, 41] as [number, number], does: 'add' as const },
-  ]
-  const answer = answerWith(plateWithHole(), outlines, { makeUp })
-  expect(outlines.map(({ id }) => roleOf(answer, id))).toEqual(['add', 'common', 'out'])
+test('what the engine tells of an outline counts; where a person stated the make-up and it does not tell, nothing is guessed', () => {
+  const at: [number, number] = [10, 40]
+  const answer = answerWith(plateWithHole(), [{ id: 'o1', at }], { makeUp: [{ at, does: 'common' }] })
+  expect(roleOf(answer, 'o1')).toBe(null)
+  const told = { ...answer, outlines: answer.outlines.map((outline) => ({ ...outline, does: 'common' as const })) }
+  expect(roleOf(told, 'o1')).toBe('common')
 })
 
 test('a drawing writes 50 mm and 90°, not 50.000 mm and 90.000°, and a true minus', () => {

@@ -70,6 +70,7 @@ export const Outline = z.object({
   area: n,
   depth: z.int().nullable(),
   at: z.tuple([n, n]),
+  does: z.enum(['add', 'cut', 'common', 'out']).optional(),
 })
 
 export const SectionAnswer = z.object({
