@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest'
 import { random } from '@/tests/support/random'
-import { areaOf, Failures, perimeterOf, RUNS, VARIANTS, varied } from './campaign'
+import { areaOf, Failures, perimeterOf, runsOf, VARIANTS, varied } from './campaign'
 import { arrangementOf, where } from './combine'
 import { type Kind, pairOf } from './pairs'
 import { mapped, polygon, rectangle, turnAndMove } from './shapes'
@@ -8,9 +8,10 @@ import { mapped, polygon, rectangle, turnAndMove } from './shapes'
 const TOUCHING: Kind[] = ['shared edge', 'tangent outside', 'tangent inside', 'coincident arcs', 'vertex touch', 'identical']
 
 for (const variant of VARIANTS) {
-  test(`touching pairs with ${variant}, moved or turned by 1e-13 … 1e-3, keep their areas to the displacement and close`, () => {
+  const runs = runsOf(variant)
+  test(`${runs} touching pairs with ${variant}, moved or turned by 1e-13 … 1e-3, keep their areas to the displacement and close`, () => {
     const failures = new Failures()
-    for (let n = 1; n <= RUNS; n++) {
+    for (let n = 1; n <= runs; n++) {
       const next = random(n)
       const [a, b] = varied(pairOf(TOUCHING[n % TOUCHING.length], next), variant, next)
       const by = 10 ** (-13 + (n % 11))
