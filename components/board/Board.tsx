@@ -85,7 +85,7 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         aria-label={label}
         aria-describedby={`${id}-keys`}
         viewBox={`0 0 ${viewport.width} ${viewport.height}`}
-        className={`block h-[22rem] w-full select-none outline-accent -outline-offset-2 focus-visible:outline-2 md:h-[min(68vh,46rem)] ${
+        className={`block h-[22rem] w-full select-none outline-accent -outline-offset-2 focus-visible:outline-2 md:h-[clamp(22rem,calc(100dvh-var(--board-around,18rem)),56rem)] ${
           state.tool === 'look' ? 'touch-pan-y' : 'touch-none cursor-crosshair'
         }`}
       >

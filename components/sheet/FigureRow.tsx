@@ -40,7 +40,7 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
         className={classes('relative', hot && 'bg-wash shadow-[-0.5rem_0_0_var(--wash),0.5rem_0_0_var(--wash)]')}
       >
         <th scope="row" className="py-1 pr-2 text-left align-baseline font-normal text-soft max-md:py-2">
-          <span className="grid grid-cols-[4.6rem_1fr] items-baseline">
+          <span className="grid grid-cols-[4.6rem_1fr] items-baseline max-md:grid-cols-[3.9rem_1fr]">
             <b className={classes('font-semibold', hot ? 'text-accent' : 'text-ink')}>
               <SymbolText symbol={figureSymbol(figure, display)} />
             </b>

@@ -117,7 +117,10 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
                 <TitleBlock revision={revision} />
               </Board>
             ) : (
-              <div className="h-[22rem] border border-hair bg-sheet md:h-[min(68vh,46rem)]" aria-busy="true" />
+              <div
+                className="h-[22rem] border border-hair bg-sheet md:h-[clamp(22rem,calc(100dvh-var(--board-around,18rem)),56rem)]"
+                aria-busy="true"
+              />
             )}
           </BoardBoundary>
         )}

@@ -1,9 +1,13 @@
 import type { ReactNode } from 'react'
+import { classes } from '@/components/ui/classes'
 import type { Revision } from '@/lib/api/schemas/revision'
 
-function Cell({ name, children, title }: { name: string; children: ReactNode; title?: string }) {
+function Cell({ name, children, title, wide }: { name: string; children: ReactNode; title?: string; wide?: boolean }) {
   return (
-    <div className="-ml-px min-w-0 border-line border-l px-3 py-1" title={title}>
+    <div
+      className={classes('-ml-px min-w-0 border-line border-l px-3 py-1', wide && 'max-sm:col-span-2 max-sm:border-b')}
+      title={title}
+    >
       <dt className="text-soft text-tiny">{name}</dt>
       <dd className="truncate text-small">{children}</dd>
     </div>
@@ -19,7 +23,7 @@ export function TitleBlock({ revision }: { revision: Revision }) {
   const how = confirmation ? `${confirmation.what}, ${CONFIRMED[confirmation.by]}` : 'Nobody has confirmed the size yet'
   return (
     <dl className="grid grid-cols-2 border-hair border-t sm:grid-cols-[2fr_1fr_1fr_auto]">
-      <Cell name="Drawn in" title={how}>
+      <Cell name="Drawn in" title={how} wide>
         {unit}, {confirmation ? `confirmed by ${createdBy.name}` : <b className="font-semibold text-ochre">size not confirmed</b>}
       </Cell>
       <Cell name="Material" title={material ? `${material.density} kg/m³, ${material.source}` : undefined}>
