@@ -75,6 +75,11 @@ export function runMoments(edges: EdgeTable, from: number, to: number, frame: Fr
  * their sums compensated. Choose the frame's origin within the region, so that nothing is lost to a far origin.
  */
 export function momentsOf(edges: EdgeTable, from: number, to: number, frame: Frame): Moments {
+  if (to - from <= BLOCK) {
+    // most loops are short, and there are many of them
+    runMoments(edges, from, to, frame, block)
+    return { area: block[AREA], u: block[U], v: block[V], uu: block[UU], vv: block[VV], uv: block[UV] }
+  }
   const [a, u, v, uu, vv, uv] = Array.from({ length: 6 }, newSum)
   for (let i = from; i < to; i += BLOCK) {
     runMoments(edges, i, Math.min(to, i + BLOCK), frame, block)
