@@ -1,6 +1,6 @@
 import { derivative, difference, product } from './bernstein'
 import { bezierXy } from './bezierXy'
-import { ARC, ELLIPSE, type EdgeTable, LINE } from './edges'
+import { ARC, type EdgeTable, ELLIPSE, emptyTable, LINE, pushCopy, shapeLength } from './edges'
 import { jetAt, newJet } from './evaluate'
 import { integrate } from './gauss'
 import { compensatedSum } from './sum'
@@ -29,11 +29,18 @@ function polynomialSegment(x: number[], y: number[]): number {
 }
 
 function rationalSegment(edges: EdgeTable, i: number): number {
+  const k = edges.shape[i]
+  const s = edges.shapes
+  const local = emptyTable(1, shapeLength(edges, i))
+  pushCopy(local, edges, i)
+  for (let j = 0; j <= s[k]; j++) {
+    local.shapes[2 + 3 * j] -= s[k + 2]
+    local.shapes[3 + 3 * j] -= s[k + 3]
+  }
   const jet = newJet()
-  const { x: x0, y: y0 } = { ...jetAt(edges, i, 0, jet) }
   const fan = (t: number) => {
-    jetAt(edges, i, t, jet)
-    return 0.5 * ((jet.x - x0) * jet.dy - (jet.y - y0) * jet.dx)
+    jetAt(local, 0, t, jet)
+    return 0.5 * (jet.x * jet.dy - jet.y * jet.dx)
   }
   return integrate(fan, 0, 1)
 }

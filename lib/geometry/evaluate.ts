@@ -25,14 +25,14 @@ function conic(jet: Jet, cx: number, cy: number, ux: number, uy: number, vx: num
 
 const work = new Float64Array(3 * 64)
 
-/** Homogeneous value, first and second derivative of one coordinate: the last three rows of de Casteljau's scheme. */
+/** Homogeneous value and two derivatives: the last three rows of de Casteljau's scheme, about the first control point. */
 function bezier(jet: Jet, s: Float64Array, k: number, t: number): void {
   const n = s[k]
   const w = n < 64 ? work : new Float64Array(3 * (n + 1))
   for (let j = 0; j <= n; j++) {
     const weight = s[k + 4 + 3 * j]
-    w[3 * j] = s[k + 2 + 3 * j] * weight
-    w[3 * j + 1] = s[k + 3 + 3 * j] * weight
+    w[3 * j] = (s[k + 2 + 3 * j] - s[k + 2]) * weight
+    w[3 * j + 1] = (s[k + 3 + 3 * j] - s[k + 3]) * weight
     w[3 * j + 2] = weight
   }
   let ddx = 0
@@ -57,8 +57,8 @@ function bezier(jet: Jet, s: Float64Array, k: number, t: number): void {
   const weight = w[2]
   const x = w[0] / weight
   const y = w[1] / weight
-  jet.x = x
-  jet.y = y
+  jet.x = s[k + 2] + x
+  jet.y = s[k + 3] + y
   jet.dx = (dx - x * dw) / weight
   jet.dy = (dy - y * dw) / weight
   jet.ddx = (ddx - 2 * jet.dx * dw - x * ddw) / weight

@@ -25,17 +25,28 @@ function tenPoints(f: (t: number) => number, from: number, to: number): Estimate
   return { value: half * value, size: Math.abs(half) * size }
 }
 
-function refine(f: (t: number) => number, from: number, to: number, whole: Estimate, allowed: number, depth: number): number {
+function refine(
+  f: (t: number) => number,
+  from: number,
+  to: number,
+  whole: Estimate,
+  allowed: number,
+  offBefore: number,
+  depth: number,
+): number {
   const middle = 0.5 * (from + to)
   const left = tenPoints(f, from, middle)
   const right = tenPoints(f, middle, to)
   const both = left.value + right.value
-  if (depth === DEEPEST || Math.abs(both - whole.value) <= allowed) return both
-  return refine(f, from, middle, left, allowed, depth + 1) + refine(f, middle, to, right, allowed, depth + 1)
+  const off = Math.abs(both - whole.value)
+  // halving that no longer helps has reached the rounding of f itself
+  const stuck = depth > 4 && off > 0.5 * offBefore
+  if (depth === DEEPEST || off <= allowed || stuck) return both
+  return refine(f, from, middle, left, allowed, off, depth + 1) + refine(f, middle, to, right, allowed, off, depth + 1)
 }
 
 /** Integral of a smooth f by ten-point Gauss, halved until it changes by no more than rounding. */
 export function integrate(f: (t: number) => number, from: number, to: number): number {
   const whole = tenPoints(f, from, to)
-  return refine(f, from, to, whole, 4e-15 * whole.size, 0)
+  return refine(f, from, to, whole, 4e-15 * whole.size, Number.POSITIVE_INFINITY, 0)
 }

@@ -47,6 +47,13 @@ test('a rational quadratic quarter circle has length π/2, segment π/4 − 1/2 
   for (const t of [0, 0.2, 0.7, 1]) expect(curvatureOf(jetAt(table, 0, t, jet))).toBeWithin(1, { relative: 1e-13 })
 })
 
+test('at 1e6 from the origin the same quarter circle keeps segment and length to 1e-14', () => {
+  const table = emptyTable()
+  pushBezier(table, 2, true, [1e6 + 1, 1e6, 1, 1e6 + 1, 1e6 + 1, Math.SQRT1_2, 1e6, 1e6 + 1, 1], 0)
+  expect(segmentArea(table, 0)).toBeWithin(Math.PI / 4 - 0.5, { relative: 1e-14 })
+  expect(lengthOf(table, 0)).toBeWithin(Math.PI / 2, { relative: 1e-14 })
+})
+
 test('the cubic (0,0) (0,10) (10,10) (10,0) is at (5, 7.5) in the middle and encloses 60 with its chord', () => {
   const table = emptyTable()
   pushBezier(table, 3, false, [0, 0, 1, 0, 10, 1, 10, 10, 1, 10, 0, 1], 0)
