@@ -107,8 +107,9 @@ export function halfAreaHeight(bundles: Bundles, frame: Frame, minV: number, max
     addChord(bundles, k, frame)
     add(sum, part[0])
   }
+  let step = maxV - minV
   spanRuns(bundles, frame)
-  for (let step = 0; step < 200; step++) {
+  for (let tries = 0; tries < 200; tries++) {
     const area = { ...settled }
     let width = 0
     for (const k of active) {
@@ -134,7 +135,10 @@ export function halfAreaHeight(bundles: Bundles, frame: Frame, minV: number, max
     active = active.subarray(0, kept)
     const newton = c + excess / width
     const next = newton > low && newton < high ? newton : 0.5 * (low + high)
-    if (next === c) break
+    // snapped ends leave the area above a jitter of their own size: steps that no longer shrink have reached it
+    const now = Math.abs(next - c)
+    if (now === 0 || (now < 1e-9 * (maxV - minV) && now > 0.5 * step)) break
+    step = now
     c = next
   }
   return c

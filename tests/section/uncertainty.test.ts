@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, test } from 'vitest'
 import { LINE } from '@/lib/geometry/edges'
 import type { Region } from '@/lib/geometry/region'
+import { transformRegion } from '@/lib/geometry/transform'
 import { FIGURES } from '@/lib/section/figures/index'
 import { sectionOf } from '@/lib/section/section'
 import { randomProfile } from '@/tests/support/profiles'
@@ -26,6 +27,9 @@ function shaken({ edges, loopStart, ...rest }: Region, delta: number, next: () =
   return { edges: { ...edges, ends }, loopStart, ...rest }
 }
 
+/** Figures that say where the section lies. */
+const placed = (key: string): boolean => /^(extents|centroid)\.|^circle\.[xy]$/.test(key)
+
 describe('the ± from the drawing’s digits', () => {
   test('covers what random polygons’ figures do when every corner moves by its last digit', () => {
     fc.assert(
@@ -49,6 +53,28 @@ describe('the ± from the drawing’s digits', () => {
         }
       }),
       { numRuns: RUNS, seed: 20261202 },
+    )
+  })
+})
+
+describe('the ± from the numerics', () => {
+  test('covers what moving profiles of every kind of edge 1e6 mm away does to their figures', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 2 ** 31 }), (seed) => {
+        const region = regionOfProfile(randomProfile(random(seed)))
+        const away = transformRegion(region, { move: { x: 1e6, y: -1e6 } })
+        const before = sectionOf(region, { lastDigit: 0, repairs: [] }).section
+        const after = sectionOf(away, { lastDigit: 0, repairs: [] }).section
+        if (!before || !after) throw new Error('no section')
+        for (const { key, value } of FIGURES) {
+          const was = value(before)
+          const is = value(after)
+          const numerics = after.origin[key]?.plusMinus?.numerics
+          if (typeof was !== 'number' || typeof is !== 'number' || numerics === undefined || placed(key)) continue
+          expect(Math.abs(is - was), `${key}, seed ${seed}`).toBeLessThanOrEqual(numerics)
+        }
+      }),
+      { numRuns: RUNS, seed: 20261203 },
     )
   })
 })
