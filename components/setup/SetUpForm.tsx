@@ -19,10 +19,10 @@ export function SetUpForm({ codeAsked }: { codeAsked: boolean }) {
     code: '',
     demo: true,
   })
-  const setUp = submit(async ({ code, ...fields }) => {
+  const setUp = submit(async ({ code, demo, ...fields }) => {
     await sendJson('POST', keys.setup, z.unknown(), { body: { ...fields, ...(codeAsked ? { code } : {}) } })
     await adoptZone().catch(() => undefined)
-    if (fields.demo) await sendJson('POST', keys.demo, z.unknown())
+    if (demo) await sendJson('POST', keys.demo, z.unknown())
     window.location.assign('/')
   })
   return (

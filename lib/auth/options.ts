@@ -4,12 +4,17 @@ import type { AuthOptions } from 'next-auth'
 import CredentialsProvider from 'next-auth/providers/credentials'
 import { database, inTransaction } from '@/db/instance'
 import { closeSession, findActor, openSession, SESSION_DAYS } from '@/db/sessions'
-import { isAppError } from '@/lib/api/errors'
+import { AppError, isAppError } from '@/lib/api/errors'
 import { config } from '@/lib/config'
 import { log } from '@/lib/log'
 import { addressOf } from './address'
 import { checkPassword } from './signIn'
 
+declare module 'next-auth' {
+  interface User {
+    sessionToken?: string
+  }
+}
 declare module 'next-auth/jwt' {
   interface JWT {
     sessionToken?: string
@@ -32,7 +37,9 @@ export const authOptions = (): AuthOptions => ({
         const { email = '', password = '' } = credentials ?? {}
         try {
           const id = await checkPassword({ email, password, address: addressOf(new Headers({ ...headers })) })
-          return { id }
+          const sessionToken = await inTransaction((trx) => openSession(trx, id))
+          if (!sessionToken) throw new AppError('forbidden')
+          return { id, sessionToken }
         } catch (error) {
           if (isAppError(error)) throw new Error(error.code)
           throw error
@@ -48,12 +55,7 @@ export const authOptions = (): AuthOptions => ({
     },
   },
   callbacks: {
-    jwt: async ({ token, user }) => {
-      if (!user) return token
-      const sessionToken = await inTransaction((trx) => openSession(trx, user.id))
-      if (!sessionToken) throw new Error('forbidden')
-      return { sub: user.id, sessionToken }
-    },
+    jwt: ({ token, user }) => (user ? { sub: user.id, sessionToken: user.sessionToken } : token),
     session: ({ session }) => ({ expires: session.expires }),
   },
   events: {

@@ -13,7 +13,7 @@ process.env.HOST = '0.0.0.0'
 process.env.APP_URL = 'http://localhost:3000'
 process.env.DATA_DIR = mkdtempSync(path.join(os.tmpdir(), 'sectionwright-setup-'))
 
-const body = { team: 'Workshop', name: 'Ann', email: 'Ann@Example.org', password: 'long enough', demo: false }
+const body = { team: 'Workshop', name: 'Ann', email: 'Ann@Example.org', password: 'long enough' }
 
 test('the first visit from beyond this machine needs the printed code, makes team and administrator, and works once', async () => {
   await givenDatabase()

@@ -1,3 +1,4 @@
+import { setTimeout as wait } from 'node:timers/promises'
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
 import { inspect, WHOLE } from './inspect'
@@ -59,6 +60,21 @@ test('an address made up in X-Forwarded-For does not get round the limit of atte
   }
   expect(statuses.slice(0, 5)).toEqual(Array.from({ length: 5 }, () => 'wrong_password'))
   expect(statuses.at(-1)).toBe('too_many')
+})
+
+test('a computation that its person cancels frees the child at once', async () => {
+  const patient = await startServer(newDataDir(), { COMPUTE_SECONDS: '60', COMPUTE_CHILDREN: '1' })
+  const person = await firstPerson(patient.url)
+  const profile = await person.profile()
+  const abort = new AbortController()
+  const cancelled = person.upload(profile, lattice(3000), { signal: abort.signal }).catch(() => 'cancelled')
+  await wait(1500)
+  abort.abort()
+  expect(await cancelled).toBe('cancelled')
+  const started = Date.now()
+  expect((await person.upload(profile, rectanglesDxf([0, 0, 40, 60]))).status).toBe(201)
+  expect(Date.now() - started).toBeLessThan(10_000)
+  await patient.stop()
 })
 
 test('nothing is left of what was stopped or sent away', async () => {

@@ -9,6 +9,12 @@ export interface Answer {
   json: Record<string, unknown>
 }
 
+interface Sending {
+  name?: string
+  key?: string
+  signal?: AbortSignal
+}
+
 /** Somebody with a browser at the server: a session and requests as our pages make them. */
 export class Person {
   constructor(
@@ -40,13 +46,12 @@ export class Person {
   upload(
     profileId: string,
     bytes: Uint8Array<ArrayBuffer> | string,
-    { name = 'a.dxf', key = '', recipe = {} } = {},
+    { name = 'a.dxf', key = '', signal }: Sending = {},
   ): Promise<Answer> {
     const body = new FormData()
-    body.set('recipe', JSON.stringify(recipe))
     body.set('file', new File([bytes], name))
     const headers: Record<string, string> = key ? { 'idempotency-key': key } : {}
-    return this.ask(`/profiles/${profileId}/revisions`, { method: 'POST', body, headers })
+    return this.ask(`/profiles/${profileId}/revisions`, { method: 'POST', body, headers, signal })
   }
 
   async profile(): Promise<string> {

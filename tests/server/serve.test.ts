@@ -33,14 +33,14 @@ function admin(...args: string[]) {
   return { status, said: stdout + stderr }
 }
 
-const signIn = async (password: string) => {
+const signIn = async (password: string, email = 'Ann@Example.org') => {
   const csrf = await fetch(`${server.url}/api/auth/csrf`)
   const { csrfToken } = Object(await csrf.json())
   const cookie = csrf.headers
     .getSetCookie()
     .map((each) => each.split(';')[0])
     .join('; ')
-  const body = new URLSearchParams({ csrfToken, email: 'Ann@Example.org', password, json: 'true', callbackUrl: '/' })
+  const body = new URLSearchParams({ csrfToken, email, password, json: 'true', callbackUrl: '/' })
   return fetch(`${server.url}/api/auth/callback/credentials`, { method: 'POST', body, headers: { cookie, origin: server.url } })
 }
 const sessionOf = (response: Response) =>
@@ -61,9 +61,26 @@ test('signing in gives an opaque HttpOnly cookie, signing out ends it on the ser
   expect(await status()).toBe(401)
 })
 
+test('a body of 100 kB does not reach the sign-in', async () => {
+  const body = new URLSearchParams({ password: 'x'.repeat(100_000) })
+  expect((await fetch(`${server.url}/api/auth/callback/credentials`, { method: 'POST', body })).status).toBe(413)
+})
+
 test('a wrong password opens nothing', async () => {
   const response = await signIn('wrong')
   expect([response.status, sessionOf(response)]).toEqual([401, undefined])
+})
+
+test('who is disabled in every team is told so at the door', async () => {
+  const { json } = await me.post('/invitations', { email: 'out@example.org', roles: ['viewer'] })
+  const token = String(json.url).split('/').at(-1)
+  await me.post('/invitations/accept', { token, name: 'Out', password: 'long enough' })
+  const { items } = Object((await me.ask('/people')).json)
+  const out = Array.from(items, Object).find(({ email }) => email === 'out@example.org')
+  const headers = { 'if-match': '1' }
+  await me.ask(`/people/${out.id}`, { method: 'PATCH', body: JSON.stringify({ disabled: true }), headers })
+  const response = await signIn('long enough', 'out@example.org')
+  expect(Object(await response.json()).url).toContain('error=forbidden')
 })
 
 test('a page carries a policy with a nonce of its own, and sends a stranger to sign in', async () => {

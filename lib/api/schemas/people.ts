@@ -16,7 +16,6 @@ export const SetUp = z.strictObject({
   email,
   password,
   code: z.string().optional(),
-  demo: z.boolean().default(false),
 })
 
 /** GET /api/v1/setup. */

@@ -5,6 +5,14 @@ import { authOptions } from '@/lib/auth/options'
 interface Context {
   params: Promise<{ nextauth: string[] }>
 }
-const handler = (request: NextRequest, context: Context): Promise<Response> => NextAuth(request, context, authOptions())
+const MAX_BYTES = 16 * 1024
+
+/** next-auth reads any body whole, so only one that says it is small comes to it. */
+const isSmall = ({ method, headers }: NextRequest) =>
+  method === 'GET' || Number(headers.get('content-length') ?? Number.POSITIVE_INFINITY) <= MAX_BYTES
+
+async function handler(request: NextRequest, context: Context): Promise<Response> {
+  return isSmall(request) ? NextAuth(request, context, authOptions()) : new Response(null, { status: 413 })
+}
 
 export { handler as GET, handler as POST }
