@@ -64,6 +64,11 @@ export const GEOMETRY_FINDINGS = {
     say: (p) =>
       `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area; left out. Check the drawing there.`,
   },
+  'outline-thin': {
+    severity: 'warning',
+    say: (p) =>
+      `An outline at ${place(p)} is only ${mm(p.width)} wide (twice its area by its perimeter). It counts; check that it is meant.`,
+  },
   'outlines-cross': {
     severity: 'warning',
     say: (p) =>

@@ -1,5 +1,6 @@
 import { acceptArcs } from './acceptedArcs'
 import { boundsOfEdges } from './bounds'
+import { chordLength } from './chordLength'
 import { chordRuns } from './chords'
 import { closedLoops } from './closedLoops'
 import { coincidentLoops } from './coincident'
@@ -100,6 +101,13 @@ export function completed(related: Related, tolerances: Tolerances, mmPerUnit: n
   for (const k of frames) alone[k] = 1
   const { group, groups } = groupOutlines(related, alone)
   const place = (k: number): [number, number] => [at[2 * k], at[2 * k + 1]]
+  for (let k = 0; k < count; k++) {
+    const perimeter = chordLength(related.edges, related.loopStart[k], related.loopStart[k + 1])
+    const width = (2 * related.area[k]) / perimeter
+    if (!(width < tolerances.duplicate)) continue
+    const [x, y] = place(k)
+    findings.push(geometryFinding('outline-thin', { width: width * mmPerUnit, x, y }, [x, y], 0.5 * perimeter))
+  }
   for (const k of frames) {
     const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
     const [width, height] = [(maxX - minX) * mmPerUnit, (maxY - minY) * mmPerUnit]

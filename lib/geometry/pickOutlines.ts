@@ -41,6 +41,7 @@ export function nearestOutlines(set: Pick<OutlineSet, 'edges' | 'loopStart' | 'c
 
 /** Findings that are made anew for the part. */
 const OF_THE_WHOLE: ReadonlySet<string> = new Set<GeometryCode>([
+  'outline-thin',
   'outlines-cross',
   'outlines-touch',
   'outline-crosses-itself',

@@ -91,3 +91,10 @@ test('two rectangles of loose lines that share part of a side are two outlines t
   expect(set.clusters).toEqual([[0, 1]])
   expect(codesOf(set)).toEqual(['outlines-touch'])
 })
+
+test('an outline 20 long and 0.0005 wide counts, and is named with its width as thinner than the duplicate tolerance', () => {
+  const set = new Drawn().rectangle(0, 0, 20, 0.0005).outlines({ duplicate: 0.001 })
+  expect([...set.area]).toEqual([0.01])
+  expect(codesOf(set)).toEqual(['outline-thin'])
+  expect(set.findings[0].params.width).toBeWithin(0.0005, { relative: 1e-4 })
+})

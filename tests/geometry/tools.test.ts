@@ -138,6 +138,25 @@ test('a tube scaled by 25.4, mirrored and turned by 90° has radii 254 and 203.2
   expect(transformEdges(new Drawn().line(1, 2, 3, 4).edges, { turn: 90 }).ends).toEqual(Float64Array.of(-2, 1, -4, 3))
 })
 
+test(`${RUNS} random outlines mirrored as regions stay counter-clockwise, of the same area, joined to the last bit`, () => {
+  seeds((seed) => {
+    const edges = tableOf(randomOutline(random(seed), { x: 5, y: 7 }, 20))
+    const region = {
+      edges,
+      loopStart: Uint32Array.of(0, edges.count),
+      hole: Uint8Array.of(0),
+      piece: Uint32Array.of(0),
+      pieces: 1,
+    }
+    const mirrored = transformRegion(region, { mirror: true, turn: 20 }).edges
+    expect(loopArea(mirrored, 0, edges.count)).toBeWithin(loopArea(edges, 0, edges.count), { relative: 1e-12 })
+    for (let i = 0; i < edges.count; i++) {
+      const next = 4 * ((i + 1) % edges.count)
+      expect(mirrored.ends.slice(4 * i + 2, 4 * i + 4)).toEqual(mirrored.ends.slice(next, next + 2))
+    }
+  })
+})
+
 test(`${RUNS} random outlines packed and unpacked are the same to the last bit`, () => {
   seeds((seed) => {
     const edges = tableOf(randomOutline(random(seed), { x: 1 / 3, y: 1e6 }, 20))
