@@ -49,8 +49,7 @@ function pushFitted(
     mx = ((x1 - x0) * dx + (y1 - y0) * dy) / square
     my = ((y1 - y0) * dx - (x1 - x0) * dy) / square
     if (!(Math.hypot(mx - 1, my) < 0.1)) {
-      const long = from.kind[e] === ARC && Math.abs(from.shapes[from.shape[e] + 4]) > Math.PI
-      if (!long && Math.sqrt(square) < 20 * off) {
+      if (extentOf(from, e) < 20 * off) {
         pushLine(out, x0, y0, x1, y1, source)
         return
       }
@@ -81,4 +80,15 @@ function pushFitted(
       out.ends.set([x0, y0, x1, y1], 4 * i)
     }
   }
+}
+
+/** Distance of the edge's middle or second end from its first end, the greater. */
+function extentOf(table: EdgeTable, e: number): number {
+  const [start, end] = [startOf(table, e), endOf(table, e)]
+  pointAt(table, e, start, q)
+  const [x, y] = q
+  pointAt(table, e, end, q)
+  const chord = Math.hypot(q[0] - x, q[1] - y)
+  pointAt(table, e, (start + end) / 2, q)
+  return Math.max(chord, Math.hypot(q[0] - x, q[1] - y))
 }
