@@ -16,8 +16,9 @@ export function principalAngle(ix: number, iy: number, ixy: number): number {
 }
 
 /**
- * The angle in (−90, 90]: what lies within its own uncertainty of −90° is given as +90°, so that an upright section and one a
- * hair's breadth off do not differ by half a turn.
+ * The angle in (−90, 90]: what lies within its numerical uncertainty of −90° is given as +90°, so that rounding does not turn an
+ * upright section's axes by half a turn. The drawing's digits do not count here: the step to 90° would be larger than the angle's
+ * promised accuracy.
  */
 export function inHalfTurn(theta: number, uncertainty: number): number {
   return theta <= -90 + uncertainty ? Math.min(90, theta + 180) : Math.min(90, theta)
@@ -49,7 +50,7 @@ export function principalOf(
   const ip = i1 + i2
   const fromDigits = digits ? (digits.xx + digits.yy) / ip : 0
   if ((i1 - i2) / ip <= Math.max(ROUND, 4 * fromDigits)) return { i1, i2, theta: null }
-  const changed = (digits ? digits.xx + digits.yy : 0) + numerics.xx + numerics.yy + 2 * numerics.relative * ip
+  const changed = numerics.xx + numerics.yy + 2 * numerics.relative * ip
   const theta = guess + principalAngle(major, minor, rest)
   return { i1, i2, theta: inHalfTurn(theta, (90 / Math.PI) * (changed / (i1 - i2))) }
 }

@@ -134,6 +134,7 @@ describe('every axis principal', () => {
     expect(sectionFor(transformRegion(flat, { turn: -90 + 1e-12 })).theta).toBeWithin(90, { absolute: 1e-9 })
     expect(sectionFor(transformRegion(flat, { turn: -89.99 })).theta).toBeWithin(-89.99, { absolute: 1e-9 })
     expect(sectionFor(transformRegion(flat, { turn: 90 })).theta).toBe(90)
+    expect(sectionFor(transformRegion(flat, { turn: -89.999 }), 0.0005).theta).toBeWithin(-89.999, { absolute: 1e-9 })
   })
 })
 
