@@ -48,7 +48,7 @@ export function statedSteps(
   makeUp: MakeUpStep[],
   taken: Uint8Array,
 ): { steps: Step[]; materials: (string | null)[]; off: number[] } {
-  const outlines = nearestOutlines(
+  const outlines = namedOutlines(
     set,
     makeUp.map(({ at }) => at),
   )
@@ -65,6 +65,28 @@ export function statedSteps(
     return { outline, does: used, material: used === 'add' ? indexOf(material ?? null) : 0 }
   })
   return { steps, materials, off }
+}
+
+/**
+ * The outline each point names: the one whose own point it is, to the last bit, where that is one only (a point that
+ * lies on two outlines still means the one it was given for), else the nearest.
+ */
+function namedOutlines(set: OutlineSet, points: XY[]): Int32Array {
+  const own = new Map<string, number>()
+  for (let k = 0; k < set.count; k++) {
+    const key = `${set.at[2 * k]},${set.at[2 * k + 1]}`
+    own.set(key, own.has(key) ? -1 : k)
+  }
+  const outlines = Int32Array.from(points, ([x, y]) => own.get(`${x},${y}`) ?? -1)
+  const rest = points.flatMap((_, n) => (outlines[n] < 0 ? [n] : []))
+  const nearest = nearestOutlines(
+    set,
+    rest.map((n) => points[n]),
+  )
+  rest.forEach((n, r) => {
+    outlines[n] = nearest[r]
+  })
+  return outlines
 }
 
 function distanceTo(set: OutlineSet, outline: number, [x, y]: XY): number {

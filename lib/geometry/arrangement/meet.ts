@@ -20,7 +20,7 @@ export function meetPieces(pieces: Pieces, i: number, j: number, tolerance: numb
   const { table, edge } = pieces
   const ki = table.kind[edge[i]]
   const kj = table.kind[edge[j]]
-  if (ki === LINE && kj === LINE) lineLine(pieces, i, j, meet)
+  if (ki === LINE && kj === LINE) lineLine(pieces, i, j, tolerance, meet)
   else if (ki === LINE && kj !== BEZIER) lineConic(pieces, i, j, tolerance, meet)
   else if (kj === LINE && ki !== BEZIER) lineConic(pieces, j, i, tolerance, meet)
   else if (ki === ARC && kj === ARC) arcArc(pieces, i, j, tolerance, meet)
@@ -50,7 +50,8 @@ function meetEnds(pieces: Pieces, i: number, j: number, tolerance: number, meet:
   return found
 }
 
-function lineLine(pieces: Pieces, i: number, j: number, meet: Meet): void {
+/** The crossing of two lines by robust orientation; of nearly collinear ones only where both parameters tell one place. */
+function lineLine(pieces: Pieces, i: number, j: number, tolerance: number, meet: Meet): void {
   const e = pieces.ends
   const [ax, ay, bx, by] = [e[4 * i], e[4 * i + 1], e[4 * i + 2], e[4 * i + 3]]
   const [cx, cy, dx, dy] = [e[4 * j], e[4 * j + 1], e[4 * j + 2], e[4 * j + 3]]
@@ -62,7 +63,9 @@ function lineLine(pieces: Pieces, i: number, j: number, meet: Meet): void {
   if (!((a > 0 && b < 0) || (a < 0 && b > 0))) return
   const ti = a / (a - b)
   const tj = c / (c - d)
-  meet(i, ti, j, tj, ax + ti * (bx - ax), ay + ti * (by - ay))
+  const x = ax + ti * (bx - ax)
+  const y = ay + ti * (by - ay)
+  if (Math.hypot(cx + tj * (dx - cx) - x, cy + tj * (dy - cy) - y) <= tolerance / 4) meet(i, ti, j, tj, x, y)
 }
 
 const within = (t: number, a: number, b: number) => (a < b ? t > a && t < b : t > b && t < a)

@@ -15,6 +15,9 @@ const RULES: Record<Does, (metal: boolean, shape: boolean) => boolean> = {
   out: (metal) => metal,
 }
 
+/** Seeds that once failed: nearly collinear lines whose crossing was placed by rounding. */
+const ONCE_WRONG = [594, 856]
+
 const gridShape = (next: () => number): Shape => {
   const whole = (low: number, high: number) => low + Math.floor(next() * (high - low + 1))
   const [x, y, w, h] = [whole(0, 30), whole(0, 30), 2 * whole(1, 8), 2 * whole(1, 8)]
@@ -25,7 +28,7 @@ const gridShape = (next: () => number): Shape => {
 
 test(`${RUNS} random make-ups of 2 to 12 outlines give what the steps give one after another, to 1e-9`, () => {
   const failures = new Failures()
-  for (let seed = 1; seed <= RUNS; seed++) {
+  for (const seed of [...Array.from({ length: RUNS }, (_, n) => n + 1), ...ONCE_WRONG]) {
     const next = random(seed)
     const by = seed % 2 === 0 ? turnAndMove(6.3 * next(), 9 * next(), 9 * next()) : turnAndMove(0, 0, 0)
     const shapes = Array.from({ length: 2 + Math.floor(11 * next()) }, () => mapped(gridShape(next), by))
