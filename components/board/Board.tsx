@@ -27,6 +27,8 @@ import { sheetAround } from './zones'
 /** Room around what is fitted: for axes, their names, dimensions and the zones' marks, px. */
 const INSET = { top: 92, right: 84, bottom: 76, left: 96 }
 const NARROW_INSET = { top: 64, right: 50, bottom: 58, left: 74 }
+/** The drawing takes the focus, as any part that is worked by keys. */
+const FOCUSABLE = { tabIndex: 0 }
 /** How near an outline the pointer must be to pick it, px. */
 const REACH = 8
 
@@ -73,14 +75,14 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
     },
     click: (at) => (state.tool === 'look' ? onPick?.(pick(at.x, at.y)) : tool.click(at)),
   })
-  const keys = useBoardKeys({ control, viewport, tool: state.tool, dispatch, toolKey: tool.key })
+  const onKeyDown = useBoardKeys({ control, viewport, tool: state.tool, dispatch, toolKey: tool.key })
 
   return (
-    <div className="grid grid-cols-1 border border-hair bg-sheet">
+    <section aria-label="Board" onKeyDown={onKeyDown} className="grid grid-cols-1 border border-hair bg-sheet">
       <svg
         ref={svg}
         {...gestures}
-        {...keys}
+        {...FOCUSABLE}
         role="application"
         aria-label={label}
         aria-describedby={`${id}-keys`}
@@ -115,6 +117,6 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         {tool.readout || <Legend model={model} shown={state.shown} names={writing.names} />}
       </div>
       {children}
-    </div>
+    </section>
   )
 }

@@ -22,7 +22,7 @@ interface Options {
   toolKey: (event: KeyboardEvent) => boolean
 }
 
-/** All that the board does, by keys while it has the focus: attributes for the element that takes it. */
+/** All that the board does, by keys while it or its tools have the focus. */
 export function useBoardKeys({ control, viewport, tool, dispatch, toolKey }: Options) {
   const middle = { x: viewport.width / 2, y: viewport.height / 2 }
   const actions: Record<string, () => void> = {
@@ -46,6 +46,8 @@ export function useBoardKeys({ control, viewport, tool, dispatch, toolKey }: Opt
       return
     }
     if (command || event.altKey) return
+    const onBoard = event.target instanceof SVGElement
+    if (!onBoard && (event.key.startsWith('Arrow') || event.key === 'Enter')) return
     if (tool !== 'look' && toolKey(event)) {
       event.preventDefault()
       return
@@ -58,5 +60,5 @@ export function useBoardKeys({ control, viewport, tool, dispatch, toolKey }: Opt
     event.preventDefault()
     act()
   }
-  return { tabIndex: 0, onKeyDown }
+  return onKeyDown
 }

@@ -1,7 +1,9 @@
 import type { Annotations, TextLabel } from '@/components/board/annotation'
 import { annotate, type Writing } from '@/components/board/annotate'
-import { placeLabels } from '@/components/board/labels'
+import { placeLabels, type Segment } from '@/components/board/labels'
 import { centroidMark, hatchLines, hatchShift } from '@/components/board/marks'
+import { outlineSegments } from '@/components/board/outlineSegments'
+import { polylineOf } from '@/components/board/polyline'
 import { boxOfRegion } from '@/components/board/regionModel'
 import { type Box, fitView, toScreen, transformOf, type View } from '@/components/board/view'
 import { sheetAround, zoneMarks } from '@/components/board/zones'
@@ -75,8 +77,8 @@ function zones(box: Box, view: View, mono: Typeface): string {
   ].join('')
 }
 
-function annotations({ strokes, labels, lines }: Annotations, faces: PictureOptions['faces']): string {
-  const chosen = placeLabels(labels, lines, VIEWPORT)
+function annotations({ strokes, labels, lines }: Annotations, metalEdges: Segment[], faces: PictureOptions['faces']): string {
+  const chosen = placeLabels(labels, [...lines, ...metalEdges], VIEWPORT)
   const label = ({ id, text, places, size, mono, look, turned }: TextLabel) => {
     const { x, y } = places[chosen[id]]
     const transform = turned ? `rotate(-90 ${x} ${y})` : undefined
@@ -91,6 +93,11 @@ function annotations({ strokes, labels, lines }: Annotations, faces: PictureOpti
     }),
     ...labels.map(label),
   ].join('')
+}
+
+function edgesOf({ edges, loopStart, hole }: Region, view: View): Segment[] {
+  const loops = Array.from(hole, (_, k) => ({ polyline: polylineOf(edges, loopStart[k], loopStart[k + 1]) }))
+  return outlineSegments(loops, view, VIEWPORT)
 }
 
 function centroid(at: { x: number; y: number }, view: View): string {
@@ -163,7 +170,7 @@ export function pictureSvg(answer: SectionAnswer, region: Region, options: Pictu
       element('rect', { width: WIDTH, height: HEIGHT, fill: SHEET }),
       zones(box, view, options.faces.mono),
       metal(region, box, view),
-      annotations(annotate(answer.section, frame, SHOWN, options.writing), options.faces),
+      annotations(annotate(answer.section, frame, SHOWN, options.writing), edgesOf(region, view), options.faces),
       answer.section ? centroid(answer.section.centroid, view) : '',
       scaleBar(view, options),
       titleBlock(answer, options),

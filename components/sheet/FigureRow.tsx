@@ -1,14 +1,16 @@
 'use client'
-import { useId, useState } from 'react'
+import { type KeyboardEvent, useId, useState } from 'react'
 import type { HoverStore } from '@/components/board/hover'
 import { useHover } from '@/components/board/useHover'
 import { classes } from '@/components/ui/classes'
+import { toast } from '@/components/ui/toastStore'
 import { UnitText } from '@/components/ui/UnitText'
 import type { TeamSettings } from '@/lib/api/schemas/people'
 import type { Figure } from '@/lib/section/figures/figure'
 import { figureSymbol, figureWord } from '@/lib/section/naming'
 import type { Origin } from '@/lib/section/types'
-import { format } from '@/lib/units/format'
+import { format, plain } from '@/lib/units/format'
+import { copyText } from './copyText'
 import { FigureDetail } from './FigureDetail'
 import { OriginMark } from './OriginMark'
 import { totalPlusMinus } from './plusMinus'
@@ -32,6 +34,11 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
   const kind = origin?.kind ?? figure.origin
   const show = () => hover.set({ kind: 'figure', key })
   const hide = () => hover.set(null)
+  const copyByKey = async (event: KeyboardEvent) => {
+    if (event.key.toLowerCase() !== 'c' || event.ctrlKey || event.metaKey) return
+    const digits = plain(value, figure.dimension, display)
+    if (await copyText(digits)) toast(`Copied ${digits}`)
+  }
   return (
     <>
       <tr
@@ -52,7 +59,9 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
             type="button"
             aria-expanded={open}
             aria-controls={open ? id : undefined}
-            title="How sure, all digits, copy"
+            title="Its ± and all digits; C copies it"
+            aria-keyshortcuts="C"
+            onKeyDown={copyByKey}
             onClick={() => setOpen(!open)}
             onFocus={show}
             onBlur={hide}

@@ -83,6 +83,12 @@ test('the shares about x come in words and as bars', async ({ page }) => {
   await expect(strip).toContainText(/Half of Ix comes from 1\d\u2009% of the metal, beyond 3\d\.\d+ mm/)
 })
 
+test('C on a figure copies it with every digit, also where the page has no clipboard of its own', async ({ page }) => {
+  await page.evaluate(() => Object.defineProperty(window, 'isSecureContext', { value: false }))
+  await row(page, 'second moment about x').getByRole('button').press('c')
+  await expect(page.getByText(/^Copied 692776\.725/)).toBeVisible()
+})
+
 test('units, symbols and axis names switch on the page', async ({ page }) => {
   const choose = async (name: string) => {
     await page.getByRole('button', { name: 'Units, symbols and axis names' }).click()
