@@ -161,13 +161,12 @@ function measure(drawing, { peer, limit }) {
   const error = Math.max(...[...results.warm, ...results.cold].map((result) => errorOf(result, drawing.expected)))
   const time = (name, key) => median((results[name] ?? []).map(({ seconds }) => seconds?.[key] ?? Number.NaN))
   const of = (name, key) => median((results[name] ?? []).map((result) => result[key]))
-  const core = time('warm', 'read') + time('warm', 'chain') + time('warm', 'integrals')
   return {
     drawing,
     error,
     right: error <= drawing.accept,
     total: time('warm', 'total'),
-    core,
+    core: time('warm', 'core'),
     peerTotal: time('peer', 'total'),
     limitTotal: time('limit', 'total'),
     wall: of('cold', 'wall'),
