@@ -7,10 +7,10 @@ import { Button } from '@/components/ui/Button'
 import { Field, Select } from '@/components/ui/Field'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import { useForm } from '@/components/ui/useForm'
+import { keys } from '@/lib/api/keys'
 import { Profile } from '@/lib/api/schemas/profile'
-import { addProfile, changeProfile, JOBS, useJobs } from './data'
-
-const ALL_JOBS = `${JOBS}?sort=number&dir=desc&limit=200`
+import { addProfile, changeProfile, useJobs } from './data'
+import { ALL_JOBS } from './lists'
 
 const valuesOf = (profile: Profile) => ({
   jobId: profile.job.id,
@@ -30,7 +30,7 @@ export function ProfileForm({
   jobId?: string
   onDone: (profile: Profile) => void
 }) {
-  const jobs = useJobs(ALL_JOBS).data?.items ?? []
+  const jobs = useJobs(keys.jobs(ALL_JOBS)).data?.items ?? []
   const materials = useMaterials().data ?? []
   const people = usePeople().data ?? []
   const [seen, setSeen] = useState(profile)
@@ -53,6 +53,9 @@ export function ProfileForm({
       <Field {...text('title')} label="Title" required maxLength={160} hint="For example: Mullion 60 × 118, drained" autoFocus />
       <Select {...text('jobId')} label="Job" required>
         <option value="">Choose a job</option>
+        {values.jobId && !jobs.some(({ id }) => id === values.jobId) && (
+          <option value={values.jobId}>{profile?.job.id === values.jobId ? profile.job.number : 'This job'}</option>
+        )}
         {jobs.map((job) => (
           <option key={job.id} value={job.id}>
             {job.number} {job.title}

@@ -4,3 +4,6 @@ import type { ListDefaults } from '@/components/lists/listPath'
 export const JOB_LIST: ListDefaults = { sort: 'updatedAt', dir: 'desc' }
 export const PROFILE_LIST: ListDefaults = { sort: 'updatedAt', dir: 'desc' }
 export const jobProfiles = (jobId: string): ListDefaults => ({ sort: 'number', dir: 'asc', fixed: { jobId } })
+
+/** Every job, newest first, as a form offers them. */
+export const ALL_JOBS = { sort: 'number', dir: 'desc', limit: 200 }

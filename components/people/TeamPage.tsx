@@ -10,7 +10,7 @@ export function TeamPage() {
   return (
     <>
       <PageHead title={team.name} />
-      <div className="grid max-w-5xl gap-2">
+      <div className="grid max-w-5xl grid-cols-[minmax(0,1fr)] gap-2">
         <PeopleTable />
         <TeamSettings />
         <MaterialsTable />

@@ -13,6 +13,20 @@ export interface MenuItem {
   danger?: boolean
 }
 
+type Place = Record<'top' | 'bottom' | 'left' | 'right', number | undefined>
+
+/** Fixed to the window, so that no scrolling table cuts the menu off; above the button where there is no room below. */
+function placeUnder({ top, bottom, left, right }: DOMRect, align: 'left' | 'right'): Place {
+  const { clientWidth, clientHeight } = document.documentElement
+  const above = bottom > 0.6 * clientHeight
+  return {
+    top: above ? undefined : bottom + 4,
+    bottom: above ? clientHeight - top + 4 : undefined,
+    left: align === 'left' ? left : undefined,
+    right: align === 'right' ? clientWidth - right : undefined,
+  }
+}
+
 /** A button with a menu under it: arrow keys walk, Escape closes, a click outside closes. */
 export function Menu({
   label,
@@ -28,19 +42,29 @@ export function Menu({
   className?: string
 }) {
   const id = useId()
-  const [open, setOpen] = useState(false)
+  const [place, setPlace] = useState<Place | null>(null)
+  const open = place !== null
+  const setOpen = (next: boolean) =>
+    setPlace(next && button.current ? placeUnder(button.current.getBoundingClientRect(), align) : null)
   const root = useRef<HTMLDivElement>(null)
   const button = useRef<HTMLButtonElement>(null)
   const entries = () => [...(root.current?.querySelectorAll<HTMLElement>('[role^=menuitem]') ?? [])]
 
   useEffect(() => {
     if (!open) return
-    root.current?.querySelector<HTMLElement>('[role^=menuitem]')?.focus()
+    root.current?.querySelector<HTMLElement>('[role^=menuitem]')?.focus({ preventScroll: true })
     const outside = (event: PointerEvent) => {
-      if (event.target instanceof Node && !root.current?.contains(event.target)) setOpen(false)
+      if (event.target instanceof Node && !root.current?.contains(event.target)) setPlace(null)
     }
+    const away = () => setPlace(null)
     document.addEventListener('pointerdown', outside)
-    return () => document.removeEventListener('pointerdown', outside)
+    window.addEventListener('resize', away)
+    document.addEventListener('scroll', away, { capture: true, passive: true })
+    return () => {
+      document.removeEventListener('pointerdown', outside)
+      window.removeEventListener('resize', away)
+      document.removeEventListener('scroll', away, { capture: true })
+    }
   }, [open])
 
   const close = () => {
@@ -80,10 +104,8 @@ export function Menu({
           aria-label={name}
           tabIndex={-1}
           onKeyDown={onKeyDown}
-          className={classes(
-            'absolute z-10 mt-1 min-w-56 rounded border border-hair bg-sheet py-1',
-            align === 'right' ? 'right-0' : 'left-0',
-          )}
+          style={place}
+          className="fixed z-10 max-h-[80vh] min-w-56 overflow-y-auto rounded border border-hair bg-sheet py-1 text-left font-sans"
         >
           {items.map((item, i) => {
             if (item === 'line') return <hr key={`line-${String(i)}`} className="my-1 border-line" />

@@ -44,7 +44,7 @@ export function Table<Row>({
     classes('py-2 pr-4 last:pr-0', column.figure && 'text-right', column.wide && 'max-md:hidden')
   return (
     <div className="overflow-x-auto">
-      <table aria-busy={busy} className={classes('w-full border-collapse', busy && 'opacity-60')}>
+      <table aria-busy={busy} className="w-full border-collapse">
         <caption className="sr-only">{caption}</caption>
         <thead>
           <tr className="border-b border-hair text-left text-small text-soft">

@@ -2,10 +2,10 @@ import type { Metadata } from 'next'
 import { Fallback } from '@/components/lists/Fallback'
 import { TeamPage } from '@/components/people/TeamPage'
 import { database } from '@/db/instance'
-import { requireActor } from '@/lib/auth/actor'
 import { listMaterials } from '@/db/materials'
 import { listPeople } from '@/db/people'
 import { keys } from '@/lib/api/keys'
+import { requireActor } from '@/lib/auth/actor'
 
 export const metadata: Metadata = { title: 'Team' }
 
