@@ -56,7 +56,9 @@ export function Menu({
     const outside = (event: PointerEvent) => {
       if (event.target instanceof Node && !root.current?.contains(event.target)) setPlace(null)
     }
-    const away = () => setPlace(null)
+    const away = ({ target }: Event) => {
+      if (!(target instanceof Node && root.current?.contains(target))) setPlace(null)
+    }
     document.addEventListener('pointerdown', outside)
     window.addEventListener('resize', away)
     document.addEventListener('scroll', away, { capture: true, passive: true })

@@ -43,7 +43,7 @@ export function Table<Row>({
   const cellClass = (column: Column<Row>) =>
     classes('py-2 pr-4 last:pr-0', column.figure && 'text-right', column.wide && 'max-md:hidden')
   return (
-    <div className="overflow-x-auto">
+    <div className="relative overflow-x-auto">
       <table aria-busy={busy} className="w-full border-collapse">
         <caption className="sr-only">{caption}</caption>
         <thead>
