@@ -15,7 +15,7 @@ export interface Label {
 }
 
 /** Room kept between a label and the lines around it, px. */
-const CLEAR = 2
+const CLEAR = 4
 
 export function boxAt(label: Pick<Label, 'width' | 'height'>, at: ScreenPoint): Box {
   const w = label.width / 2 + CLEAR
