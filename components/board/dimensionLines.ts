@@ -52,7 +52,7 @@ export function drawDimension({ id, a, b, off, text, look = 'dimension', textLoo
   const upright = Math.abs(d.x) < 0.26
   const places = (size: { width: number; height: number }) =>
     [0.5, 0.32, 0.68, 0.2, 0.8].flatMap((t) => {
-      const away = clearance(size, n) + 4
+      const away = clearance(size, n) + 6
       const above = upright || n.y > 0 ? -1 : 1
       return [away, -away].map((shift) => along(along(from, d, t * length), n, (upright ? side : above) * shift))
     })
