@@ -92,7 +92,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
         ),
         sort,
         figure: true,
-        wide: key === 'area' || key === 'circle' || key === 'iy',
+        wide: key !== 'mass',
         plainHead: `${name}${sub ?? ''} [${unit}]`,
         plain: ({ latest }) => latest?.figures[key] ?? null,
         cell: ({ latest }) => <FigureText value={latest?.figures[key] ?? null} quantity={quantity} />,

@@ -1,11 +1,14 @@
 'use client'
-import { useRouter, useSearchParams } from 'next/navigation'
+import { usePathname, useRouter, useSearchParams } from 'next/navigation'
 import { type FormEvent, useEffect, useRef } from 'react'
+import { classes } from '@/components/ui/classes'
 
 /** The search of every page; the key "/" goes there from anywhere but a field. */
 export function Search() {
   const router = useRouter()
   const asked = useSearchParams().get('q') ?? ''
+  // on a phone the list's own field is enough
+  const listed = usePathname() === '/profiles'
   const input = useRef<HTMLInputElement>(null)
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
@@ -23,7 +26,7 @@ export function Search() {
     router.push(text ? `/profiles?q=${encodeURIComponent(text)}` : '/profiles')
   }
   return (
-    <search className="ml-auto w-76 max-lg:w-60 max-md:order-3 max-md:w-full">
+    <search className={classes('ml-auto w-76 max-lg:w-60 max-md:order-3 max-md:w-full', listed && 'max-md:hidden')}>
       <form onSubmit={onSubmit}>
         <input
           key={asked}
