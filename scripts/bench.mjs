@@ -17,6 +17,7 @@ fixtures/cases and on generated ones, checks every result and prints medians and
   --kinds LIST     lines,lwpolyline (default both)
   --no-cases       generated drawings only
   --no-peer        product and limit only
+  --http           the built server's rate of JSON reads and the time of a save, instead of drawings
   --help           print this`
 
 const { values: options } = parseArgs({
@@ -27,11 +28,18 @@ const { values: options } = parseArgs({
     kinds: { type: 'string', default: 'lines,lwpolyline' },
     'no-cases': { type: 'boolean', default: false },
     'no-peer': { type: 'boolean', default: false },
+    http: { type: 'boolean', default: false },
     help: { type: 'boolean', default: false },
   },
 })
 if (options.help) {
   console.log(USAGE)
+  process.exit(0)
+}
+
+if (options.http) {
+  const { benchHttp } = await import('./bench-http.mjs')
+  await benchHttp({ seconds: options.quick ? 2 : 5, connections: 8, rounds: Number(options.runs ?? 3) })
   process.exit(0)
 }
 
