@@ -6,7 +6,7 @@ import { random } from '@/tests/support/random'
 import { areaOf, Failures, RUNS } from './campaign'
 import { arrangementOf, where } from './combine'
 import { measured, setOf } from './setOf'
-import { circle, mapped, rectangle, rounded, type Shape, turnAndMove } from './shapes'
+import { asBeziers, circle, mapped, rectangle, rounded, type Shape, turnAndMove } from './shapes'
 
 const RULES: Record<Does, (metal: boolean, shape: boolean) => boolean> = {
   add: (metal, shape) => metal || shape,
@@ -26,12 +26,20 @@ const gridShape = (next: () => number): Shape => {
   return pick === 1 ? rectangle(x, y, w, h) : rounded(x, y, w, h, whole(1, Math.min(w, h) / 2))
 }
 
+/** A third of the cases as drawn, a third with elliptical arcs, a third with every kind of edge mixed. */
+function kindOf(shape: Shape, seed: number, next: () => number): Shape {
+  if (seed % 3 === 0) return shape
+  if (seed % 3 === 1) return mapped(shape, [1, 0.25, 0.125, 0.75, 0, 0])
+  const pick = next()
+  return pick < 0.3 ? asBeziers(shape, false) : pick < 0.5 ? asBeziers(shape, true) : shape
+}
+
 test(`${RUNS} random make-ups of 2 to 12 outlines give what the steps give one after another, to 1e-9`, () => {
   const failures = new Failures()
   for (const seed of [...Array.from({ length: RUNS }, (_, n) => n + 1), ...ONCE_WRONG]) {
     const next = random(seed)
     const by = seed % 2 === 0 ? turnAndMove(6.3 * next(), 9 * next(), 9 * next()) : turnAndMove(0, 0, 0)
-    const shapes = Array.from({ length: 2 + Math.floor(11 * next()) }, () => mapped(gridShape(next), by))
+    const shapes = Array.from({ length: 2 + Math.floor(11 * next()) }, () => mapped(kindOf(gridShape(next), seed, next), by))
     const { set, tolerances } = setOf(shapes)
     const same = set.count === shapes.length && shapes.every((s, k) => Math.abs(areaOf(s) - set.area[k]) < 1e-9 * set.area[k])
     if (!same) continue
