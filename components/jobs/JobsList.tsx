@@ -37,7 +37,7 @@ export function JobsList() {
       sort: 'number',
       plain: (job) => job.number,
       cell: (job) => (
-        <Link href={`/jobs/${job.id}`} className="font-mono text-accent hover:underline">
+        <Link href={`/jobs/${job.id}`} className="whitespace-nowrap font-mono text-accent hover:underline">
           {job.number}
         </Link>
       ),

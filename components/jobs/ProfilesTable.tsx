@@ -37,7 +37,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
       sort: 'number',
       plain: (profile) => profile.number,
       cell: (profile) => (
-        <Link href={hrefOf(profile)} className="font-mono text-accent hover:underline">
+        <Link href={hrefOf(profile)} className="whitespace-nowrap font-mono text-accent hover:underline">
           {profile.number}
         </Link>
       ),
@@ -55,7 +55,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
       wide: true,
       plain: (profile) => profile.job.number,
       cell: (profile) => (
-        <Link href={`/jobs/${profile.job.id}`} title={profile.job.title} className="font-mono">
+        <Link href={`/jobs/${profile.job.id}`} title={profile.job.title} className="whitespace-nowrap font-mono">
           {profile.job.number}
         </Link>
       ),
@@ -77,6 +77,7 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
     {
       key: 'revision',
       head: 'Revision',
+      wide: true,
       plain: (profile) => profile.latest?.letter ?? null,
       cell: ({ latest }) =>
         latest ? <StateBadge letter={latest.letter} state={latest.state} /> : <span className="text-soft">none yet</span>,
