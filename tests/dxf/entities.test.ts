@@ -90,6 +90,20 @@ describe('CIRCLE and ARC', () => {
     expect(only(arc(0, 0, 3, 0, 360))).toMatchObject([{ a: { x: 3, y: 0 }, b: { x: 3, y: 0 }, sweep: 2 * Math.PI }])
   })
 
+  it.each([
+    [0, 360],
+    [90, 450],
+    [10, -350],
+    [0, 359.9999999999],
+    [0, 720],
+  ])('an arc from %d° to %d° is a whole turn, the rounding of its angles aside', (from, to) => {
+    expect(only(arc(0, 0, 3, from, to))).toMatchObject([{ sweep: 2 * Math.PI }])
+  })
+
+  it('an arc whose angles are apart by rounding only is an error', () => {
+    expect(codesOf(read(drawn(arc(0, 0, 3, 90, 90.00000000000001))))).toContain('arc-without-sweep')
+  })
+
   it('an arc whose angles are equal is nothing or a whole turn: an error', () => {
     expect(codesOf(read(drawn(arc(0, 0, 3, 30, 30))))).toContain('arc-without-sweep')
   })

@@ -189,6 +189,28 @@ describe('limits', () => {
   })
 })
 
+describe('what only a hostile file has', () => {
+  it('70,000 layouts are never taken for the model', () => {
+    const on = (i: number) => line(0, 0, i, 1, [67, 1], [410, `L${i}`])
+    const drawing = read(drawn(Array.from({ length: 70_000 }, (_, i) => on(i)).join('')))
+    expect(select(drawing).edges).toHaveLength(0)
+    expect(drawing.spaces.length).toBeLessThanOrEqual(10_001)
+  })
+
+  it('5,000 unknown kinds are counted, most of them as OTHER', () => {
+    const drawing = read(drawn(Array.from({ length: 5000 }, (_, i) => entity(`K${i}`)).join('')))
+    const { ignored } = drawing
+    expect(Object.values(ignored).reduce((sum, n) => sum + n, 0)).toBe(5000)
+    expect(ignored.OTHER).toBeGreaterThan(3900)
+    for (const { message } of drawing.findings) expect(message.length).toBeLessThan(500)
+  })
+
+  it('more than 100,000 blocks are refused', () => {
+    const blocks = `${groups([0, 'BLOCK'], [2, 'B'])}`.repeat(100_001)
+    expect(finding(read(drawn(TRIANGLE, { before: section('BLOCKS', blocks) })), 'too-many-blocks').severity).toBe('error')
+  })
+})
+
 describe('unit and version', () => {
   it.each([
     [0, 'none', null],

@@ -12,10 +12,10 @@ const files = [
 
 /** Reads and selects within a second; whatever comes is finite, and every edge has its entity. */
 function survives(bytes: Uint8Array): Drawing {
-  const start = performance.now()
+  const started = performance.now()
   const drawing = read(bytes)
   const selection = select(drawing)
-  expect(performance.now() - start).toBeLessThan(1000)
+  expect(performance.now() - started).toBeLessThan(1000)
   const { edges, entities } = drawing
   for (let i = 0; i < 4 * edges.count; i++) expect(Number.isFinite(edges.ends[i])).toBe(true)
   for (let i = 0; i < edges.shapesUsed; i++) expect(Number.isFinite(edges.shapes[i])).toBe(true)
