@@ -2,8 +2,8 @@ import { type EdgeTable, emptyTable, pushCopy } from '../edges'
 import type { Tolerances } from '../outlineSet'
 import { selectLoops } from '../selectLoops'
 import { type Arrangement, arrange } from './arrange'
-import { noLoops, startVertex, traceLoops } from './loops'
-import { aroundVertex, type Spoke } from './order'
+import { noLoops, traceLoops } from './loops'
+import { halvesOf, nextRound } from './round'
 
 export interface Faces {
   /** the bounded faces' outer boundaries, counter-clockwise; neighbours share vertices to the last bit */
@@ -76,33 +76,6 @@ function prune(a: Arrangement, kept: Uint8Array): Uint16Array {
     for (const w of [a.from[u], a.to[u]]) if (--degree[w] === 1) loose.push(w)
   }
   return degree
-}
-
-function halvesOf(kept: Uint8Array): number[] {
-  const halves: number[] = []
-  kept.forEach((is, u) => {
-    if (is) halves.push(2 * u, 2 * u + 1)
-  })
-  return halves
-}
-
-/** For each half-edge the next one round the face on its left: the first way out clockwise from where it came. */
-function nextRound(a: Arrangement, kept: Uint8Array): Int32Array {
-  const next = new Int32Array(2 * a.count).fill(-1)
-  const spokes = new Map<number, Spoke[]>()
-  for (const h of halvesOf(kept)) {
-    const v = startVertex(a, h)
-    const own = spokes.get(v)
-    if (own) own.push({ half: h, out: true })
-    else spokes.set(v, [{ half: h, out: true }])
-  }
-  for (const [v, own] of spokes) {
-    aroundVertex(a, v, own)
-    own.forEach(({ half }, n) => {
-      next[half ^ 1] = own[(n + own.length - 1) % own.length].half
-    })
-  }
-  return next
 }
 
 /** Sub-edges with the same way round on both sides: they link faces, or islands to what is round them. */

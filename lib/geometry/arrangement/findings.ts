@@ -49,6 +49,11 @@ export const COMBINE_FINDINGS = {
     say: (p) =>
       `A closed slit of ${text(p.area)} mm² and ${text(p.width)} mm mean width lies in the metal at ${place(p)}. It is kept as void; as metal it would change torsion greatly. Check the drawing there.`,
   },
+  'overlap-thin': {
+    severity: 'warning',
+    say: (p) =>
+      `Outlines overlap or part by only ${text(p.width)} mm over ${text(p.length)} mm at ${place(p)}. Taken as drawn; were they meant to touch or to coincide there?`,
+  },
   slit: {
     severity: 'warning',
     say: (p) =>

@@ -3,6 +3,7 @@ import { insideLoop } from '../inside'
 import { interiorPoint } from '../interiorPoint'
 import type { OutlineSet } from '../outlineSet'
 import type { Bond } from '../recipe'
+import { thinCells } from './cells'
 import { type Combined, loopsWhere } from './combine'
 import { combineFinding } from './findings'
 
@@ -63,4 +64,15 @@ export function overlaps(
     })
   }
   return findings
+}
+
+/** Faces between outlines thinner than the duplicate tolerance that `known` findings do not report already. */
+export function thinOverlaps({ tangled }: Combined, limit: number, known: Finding[], mmPerUnit: number): Finding[] {
+  return tangled.flatMap(({ tangle }) =>
+    thinCells(tangle.arrangement, limit)
+      .filter(({ at, extent }) => !known.some((k) => k.at && Math.hypot(k.at[0] - at[0], k.at[1] - at[1]) <= extent))
+      .map(({ at, width, extent }) =>
+        combineFinding('overlap-thin', { width: width * mmPerUnit, length: extent * mmPerUnit, x: at[0], y: at[1] }, at, extent),
+      ),
+  )
 }

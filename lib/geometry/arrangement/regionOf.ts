@@ -9,7 +9,7 @@ import { defaultSteps } from './defaultSteps'
 import { combineFinding } from './findings'
 import { type MakeUp, makeUpOf, type Step, statedSteps } from './makeUp'
 import { narrowPlaces } from './narrow'
-import { abutting, overlaps } from './questions'
+import { abutting, overlaps, thinOverlaps } from './questions'
 import { regionFrom } from './regionFrom'
 import { type Tangle, tangleOf } from './tangle'
 
@@ -86,7 +86,8 @@ export function regionOf(
   const region = regionFrom(loops)
   if (!named) findings.push(...abutting(combined, mmPerUnit))
   findings.push(...overlaps(set, combined, materials, bonds, mmPerUnit))
-  findings.push(...narrowPlaces(region, loops.area, bonds, tolerances, mmPerUnit))
+  const narrow = narrowPlaces(region, loops.area, bonds, tolerances, mmPerUnit)
+  findings.push(...narrow, ...thinOverlaps(combined, tolerances.duplicate, narrow, mmPerUnit))
   return {
     region,
     parts: partsOf(set, combined, plan, region),
