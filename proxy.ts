@@ -1,5 +1,6 @@
 import { randomBytes } from 'node:crypto'
 import { type NextRequest, NextResponse } from 'next/server'
+import { PAGE_HEADER } from './lib/auth/pageHeader'
 
 const developing = process.env.NODE_ENV !== 'production'
 
@@ -18,12 +19,13 @@ function policyWith(nonce: string): string {
   ].join('; ')
 }
 
-/** A content security policy with a nonce of its own for every page. */
+/** A content security policy with a nonce of its own for every page, and the page's name for whoever has to sign in first. */
 export function proxy(request: NextRequest): NextResponse {
   const nonce = randomBytes(16).toString('base64')
   const policy = policyWith(nonce)
   const headers = new Headers(request.headers)
   headers.set('x-nonce', nonce)
+  headers.set(PAGE_HEADER, request.nextUrl.pathname + request.nextUrl.search)
   headers.set('content-security-policy', policy)
   const response = NextResponse.next({ request: { headers } })
   response.headers.set('content-security-policy', policy)

@@ -1,8 +1,9 @@
 import type { Role } from '@/lib/auth/permissions'
+import type { TeamId } from './id'
 
 /** Who writes: `userId` is null where the server itself does (sweeping, recovery). */
 export interface Writer {
-  teamId: string
+  teamId: TeamId
   userId: string | null
   requestId: string | null
 }

@@ -1,9 +1,10 @@
 import type { Db, Trx } from './client'
 import { record } from './events'
+import type { TeamId } from './id'
 
 interface Binned {
   id: string
-  teamId: string
+  teamId: TeamId
 }
 
 /** What lies in the bin since before `limit`, profiles of such jobs too. Not of one team: the server itself asks. */

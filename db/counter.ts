@@ -1,8 +1,9 @@
 import { sql } from 'kysely'
 import type { Trx } from './client'
+import type { TeamId } from './id'
 
 /** The next number for people of a noun in a team: 1, 2, 3 … without gaps, because it is taken in the transaction. */
-export async function nextNumber(trx: Trx, teamId: string, noun: 'job' | 'profile'): Promise<number> {
+export async function nextNumber(trx: Trx, teamId: TeamId, noun: 'job' | 'profile'): Promise<number> {
   const { value } = await trx
     .insertInto('counter')
     .values({ teamId, noun, value: 1 })

@@ -2,7 +2,7 @@ import type { Event, EventQuery, Verb } from '@/lib/api/schemas/event'
 import { SubjectType, VERBS } from '@/lib/api/schemas/event'
 import type { Writer } from './actor'
 import type { Db, Trx } from './client'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { parseRecord } from './json'
 import { type Keyset, pageOf } from './list'
 import { now } from './now'
@@ -39,7 +39,7 @@ const KEYSET: Keyset<{ at: string }> = { at: { column: 'event.at', id: 'event.id
 
 const isVerb = (text: string): text is Verb => text in VERBS
 
-export async function listEvents(db: Db, teamId: string, query: EventQuery) {
+export async function listEvents(db: Db, teamId: TeamId, query: EventQuery) {
   let found = db.selectFrom('event').leftJoin('user', 'user.id', 'event.actorId').where('event.teamId', '=', teamId)
   const subject = query.subjectId
   if (subject)

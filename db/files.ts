@@ -1,12 +1,12 @@
-import { letterOf } from './letter'
 import type { Writer } from './actor'
 import { dropBlob } from './blobs'
 import type { Db, Trx } from './client'
 import { profileNumber } from './counter'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
+import { letterOf } from './letter'
 import { now } from './now'
 
-export const findFile = (db: Db, teamId: string, sha256: string) =>
+export const findFile = (db: Db, teamId: TeamId, sha256: string) =>
   db
     .selectFrom('sourceFile')
     .select(['id', 'bytes', 'blobId'])
@@ -34,7 +34,7 @@ export async function linkFile(trx: Trx, { teamId }: Writer, { sha256, bytes, bl
 }
 
 /** The revisions made of a file, newest first. */
-export async function usesOfFile(db: Db, teamId: string, sha256: string) {
+export async function usesOfFile(db: Db, teamId: TeamId, sha256: string) {
   const rows = await db
     .selectFrom('revision')
     .innerJoin('sourceFile', 'sourceFile.id', 'revision.sourceFileId')

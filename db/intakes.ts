@@ -4,6 +4,7 @@ import { RevisionFields } from '@/lib/api/schemas/revision'
 import type { Actor } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
+import type { TeamId } from './id'
 import { releaseKey } from './idempotency'
 import { parseJson } from './json'
 import { now } from './now'
@@ -13,7 +14,7 @@ const Form = z.object({ recipe: RecipeInput, fields: RevisionFields })
 /** An upload that was taken in and is not yet a revision. Its bytes lie in the incoming folder under its id. */
 export interface Intake {
   id: string
-  teamId: string
+  teamId: TeamId
   userId: string
   profileId: string
   key: string | null

@@ -3,7 +3,7 @@ import type { Invitation, Invite } from '@/lib/api/schemas/people'
 import type { Actor } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { parseJson } from './json'
 import { fromNow, now } from './now'
 import { addUser, findUserByEmail, joinTeam } from './people'
@@ -29,7 +29,7 @@ const toView = ({ id, email, roles, administrator, expiresAt }: Row): Invitation
 
 const open = (db: Db) => db.selectFrom('invitation').select(COLUMNS).where('spentAt', 'is', null).where('expiresAt', '>', now())
 
-export async function listInvitations(db: Db, teamId: string): Promise<Invitation[]> {
+export async function listInvitations(db: Db, teamId: TeamId): Promise<Invitation[]> {
   return (await open(db).where('teamId', '=', teamId).orderBy('createdAt', 'desc').limit(1000).execute()).map(toView)
 }
 

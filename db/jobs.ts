@@ -5,11 +5,11 @@ import type { Actor } from './actor'
 import type { Db, Trx } from './client'
 import { jobNumber, nextNumber } from './counter'
 import { record } from './events'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { containing, type Keyset, pageOf } from './list'
 import { now } from './now'
 
-const jobs = (db: Db, teamId: string) =>
+const jobs = (db: Db, teamId: TeamId) =>
   db
     .selectFrom('job')
     .where('job.teamId', '=', teamId)
@@ -51,7 +51,7 @@ const toView = ({ id, number, title, client, profiles, createdAt, updatedAt, bin
   version,
 })
 
-export async function listJobs(db: Db, teamId: string, query: JobQuery) {
+export async function listJobs(db: Db, teamId: TeamId, query: JobQuery) {
   let found = jobs(db, teamId).where('job.binnedAt', query.bin ? 'is not' : 'is', null)
   for (const word of query.q?.split(/\s+/).filter(Boolean) ?? []) found = found.where(mentions(word))
   return pageOf(found, KEYSET, { ...query, filter: [query.q, query.bin] }, toView)
@@ -60,17 +60,17 @@ export async function listJobs(db: Db, teamId: string, query: JobQuery) {
 const mentions = (word: string): Expression<boolean> =>
   sql<boolean>`(job.title || ' ' || job.client || ' ' || printf('J-%04d', job.number)) like ${containing(word)} escape '\\'`
 
-export async function getJob(db: Db, teamId: string, id: string): Promise<Job> {
+export async function getJob(db: Db, teamId: TeamId, id: string): Promise<Job> {
   const row = await jobs(db, teamId).where('job.id', '=', id).executeTakeFirst()
   if (!row) throw new AppError('not_found')
   return toView(row)
 }
 
-export const isJob = async (db: Db, teamId: string, id: string): Promise<boolean> =>
+export const isJob = async (db: Db, teamId: TeamId, id: string): Promise<boolean> =>
   (await jobs(db, teamId).where('job.id', '=', id).executeTakeFirst()) !== undefined
 
 /** A job that is not in the bin, for what is put into it. */
-export async function requireOpenJob(trx: Trx, teamId: string, id: string): Promise<Job> {
+export async function requireOpenJob(trx: Trx, teamId: TeamId, id: string): Promise<Job> {
   const job = await getJob(trx, teamId, id)
   if (job.binnedAt) throw new AppError('binned', `Job ${job.number} is in the bin. Restore it first.`)
   return job

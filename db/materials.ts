@@ -3,16 +3,16 @@ import type { Material, MaterialFields } from '@/lib/api/schemas/people'
 import type { Actor, Writer } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { now } from './now'
 import { USUAL_MATERIALS } from './usualMaterials'
 
 const COLUMNS = ['id', 'name', 'density', 'source', 'version'] as const
 
-export const listMaterials = (db: Db, teamId: string): Promise<Material[]> =>
+export const listMaterials = (db: Db, teamId: TeamId): Promise<Material[]> =>
   db.selectFrom('material').select(COLUMNS).where('teamId', '=', teamId).orderBy('name').limit(1000).execute()
 
-export async function getMaterial(db: Db, teamId: string, id: string): Promise<Material> {
+export async function getMaterial(db: Db, teamId: TeamId, id: string): Promise<Material> {
   const found = await db
     .selectFrom('material')
     .select(COLUMNS)
@@ -23,7 +23,7 @@ export async function getMaterial(db: Db, teamId: string, id: string): Promise<M
   return found
 }
 
-async function refuseTakenName(trx: Trx, teamId: string, name: string): Promise<void> {
+async function refuseTakenName(trx: Trx, teamId: TeamId, name: string): Promise<void> {
   const other = await trx
     .selectFrom('material')
     .select('id')

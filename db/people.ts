@@ -5,13 +5,13 @@ import type { Role } from '@/lib/auth/permissions'
 import type { Actor, Writer } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { parseJson } from './json'
 import { now } from './now'
 import { closeSessionsOf, Roles } from './sessions'
 import { getTeam } from './teams'
 
-const people = (db: Db, teamId: string) =>
+const people = (db: Db, teamId: TeamId) =>
   db
     .selectFrom('membership')
     .innerJoin('user', 'user.id', 'membership.userId')
@@ -42,17 +42,17 @@ const toView = (row: Row): Person => ({
   disabled: row.disabled === 1,
 })
 
-export async function listPeople(db: Db, teamId: string): Promise<Person[]> {
+export async function listPeople(db: Db, teamId: TeamId): Promise<Person[]> {
   return (await people(db, teamId).orderBy('user.name').orderBy('user.id').limit(1000).execute()).map(toView)
 }
 
-export async function getPerson(db: Db, teamId: string, id: string): Promise<Person> {
+export async function getPerson(db: Db, teamId: TeamId, id: string): Promise<Person> {
   const row = await people(db, teamId).where('user.id', '=', id).executeTakeFirst()
   if (!row) throw new AppError('not_found')
   return toView(row)
 }
 
-export async function requireMember(db: Db, teamId: string, id: string): Promise<void> {
+export async function requireMember(db: Db, teamId: TeamId, id: string): Promise<void> {
   const person = await getPerson(db, teamId, id)
   if (person.disabled) throw new AppError('invalid', `${person.name} is disabled in this team.`)
 }
@@ -126,7 +126,7 @@ export async function changePerson(trx: Trx, actor: Actor, id: string, version: 
   return after
 }
 
-async function hasAdministrator(trx: Trx, teamId: string): Promise<boolean> {
+async function hasAdministrator(trx: Trx, teamId: TeamId): Promise<boolean> {
   const found = await trx
     .selectFrom('membership')
     .select(sql<number>`1`.as('one'))

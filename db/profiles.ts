@@ -6,12 +6,12 @@ import type { Actor } from './actor'
 import type { Db, Trx } from './client'
 import { nextNumber, profileNumber } from './counter'
 import { record } from './events'
-import { newId } from './id'
+import { newId, type TeamId } from './id'
 import { requireOpenJob } from './jobs'
 import { containing, type Keyset, pageOf } from './list'
 import { getMaterial } from './materials'
-import { requireMember } from './people'
 import { now } from './now'
+import { requireMember } from './people'
 import { type ProfileRow, profileColumns, toProfileView } from './profileView'
 
 const plain = (column: 'number' | 'title' | 'updatedAt') => ({
@@ -36,7 +36,7 @@ const KEYSET: Keyset<ProfileRow> = {
   circle: figure('circle'),
 }
 
-const profiles = (db: Db, teamId: string) =>
+const profiles = (db: Db, teamId: TeamId) =>
   db
     .selectFrom('profile')
     .innerJoin('job', 'job.id', 'profile.jobId')
@@ -47,7 +47,7 @@ const profiles = (db: Db, teamId: string) =>
     .select(profileColumns)
 
 /** Without the bin: neither the profile nor its job is in it. The bin shows the profiles put there themselves. */
-export async function listProfiles(db: Db, teamId: string, query: ProfileQuery) {
+export async function listProfiles(db: Db, teamId: TeamId, query: ProfileQuery) {
   const { q = '', jobId, ownerId, materialId, bin } = query
   const { words, conditions } = readSearch(q)
   let found = profiles(db, teamId)
@@ -69,13 +69,13 @@ const mentions = (word: string): Expression<boolean> => sql<boolean>`(profile.ti
 const meets = ({ figure, op, value }: Condition): Expression<boolean> =>
   sql<boolean>`${sql.ref(`profile.${figure}`)} ${sql.raw(op)} ${value}`
 
-export async function getProfile(db: Db, teamId: string, id: string): Promise<Profile> {
+export async function getProfile(db: Db, teamId: TeamId, id: string): Promise<Profile> {
   const row = await profiles(db, teamId).where('profile.id', '=', id).executeTakeFirst()
   if (!row) throw new AppError('not_found')
   return toProfileView(row)
 }
 
-async function checkReferences(trx: Trx, teamId: string, { jobId, materialId, ownerId }: ProfileChange): Promise<void> {
+async function checkReferences(trx: Trx, teamId: TeamId, { jobId, materialId, ownerId }: ProfileChange): Promise<void> {
   if (jobId) await requireOpenJob(trx, teamId, jobId)
   if (materialId) await getMaterial(trx, teamId, materialId)
   if (ownerId) await requireMember(trx, teamId, ownerId)

@@ -11,11 +11,12 @@ import {
 } from '@/lib/api/schemas/revision'
 import { SectionAnswer } from '@/lib/api/schemas/section'
 import type { Recipe } from '@/lib/geometry/recipe'
-import type { Section, SectionAnswer as Answer } from '@/lib/section/types'
+import type { SectionAnswer as Answer, Section } from '@/lib/section/types'
 import type { Writer } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
 import { usesOfFile } from './files'
+import type { TeamId } from './id'
 import { parseJson } from './json'
 import { letterOf } from './letter'
 import { now } from './now'
@@ -23,7 +24,7 @@ import { figureColumns } from './sectionColumns'
 
 const Opinions = z.array(Opinion)
 
-const revisions = (db: Db, teamId: string) =>
+const revisions = (db: Db, teamId: TeamId) =>
   db
     .selectFrom('revision')
     .innerJoin('section', 'section.revisionId', 'revision.id')
@@ -74,7 +75,7 @@ const common = (row: Common) => ({
 })
 
 /** The revisions of a profile, newest first. */
-export async function listRevisions(db: Db, teamId: string, profileId: string): Promise<RevisionSummary[]> {
+export async function listRevisions(db: Db, teamId: TeamId, profileId: string): Promise<RevisionSummary[]> {
   const rows = await revisions(db, teamId)
     .where('revision.profileId', '=', profileId)
     .select([
@@ -97,7 +98,7 @@ export async function listRevisions(db: Db, teamId: string, profileId: string): 
   })
 }
 
-export async function getRevision(db: Db, teamId: string, id: string): Promise<Revision> {
+export async function getRevision(db: Db, teamId: TeamId, id: string): Promise<Revision> {
   const row = await revisions(db, teamId)
     .select(['revision.confirmation', 'revision.material', 'revision.opinions', 'section.answer'])
     .where('revision.id', '=', id)
@@ -121,7 +122,7 @@ export async function getRevision(db: Db, teamId: string, id: string): Promise<R
 }
 
 /** The stored JSON of a section as it is: text, so that a read neither parses nor writes it again. */
-export async function getAnswerText(db: Db, teamId: string, id: string): Promise<string> {
+export async function getAnswerText(db: Db, teamId: TeamId, id: string): Promise<string> {
   const row = await db
     .selectFrom('section')
     .select('answer')
@@ -133,7 +134,7 @@ export async function getAnswerText(db: Db, teamId: string, id: string): Promise
 }
 
 /** Where the bytes of a revision lie: its source file and its packed region. */
-export async function getStored(db: Db, teamId: string, id: string) {
+export async function getStored(db: Db, teamId: TeamId, id: string) {
   const row = await db
     .selectFrom('revision')
     .innerJoin('section', 'section.revisionId', 'revision.id')
@@ -230,7 +231,7 @@ export async function addRevision(trx: Trx, writer: Writer & { userId: string },
 }
 
 /** The second opinions, which come after the section is out, and the findings they gave. */
-export async function storeOpinions(trx: Trx, teamId: string, id: string, opinions: Opinion[], answer: Answer): Promise<void> {
+export async function storeOpinions(trx: Trx, teamId: TeamId, id: string, opinions: Opinion[], answer: Answer): Promise<void> {
   const { numUpdatedRows } = await trx
     .updateTable('revision')
     .set({ opinions: JSON.stringify(opinions) })

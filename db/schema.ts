@@ -1,8 +1,10 @@
+import type { TeamId } from './id'
+
 type Json = string
 type Flag = 0 | 1
 
 export interface TeamTable {
-  id: string
+  id: TeamId
   name: string
   settings: Json
   version: number
@@ -17,7 +19,7 @@ export interface UserTable {
   createdAt: string
 }
 export interface MembershipTable {
-  teamId: string
+  teamId: TeamId
   userId: string
   roles: Json
   administrator: Flag
@@ -28,13 +30,13 @@ export interface MembershipTable {
 export interface SessionTable {
   idHash: string
   userId: string
-  teamId: string
+  teamId: TeamId
   createdAt: string
   expiresAt: string
 }
 export interface InvitationTable {
   id: string
-  teamId: string
+  teamId: TeamId
   email: string
   roles: Json
   administrator: Flag
@@ -46,7 +48,7 @@ export interface InvitationTable {
 }
 export interface MaterialTable {
   id: string
-  teamId: string
+  teamId: TeamId
   name: string
   density: number
   source: string
@@ -55,7 +57,7 @@ export interface MaterialTable {
 }
 export interface JobTable {
   id: string
-  teamId: string
+  teamId: TeamId
   number: number
   title: string
   client: string
@@ -78,7 +80,7 @@ interface FigureColumns {
 }
 export interface ProfileTable extends FigureColumns {
   id: string
-  teamId: string
+  teamId: TeamId
   jobId: string
   number: number
   title: string
@@ -94,7 +96,7 @@ export interface ProfileTable extends FigureColumns {
 }
 export interface SourceFileTable {
   id: string
-  teamId: string
+  teamId: TeamId
   sha256: string
   bytes: number
   blobId: string
@@ -107,7 +109,7 @@ export interface ChunkTable {
 }
 export interface IntakeTable {
   id: string
-  teamId: string
+  teamId: TeamId
   userId: string
   profileId: string
   key: string | null
@@ -120,7 +122,7 @@ export interface IntakeTable {
 }
 export interface RevisionTable {
   id: string
-  teamId: string
+  teamId: TeamId
   profileId: string
   position: number
   state: string
@@ -138,14 +140,14 @@ export interface RevisionTable {
 }
 export interface SectionTable extends FigureColumns {
   revisionId: string
-  teamId: string
+  teamId: TeamId
   engineVersion: string
   answer: Json
   regionBlobId: string
 }
 export interface EventTable {
   id: string
-  teamId: string
+  teamId: TeamId
   at: string
   actorId: string | null
   verb: string
@@ -156,14 +158,14 @@ export interface EventTable {
   requestId: string | null
 }
 export interface CounterTable {
-  teamId: string
+  teamId: TeamId
   noun: string
   value: number
 }
 export interface IdempotencyTable {
   userId: string
   key: string
-  teamId: string
+  teamId: TeamId
   bodyHash: string
   status: number | null
   resultId: string | null

@@ -3,6 +3,7 @@ import { z } from 'zod'
 import { ROLES } from '@/lib/auth/permissions'
 import type { Actor } from './actor'
 import type { Db, Trx } from './client'
+import type { TeamId } from './id'
 import { parseJson } from './json'
 import { fromNow, now } from './now'
 
@@ -15,7 +16,7 @@ export const hashToken = (token: string) => createHash('sha256').update(token).d
 export const Roles = z.array(z.enum(ROLES))
 
 /** Opens a session in the team asked for, or in the first one in which the person is not disabled; null where there is none. */
-export async function openSession(trx: Trx, userId: string, teamId?: string): Promise<string | null> {
+export async function openSession(trx: Trx, userId: string, teamId?: TeamId): Promise<string | null> {
   let memberships = trx.selectFrom('membership').select('teamId').where('userId', '=', userId).where('disabled', '=', 0)
   if (teamId) memberships = memberships.where('teamId', '=', teamId)
   const membership = await memberships.orderBy('createdAt').executeTakeFirst()
@@ -50,13 +51,13 @@ export async function closeSession(trx: Trx, token: string): Promise<void> {
   await trx.deleteFrom('session').where('idHash', '=', hashToken(token)).execute()
 }
 
-export async function closeSessionsOf(trx: Trx, userId: string, teamId?: string): Promise<void> {
+export async function closeSessionsOf(trx: Trx, userId: string, teamId?: TeamId): Promise<void> {
   let sessions = trx.deleteFrom('session').where('userId', '=', userId)
   if (teamId) sessions = sessions.where('teamId', '=', teamId)
   await sessions.execute()
 }
 
 /** Goes on in another team of the same person. */
-export async function switchTeam(trx: Trx, token: string, userId: string, teamId: string): Promise<void> {
+export async function switchTeam(trx: Trx, token: string, userId: string, teamId: TeamId): Promise<void> {
   await trx.updateTable('session').set({ teamId }).where('idHash', '=', hashToken(token)).where('userId', '=', userId).execute()
 }

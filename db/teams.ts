@@ -3,7 +3,7 @@ import { type Team, type TeamChange, TeamSettings } from '@/lib/api/schemas/peop
 import type { Actor, Writer } from './actor'
 import type { Db, Trx } from './client'
 import { record } from './events'
-import { newId } from './id'
+import { newTeamId, type TeamId } from './id'
 import { parseJson } from './json'
 import { addUsualMaterials } from './materials'
 import { now } from './now'
@@ -22,7 +22,7 @@ export async function isSetUp(db: Db): Promise<boolean> {
 }
 
 /** A new team with its materials, still without people. */
-export async function createTeam(trx: Trx, name: string, id = newId()): Promise<Writer> {
+export async function createTeam(trx: Trx, name: string, id = newTeamId()): Promise<Writer> {
   const writer: Writer = { teamId: id, userId: null, requestId: null }
   await trx
     .insertInto('team')
@@ -33,7 +33,7 @@ export async function createTeam(trx: Trx, name: string, id = newId()): Promise<
   return writer
 }
 
-export async function getTeam(db: Db, teamId: string): Promise<Team> {
+export async function getTeam(db: Db, teamId: TeamId): Promise<Team> {
   const columns = ['id', 'name', 'settings', 'version'] as const
   return toView(await db.selectFrom('team').select(columns).where('id', '=', teamId).executeTakeFirstOrThrow())
 }

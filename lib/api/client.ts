@@ -3,16 +3,11 @@ import type { z } from 'zod'
 import { ERRORS } from './errors'
 import { Problem } from './schemas/common'
 
-/** A refusal of the server; `problem` is its problem document. Told apart by `kind`. */
+/** A refusal of the server; `problem` is its problem document, by which it is told from other errors. */
 export class ProblemError extends Error {
-  readonly kind = 'problem'
   constructor(readonly problem: Problem) {
     super(problem.detail ?? problem.title)
   }
-}
-
-export function isProblemError(error: unknown): error is ProblemError {
-  return typeof error === 'object' && error !== null && 'kind' in error && error.kind === 'problem'
 }
 
 async function refusalOf(response: Response): Promise<ProblemError> {

@@ -3,7 +3,7 @@ type Query = Record<string, string | number | boolean | null | undefined>
 const V1 = '/api/v1'
 
 /** The query string of what is set, in the order given; '' for nothing. */
-export function queryOf(query: Query = {}): string {
+function queryOf(query: Query = {}): string {
   const set = Object.entries(query).filter(([, value]) => value !== undefined && value !== null && value !== '')
   return set.length === 0 ? '' : `?${new URLSearchParams(set.map(([name, value]) => [name, String(value)]))}`
 }

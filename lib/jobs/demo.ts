@@ -4,10 +4,10 @@ import path from 'node:path'
 import { z } from 'zod'
 import type { Actor } from '@/db/actor'
 import { record } from '@/db/events'
-import { newId } from '@/db/id'
+import { newId, type TeamId } from '@/db/id'
 import { database, inTransaction } from '@/db/instance'
-import { parseJson } from '@/db/json'
 import { isJob, openJob } from '@/db/jobs'
+import { parseJson } from '@/db/json'
 import { listMaterials } from '@/db/materials'
 import { withClock } from '@/db/now'
 import { addProfile } from '@/db/profiles'
@@ -39,7 +39,7 @@ const at = (n: number, work: () => Promise<void>) => withClock(() => new Date(ST
 const folder = () => path.join(/* turbopackIgnore: true */ process.cwd(), 'fixtures', 'demo')
 
 /** The same id for the same thing of the same team, so that the demo is the same wherever it is loaded. */
-const fixedId = (teamId: string, thing: string) =>
+const fixedId = (teamId: TeamId, thing: string) =>
   newId(createHash('sha256').update(`${teamId} ${thing}`).digest().subarray(0, 16))
 
 /** Loads a small workshop's jobs and profiles, each drawing through the way of every upload. Gives how many. */

@@ -4,7 +4,7 @@ import path from 'node:path'
 import { Readable } from 'node:stream'
 import { pipeline } from 'node:stream/promises'
 import { readBlob } from '@/db/blobs'
-import { newId } from '@/db/id'
+import { newId, type TeamId } from '@/db/id'
 import { database, inTransaction } from '@/db/instance'
 import { countIntake, giveUpIntake, type Intake, openIntakes } from '@/db/intakes'
 import { getRevision, getStored, withoutOpinions } from '@/db/revisions'
@@ -51,7 +51,7 @@ async function resume(intake: Intake): Promise<void> {
 }
 
 /** Second opinions that were lost: asked again of the stored bytes. The section itself stays as it is. */
-async function askAgain(id: string, teamId: string, person: string): Promise<void> {
+async function askAgain(id: string, teamId: TeamId, person: string): Promise<void> {
   const { read } = database()
   const file = incomingPath(newId())
   try {

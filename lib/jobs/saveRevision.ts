@@ -1,6 +1,7 @@
 import { createReadStream } from 'node:fs'
 import { writeBlob } from '@/db/blobs'
 import { linkFile } from '@/db/files'
+import type { TeamId } from '@/db/id'
 import { answerKey } from '@/db/idempotency'
 import { inTransaction } from '@/db/instance'
 import { closeIntake, type Intake } from '@/db/intakes'
@@ -53,7 +54,7 @@ export async function saveRevision(intake: Intake, path: string, computed: Compu
 const pending = new Set<Promise<void>>()
 
 /** Stores the second opinions when they come; they confirm and never hold up a save. */
-export function awaitOpinions(teamId: string, id: string, answer: SectionAnswer, opinions: Promise<Opinions | null>): void {
+export function awaitOpinions(teamId: TeamId, id: string, answer: SectionAnswer, opinions: Promise<Opinions | null>): void {
   const stored = opinions
     .then((came) =>
       inTransaction((trx) => storeOpinions(trx, teamId, id, came?.opinions ?? [], withFindings(answer, came?.findings ?? []))),

@@ -5,7 +5,7 @@ import { pipeline } from 'node:stream/promises'
 import type { Actor } from '@/db/actor'
 import { readBlob } from '@/db/blobs'
 import { findFile } from '@/db/files'
-import { newId } from '@/db/id'
+import { newId, type TeamId } from '@/db/id'
 import { database } from '@/db/instance'
 import { getProfile } from '@/db/profiles'
 import { AppError } from '@/lib/api/errors'
@@ -46,7 +46,7 @@ function keyIn({ headers }: Request): string | null {
 }
 
 /** A further profile from a sheet that the team has already: its stored bytes are taken again. */
-async function storedFile(teamId: string, { fields }: Received, path: string): Promise<ReceivedFile> {
+async function storedFile(teamId: TeamId, { fields }: Received, path: string): Promise<ReceivedFile> {
   const { data: asked } = FileQuery.safeParse({ sha256: fields.get('fileSha256') })
   if (!asked) throw new AppError('invalid', 'Send a file, or fileSha256 of one that the team has.')
   const { read } = database()

@@ -1,26 +1,27 @@
 import { afterAll, beforeAll, expect, test } from 'vitest'
 import { POST as demo } from '@/app/api/v1/demo/route'
+import { GET as profiles } from '@/app/api/v1/profiles/route'
 import { GET as csv } from '@/app/api/v1/revisions/[id]/figures.csv/route'
 import { GET as picture } from '@/app/api/v1/revisions/[id]/picture.svg/route'
 import { GET as regionDxf } from '@/app/api/v1/revisions/[id]/region.dxf/route'
-import { GET as profiles } from '@/app/api/v1/profiles/route'
 import { readBlob } from '@/db/blobs'
 import type { Database } from '@/db/client'
+import { newTeamId, type TeamId } from '@/db/id'
 import { listMaterials } from '@/db/materials'
 import { getRevision, getStored } from '@/db/revisions'
 import { createTeam } from '@/db/teams'
 import { page } from '@/lib/api/schemas/common'
 import { Profile } from '@/lib/api/schemas/profile'
 import { RevisionAdded } from '@/lib/api/schemas/revision'
+import { ROLES } from '@/lib/auth/permissions'
 import { DEFAULT_RECIPE } from '@/lib/geometry/recipe'
 import { opinionsSettled } from '@/lib/jobs/saveRevision'
 import type { SectionPool } from '@/lib/jobs/server-pool'
 import { readTask, sectionTask } from '@/lib/jobs/tasks'
-import { ROLES } from '@/lib/auth/permissions'
 import { call, givenDatabase } from '@/tests/support/call'
+import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
 import { givenMember, givenTeam, type Member } from '@/tests/support/team'
 import { givenJob, givenProfile } from '@/tests/support/things'
-import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
 import { givenPool, upload } from '@/tests/support/upload'
 
 let pool: SectionPool
@@ -68,7 +69,7 @@ test('the picture is one SVG without script, style or text that needs a font', a
 })
 
 /** Bytes, recipe and engine version are the whole input: the stored section comes out again to the last bit. */
-async function expectSameWhenRecomputed(teamId: string, id: string) {
+async function expectSameWhenRecomputed(teamId: TeamId, id: string) {
   const { answer, file } = await getRevision(database.read, teamId, id)
   const { blobId } = await getStored(database.read, teamId, id)
   const chunks: Uint8Array[] = []
@@ -85,7 +86,7 @@ test('the demo loads 13 profiles in 3 jobs, twice alike to the last digit, and o
   const stories: string[] = []
   for (const _ of [1, 2]) {
     database = await givenDatabase()
-    const { teamId } = await database.write.transaction().execute((trx) => createTeam(trx, 'Demo', 'e'.repeat(26)))
+    const { teamId } = await database.write.transaction().execute((trx) => createTeam(trx, 'Demo', newTeamId('e'.repeat(26))))
     const me = await givenMember(database, teamId, { roles: ROLES, administrator: true })
     const loaded = await call(demo, { method: 'POST', cookie: me.cookie })
     expect(loaded.json, loaded.text).toEqual({ jobs: 3, profiles: 13 })

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { POST as open, GET as list } from '@/app/api/v1/jobs/route'
+import { GET as list, POST as open } from '@/app/api/v1/jobs/route'
 import { call, givenDatabase } from '@/tests/support/call'
 import { givenTeam } from '@/tests/support/team'
 

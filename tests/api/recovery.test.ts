@@ -1,5 +1,5 @@
-import { existsSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
 import { createHash } from 'node:crypto'
+import { existsSync, readdirSync, rmSync, writeFileSync } from 'node:fs'
 import { afterAll, beforeAll, beforeEach, expect, test } from 'vitest'
 import { writeBlob } from '@/db/blobs'
 import type { Database } from '@/db/client'

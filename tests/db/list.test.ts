@@ -1,3 +1,4 @@
+import type { TeamId } from '@/db/id'
 import { expect, test } from 'vitest'
 import type { Database } from '@/db/client'
 import { listProfiles } from '@/db/profiles'
@@ -22,7 +23,7 @@ async function given() {
   return { database, teamId: actor.teamId, jobId: job.id }
 }
 
-async function everyPage({ read }: Database, teamId: string, ask: ProfileQuery): Promise<Profile[]> {
+async function everyPage({ read }: Database, teamId: TeamId, ask: ProfileQuery): Promise<Profile[]> {
   const found: Profile[] = []
   for (let cursor: string | undefined; ; ) {
     const { items, next, total } = await listProfiles(read, teamId, { ...ask, cursor })

@@ -91,6 +91,8 @@ test('a page carries a policy with a nonce of its own, and sends a stranger to s
   expect(await pages[0].text()).not.toMatch(/ style="/)
   const home = await fetch(`${server.url}/`, { redirect: 'manual' })
   expect([home.status, home.headers.get('location')]).toEqual([307, '/sign-in'])
+  const jobs = await fetch(`${server.url}/jobs?q=north&sort=title`, { redirect: 'manual' })
+  expect(jobs.headers.get('location')).toBe('/sign-in?to=%2Fjobs%3Fq%3Dnorth%26sort%3Dtitle')
 })
 
 test('60 MiB are taken in whole, 65 MiB are 413, and the server lives on', async () => {

@@ -1,5 +1,6 @@
 import type { Actor } from '@/db/actor'
 import type { Database } from '@/db/client'
+import type { TeamId } from '@/db/id'
 import { addUser, joinTeam } from '@/db/people'
 import { openSession } from '@/db/sessions'
 import { createTeam } from '@/db/teams'
@@ -19,7 +20,7 @@ interface Right {
 let people = 0
 
 /** A person with a session in a team. */
-export async function givenMember(database: Database, teamId: string, right: Right = {}): Promise<Member> {
+export async function givenMember(database: Database, teamId: TeamId, right: Right = {}): Promise<Member> {
   const { roles = [], administrator = false, passwordHash = 'none' } = right
   people++
   return database.write.transaction().execute(async (trx) => {

@@ -54,6 +54,10 @@ export const Section = z.object({
   freePlastic: z.object({ x: n, y: n, angleX: n, angleY: n, restrainedMyForX: n, restrainedMxForY: n }),
   circle: z.object({ x: n, y: n, radius: n }),
   withoutSteiner: z.object({ ix: n, iy: n, ixy: n }).optional(),
+  j: z.object({ value: n, lower: n, upper: n }).optional(),
+  shearCentre: xy.optional(),
+  iw: n.optional(),
+  shearArea: xy.optional(),
   origin: z.record(
     z.string(),
     z.object({

@@ -5,6 +5,7 @@ import { ProfileView } from '@/components/sheet/ProfileView'
 import { readBlob } from '@/db/blobs'
 import type { Db } from '@/db/client'
 import { listEvents } from '@/db/events'
+import type { TeamId } from '@/db/id'
 import { database } from '@/db/instance'
 import { getProfile } from '@/db/profiles'
 import { getRevision, getStored, listRevisions } from '@/db/revisions'
@@ -16,7 +17,7 @@ import { orNotFound } from '../../orNotFound'
 /** A region up to this size comes with the page, so that the drawing is there at once; a larger one is fetched. */
 const WITH_PAGE = 48 * 1024
 
-async function smallRegion(db: Db, teamId: string, revisionId: string): Promise<string | null> {
+async function smallRegion(db: Db, teamId: TeamId, revisionId: string): Promise<string | null> {
   const { regionBlobId } = await getStored(db, teamId, revisionId)
   const chunks: Uint8Array[] = []
   let bytes = 0

@@ -1,5 +1,5 @@
 import { database, inTransaction } from '@/db/instance'
-import { openJob, listJobs } from '@/db/jobs'
+import { listJobs, openJob } from '@/db/jobs'
 import { route } from '@/lib/api/route'
 import { JobFields, JobQuery } from '@/lib/api/schemas/job'
 

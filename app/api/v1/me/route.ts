@@ -1,7 +1,7 @@
-import { AppError } from '@/lib/api/errors'
 import { database, inTransaction } from '@/db/instance'
 import { changeMe, getMe, teamsOf } from '@/db/people'
 import { switchTeam } from '@/db/sessions'
+import { AppError } from '@/lib/api/errors'
 import { route } from '@/lib/api/route'
 import { MeChange } from '@/lib/api/schemas/people'
 import { actorOf } from '@/lib/auth/actor'
@@ -15,8 +15,9 @@ export const PATCH = route({ permission: 'signed in', body: MeChange }, async ({
   await inTransaction(async (trx) => {
     await changeMe(trx, actor, change)
     if (!teamId || !token) return
-    if (!(await teamsOf(trx, actor.userId)).some(({ id }) => id === teamId)) throw new AppError('not_found')
-    await switchTeam(trx, token, actor.userId, teamId)
+    const team = (await teamsOf(trx, actor.userId)).find(({ id }) => id === teamId)
+    if (!team) throw new AppError('not_found')
+    await switchTeam(trx, token, actor.userId, team.id)
   })
   return getMe(database().read, (await actorOf(request.headers, requestId)) ?? actor)
 })

@@ -1,4 +1,4 @@
-import { inTransaction, database } from '@/db/instance'
+import { database, inTransaction } from '@/db/instance'
 import { addUser, joinTeam } from '@/db/people'
 import { openSession } from '@/db/sessions'
 import { createTeam, isSetUp } from '@/db/teams'
