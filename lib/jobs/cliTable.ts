@@ -1,3 +1,4 @@
+import type { Finding, Severity } from '../geometry/finding'
 import { FIGURES } from '../section/figures'
 import type { Dimension, Figure, FigureGroup } from '../section/figures/figure'
 import type { Section, SectionAnswer } from '../section/types'
@@ -22,9 +23,11 @@ const GROUP: Record<FigureGroup, string> = {
   bending: 'Bending about x and y',
   principal: 'Principal axes',
   plastic: 'Plastic bending',
+  torsion: 'Torsion and shear',
 }
 
 const SHOWN = 10
+const IN_FULL = 5
 
 /** The answer for people at a terminal: what was read, the figures by group, the findings. */
 export function tableOf({ source, unit, outlinesTotal, findings, findingsTotal, section }: SectionAnswer): string {
@@ -34,9 +37,24 @@ export function tableOf({ source, unit, outlinesTotal, findings, findingsTotal, 
   ]
   if (section) for (const group of Object.keys(GROUP) as FigureGroup[]) lines.push('', GROUP[group], ...rowsOf(group, section))
   if (findings.length > 0) lines.push('', `Findings (${findingsTotal})`)
-  for (const { severity, message } of findings.slice(0, 50)) lines.push(`  ${severity}: ${message}`)
-  if (findingsTotal > 50) lines.push(`  … and ${findingsTotal - 50} more (--json lists them)`)
+  lines.push(...findingRows(findings))
   return lines.join('\n')
+}
+
+const SEVERITIES: readonly Severity[] = ['error', 'warning', 'note']
+
+/** Gravest first; of one code only the first few in full. */
+function findingRows(findings: Finding[]): string[] {
+  const counts = new Map<string, number>()
+  const sorted = SEVERITIES.flatMap((severity) => findings.filter((finding) => finding.severity === severity))
+  const rows = sorted.flatMap(({ code, severity, message }) => {
+    const count = (counts.get(code) ?? 0) + 1
+    counts.set(code, count)
+    return count <= IN_FULL ? [`  ${severity}: ${message}`] : []
+  })
+  for (const [code, count] of counts)
+    if (count > IN_FULL) rows.push(`  … and ${count - IN_FULL} more of ${code} (--json lists them)`)
+  return rows
 }
 
 function rowsOf(group: FigureGroup, section: Section): string[] {
