@@ -83,7 +83,7 @@ function compute(given: CliArguments): SectionAnswer {
   }
   const declared = UNITS.find((name) => name === drawing.declared) ?? drawing.declaredMm
   const unit = unitGiven ? recipe.unit : (declared ?? recipe.unit)
-  const by = unitGiven ? 'the command line' : declared ? 'the file itself' : 'the default, for the file names none'
+  const by = unitGiven ? 'the command line' : declared ? 'the file itself' : 'the default (the file names none)'
   const { answer } = sectionTask(drawing, source, { ...recipe, unit }, {})
   return withFindings(answer, [taskFinding('unit-unconfirmed', { by, unit })])
 }
