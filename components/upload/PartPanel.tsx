@@ -5,7 +5,7 @@ import type { XY } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
 import { FigureText } from '../lists/FigureText'
 import type { FlowAction } from './flow/flow'
-import { type Detail, partInWindow } from './flow/groups'
+import { type Detail, likelyFrame, partInWindow } from './flow/groups'
 import { NumberChoice } from './NumberChoice'
 import { Panel } from './Panel'
 
@@ -33,6 +33,7 @@ export function PartPanel({
   const inWindow = window ? partInWindow(result, window[0], window[1]) : []
   const take = (next: XY[] | null) => dispatch({ type: 'set', change: { part: next } })
   const turnBy = (degrees: number) => dispatch({ type: 'set', change: { turn: ((((turn + degrees) % 360) + 540) % 360) - 180 } })
+  const frame = likelyFrame(result)
   const chosen = details.filter(({ taken }) => taken)
   const state =
     details.length < 2
@@ -41,10 +42,22 @@ export function PartPanel({
         ? `${chosen.length} of ${details.length} details`
         : `all ${details.length} details`
   return (
-    <Panel title={details.length > 1 ? 'Which detail of the sheet' : 'How it stands'} open={details.length > 1} state={state}>
+    <Panel
+      title={details.length > 1 ? 'Which detail of the sheet' : 'How it stands'}
+      open={details.length > 1 || frame !== null}
+      state={state}
+    >
+      {frame && (
+        <Notice tone="asked">
+          <b>One outline lies round all others,</b> and without it they fall apart into details. Is it the frame of the sheet?
+          <div>
+            <Button onClick={() => dispatch({ type: 'frame', ...frame })}>It is a frame: leave it out</Button>
+          </div>
+        </Notice>
+      )}
       {details.length > 1 && (
         <>
-          {!part && (
+          {chosen.length !== 1 && (
             <Notice tone="asked">
               <b>{details.length} details lie apart.</b> Click one on the board, choose it here, or keep all as one section of
               several pieces.
@@ -64,14 +77,16 @@ export function PartPanel({
                 <span className="flex-1 font-mono text-small">
                   <FigureText value={detail.width} quantity="length" /> × <FigureText value={detail.height} quantity="length" />
                 </span>
-                <span className="text-small text-soft">{saved.get(detail.number) ?? `${detail.outlines} outlines`}</span>
+                <span className="text-small text-soft">
+                  {saved.get(detail.number) ?? `${detail.members.length} ${detail.members.length === 1 ? 'outline' : 'outlines'}`}
+                </span>
                 <Button
                   look="quiet"
-                  aria-pressed={detail.taken}
+                  aria-pressed={detail.taken && chosen.length < details.length}
                   aria-label={`Take detail ${i + 1}`}
                   onClick={() => take(detail.part)}
                 >
-                  {detail.taken ? 'Taken' : 'Take'}
+                  {detail.taken && chosen.length < details.length ? 'Taken' : 'Take'}
                 </Button>
               </li>
             ))}
@@ -80,7 +95,9 @@ export function PartPanel({
             <p className="text-small text-soft">{details.length - LISTED} smaller ones: click them on the board.</p>
           )}
           <div className="mt-2 flex flex-wrap items-center gap-2">
-            {part && <Button onClick={() => take(null)}>Take all</Button>}
+            {chosen.length > 0 && chosen.length < details.length && (
+              <Button onClick={() => take(details.flatMap((detail) => detail.part))}>Take all</Button>
+            )}
             <Button
               disabled={inWindow.length === 0}
               title="Measure on the board from corner to corner of a window first"

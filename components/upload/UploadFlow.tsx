@@ -50,7 +50,7 @@ export function UploadFlow({
   const { settings } = useMe().team
   const writing = useMemo(() => writingOf(settings), [settings])
   const model = useMemo(() => result && previewModel(result), [result])
-  const details = useMemo(() => (result ? detailsOf(result) : []), [result])
+  const details = useMemo(() => (result ? detailsOf(result, choices.frames) : []), [result, choices.frames])
 
   const save = useCallback(async () => {
     await upload.save()
@@ -71,8 +71,9 @@ export function UploadFlow({
   }
   const pick = (id: string | null) => {
     setPicked(id)
-    if (!result || !id || details.length < 2 || choices.recipe.part) return
-    const detail = detailAt(result, details, Number(id.slice(1)) - 1)
+    const taken = details.filter((detail) => detail.taken).length
+    if (!id || details.length < 2 || taken === 1) return
+    const detail = detailAt(details, Number(id.slice(1)) - 1)
     if (detail) dispatch({ type: 'set', change: { part: detail.part } })
   }
   const further = () => {
@@ -81,7 +82,7 @@ export function UploadFlow({
     setMade(new Map([...made, ...taken.map(({ number }) => [number, saved.number] as const)]))
     const { jobId, materialId } = next(target)
     setTarget({ kind: 'new', jobId, title: '', materialId })
-    dispatch({ type: 'set', change: { part: null } })
+    dispatch({ type: 'set', change: { part: choices.frames.length > 0 ? details.flatMap(({ part }) => part) : null } })
     upload.setSaved(null)
   }
   const left = details.filter((detail) => !detail.taken && !made.has(detail.number)).length

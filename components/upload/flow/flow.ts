@@ -12,6 +12,8 @@ export interface Choices {
   finished: 'finished' | 'die' | null
   /** offers of arcs that were looked at and declined, by their first vertex */
   declined: XY[]
+  /** outlines that a person said are the sheet's frame, no profile: details are looked for without them */
+  frames: XY[]
 }
 
 export interface FlowState {
@@ -38,12 +40,13 @@ export type FlowAction =
   | { type: 'finished'; finished: 'finished' | 'die'; shrinkage?: number }
   /** what the file itself says, before a person decides anything */
   | { type: 'begin'; unit: Recipe['unit'] }
+  | { type: 'frame'; at: XY; part: XY[] }
   | { type: 'undo' }
   | { type: 'redo' }
   | { type: 'text'; change: Partial<Pick<FlowState, 'drawingRevision' | 'note'>> }
 
 export function startFlow(recipe: Partial<Recipe> = {}): FlowState {
-  const choices: Choices = { recipe: { ...DEFAULT_RECIPE, ...recipe }, claim: null, finished: null, declined: [] }
+  const choices: Choices = { recipe: { ...DEFAULT_RECIPE, ...recipe }, claim: null, finished: null, declined: [], frames: [] }
   return { history: begin(choices), drawingRevision: '', note: '' }
 }
 
@@ -113,6 +116,8 @@ function decide(now: Choices, action: Decision): Choices {
       const others = recipe.bonds.filter(({ at }) => !samePoint(at, action.bond.at))
       return recipeWith({ bonds: [...others, action.bond] })
     }
+    case 'frame':
+      return { ...afterSet(now, { part: action.part }), frames: [...now.frames, action.at] }
     case 'claim':
       return { ...now, claim: action.claim }
     case 'finished': {

@@ -1,10 +1,12 @@
+import { groupOutlines } from '@/lib/geometry/groups'
 import { mmPerUnit, type XY } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
 
 /** A detail of the sheet: outlines that lie apart from all others. */
 export interface Detail {
   number: number
-  outlines: number
+  /** indices of its outlines */
+  members: number[]
   /** mm, as drawn on the sheet */
   width: number
   height: number
@@ -18,23 +20,33 @@ export interface Detail {
 
 const pointOf = ({ outlines }: PreviewResult, k: number): XY => [outlines.at[2 * k], outlines.at[2 * k + 1]]
 
+/** The outlines that are the sheet, not its details: found by the reader, or said by a person (`frames`). */
+function sheetParts({ outlines }: PreviewResult, frames: readonly XY[]): Set<number> {
+  const parts = new Set([...outlines.frames, ...outlines.titleBlocks.flat()])
+  for (const [x, y] of frames) {
+    for (let k = 0; k < outlines.count; k++) if (outlines.at[2 * k] === x && outlines.at[2 * k + 1] === y) parts.add(k)
+  }
+  return parts
+}
+
 /** The details of a sheet, largest first; frames and title blocks are none. */
-export function detailsOf(result: PreviewResult): Detail[] {
+export function detailsOf(result: PreviewResult, frames: readonly XY[] = []): Detail[] {
   const { outlines, answer } = result
   const mm = mmPerUnit(answer.recipe)
-  const aside = new Set([...outlines.frames, ...outlines.titleBlocks.flat()])
-  const parts = new Map<number, XY[]>()
+  const aside = sheetParts(result, frames)
+  const alone = Uint8Array.from({ length: outlines.count }, (_, k) => Number(aside.has(k)))
+  const { group, groups } = groupOutlines(outlines, alone)
+  const members = new Map<number, number[]>()
   for (let k = 0; k < outlines.count; k++) {
-    if (aside.has(k)) continue
-    const group = outlines.group[k]
-    parts.set(group, [...(parts.get(group) ?? []), pointOf(result, k)])
+    if (!aside.has(k)) members.set(group[k], [...(members.get(group[k]) ?? []), k])
   }
   const chosen = new Set((answer.recipe.part ?? []).map(([x, y]) => `${x} ${y}`))
-  const details = [...parts].map(([number, part]): Detail => {
-    const { minX, minY, maxX, maxY } = outlines.groups[number]
+  const details = [...members].map(([number, own]): Detail => {
+    const { minX, minY, maxX, maxY } = groups[number]
+    const part = own.map((k) => pointOf(result, k))
     return {
       number,
-      outlines: part.length,
+      members: own,
       width: mm * (maxX - minX),
       height: mm * (maxY - minY),
       at: [(minX + maxX) / 2, (minY + maxY) / 2],
@@ -46,9 +58,19 @@ export function detailsOf(result: PreviewResult): Detail[] {
   return details.sort((a, b) => b.size - a.size)
 }
 
+/** The one outline round all others, where what it holds falls apart into details without it: a frame? */
+export function likelyFrame(result: PreviewResult): { at: XY; part: XY[] } | null {
+  const { outlines, answer } = result
+  if (answer.recipe.part || outlines.count < 3) return null
+  const outer = [...outlines.depth.subarray(0, outlines.count)].flatMap((depth, k) => (depth === 0 ? [k] : []))
+  if (outer.length !== 1) return null
+  const at = pointOf(result, outer[0])
+  const details = detailsOf(result, [at])
+  return details.length > 1 ? { at, part: details.flatMap(({ part }) => part) } : null
+}
+
 /** The detail that an outline belongs to. */
-export const detailAt = (result: PreviewResult, details: readonly Detail[], outline: number) =>
-  details.find(({ number }) => number === result.outlines.group[outline])
+export const detailAt = (details: readonly Detail[], outline: number) => details.find(({ members }) => members.includes(outline))
 
 /** A point on each outline that lies wholly in the window, two opposite corners of it in drawing units. */
 export function partInWindow(result: PreviewResult, [ax, ay]: XY, [bx, by]: XY): XY[] {
