@@ -175,9 +175,27 @@ function sideBySide(n: Pieces, i: number, j: number, a: Stretch, tolerance: numb
     low = high
   }
   function crossing(from: Measure, to: Measure): void {
-    const { t, foot } = halve(measure, from, to, 'side')
+    const at = halve(measure, from, to, 'side')
+    const touching = turnNear(measure, at, (a.t1 - a.t0) / 1024)
+    const { t, foot } = touching && Math.abs(touching.side) <= tolerance ? touching : at
     found(t, foot)
   }
+}
+
+/**
+ * Where the distance turns near a crossing, by two Newton steps on the slant, or null where that is not near. If it turns
+ * within the tolerance the crossing is one of two that rounding made of a touch, and the turn is the one point to take.
+ */
+function turnNear(measure: (t: number) => Measure, at: Measure, step: number): Measure | null {
+  const reach = 256 * Math.abs(step)
+  let turn = at
+  for (let n = 0; n < 2; n++) {
+    const rate = (measure(turn.t + step).slant - measure(turn.t - step).slant) / (2 * step)
+    const t = turn.t - turn.slant / rate
+    if (!(Math.abs(t - at.t) <= reach)) return null
+    turn = measure(t)
+  }
+  return turn
 }
 
 interface Measure {
