@@ -57,3 +57,16 @@ describe('what the drawings must be told about', () => {
     expect(codesOf('p23.dxf')).toEqual(expect.arrayContaining(['edges-doubled']))
   })
 })
+
+describe('torsion constants of the references', () => {
+  const withTorsion = all.filter(({ torsion_mm }) => torsion_mm)
+  it.each(withTorsion.map((reference) => [reference.file, reference] as const))(
+    '%s: J lies within its bounds',
+    (_, reference) => {
+      const { section } = compute(reference).answer
+      const { value, accept_rel } = reference.torsion_mm?.j ?? { value: 0, accept_rel: 0 }
+      expect(section?.j?.lower).toBeLessThanOrEqual(value * (1 + accept_rel))
+      expect(section?.j?.upper).toBeGreaterThanOrEqual(value * (1 - accept_rel))
+    },
+  )
+})

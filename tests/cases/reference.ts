@@ -39,6 +39,7 @@ export interface Reference {
   pieces: number
   expected_mm: Figures
   accept_rel: Accept
+  torsion_mm?: { j: { value: number; accept_rel: number } }
   variants?: Variant[]
 }
 
