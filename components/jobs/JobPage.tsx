@@ -1,5 +1,5 @@
 'use client'
-import { useState } from 'react'
+import { lazy, useState } from 'react'
 import { useMay } from '@/components/shell/Me'
 import { PageHead } from '@/components/shell/PageHead'
 import { LinkButton } from '@/components/ui/Button'
@@ -7,10 +7,11 @@ import { Dialog } from '@/components/ui/Dialog'
 import { Menu } from '@/components/ui/Menu'
 import { Notice } from '@/components/ui/Notice'
 import { useJob } from './data'
-import { JobForm } from './JobForm'
 import { jobProfiles } from './lists'
 import { ProfilesList } from './ProfilesList'
 import { useBinning } from './useBinning'
+
+const JobForm = lazy(() => import('./JobForm').then((module) => ({ default: module.JobForm })))
 
 export function JobPage({ id }: { id: string }) {
   const { data: job } = useJob(id)

@@ -1,6 +1,6 @@
 'use client'
 import Link from 'next/link'
-import { useState } from 'react'
+import { lazy, useState } from 'react'
 import { ExportMenu } from '@/components/lists/ExportMenu'
 import { ListBar } from '@/components/lists/ListBar'
 
@@ -18,9 +18,10 @@ import { problemOf } from '@/components/ui/problem'
 import { type Column, Table } from '@/components/ui/Table'
 import type { Job } from '@/lib/api/schemas/job'
 import { allJobs, JOBS, useJobs } from './data'
-import { JobForm } from './JobForm'
 import { JOB_LIST } from './lists'
 import { useBinning } from './useBinning'
+
+const JobForm = lazy(() => import('./JobForm').then((module) => ({ default: module.JobForm })))
 
 export function JobsList() {
   const list = useListQuery(JOBS, JOB_LIST)

@@ -1,6 +1,6 @@
 'use client'
 import Link from 'next/link'
-import { useState } from 'react'
+import { lazy, useState } from 'react'
 import { FigureText } from '@/components/lists/FigureText'
 import { useMay, useMe } from '@/components/shell/Me'
 import { Dialog } from '@/components/ui/Dialog'
@@ -10,8 +10,9 @@ import { type Column, type Sorting, Table } from '@/components/ui/Table'
 import type { Profile } from '@/lib/api/schemas/profile'
 import { axisNames } from '@/lib/section/naming'
 import type { Quantity } from '@/lib/units/quantity'
-import { ProfileForm } from './ProfileForm'
 import { useBinning } from './useBinning'
+
+const ProfileForm = lazy(() => import('./ProfileForm').then((module) => ({ default: module.ProfileForm })))
 
 type Figures = NonNullable<Profile['latest']>['figures']
 

@@ -1,5 +1,5 @@
 'use client'
-import { useState } from 'react'
+import { lazy, useState } from 'react'
 import { ExportMenu } from '@/components/lists/ExportMenu'
 import { useLocalSort } from '@/components/lists/useLocalSort'
 import { useMay, useMe } from '@/components/shell/Me'
@@ -11,8 +11,10 @@ import { type Column, Table } from '@/components/ui/Table'
 import { toast } from '@/components/ui/toastStore'
 import type { Invitation, Person } from '@/lib/api/schemas/people'
 import { useInvitations, usePeople, withdraw } from './data'
-import { InviteForm } from './InviteForm'
-import { PersonForm } from './PersonForm'
+
+const PersonForm = lazy(() => import('./PersonForm').then((module) => ({ default: module.PersonForm })))
+
+const InviteForm = lazy(() => import('./InviteForm').then((module) => ({ default: module.InviteForm })))
 
 const rolesOf = ({ roles, administrator, disabled }: Person) =>
   disabled ? 'disabled' : [...roles, ...(administrator ? ['administrator'] : [])].join(', ')

@@ -1,6 +1,6 @@
 'use client'
 import { useRouter } from 'next/navigation'
-import { useState } from 'react'
+import { lazy, useState } from 'react'
 import { changeMe } from '@/components/people/data'
 import { signOut } from '@/components/setup/session'
 import { Dialog } from '@/components/ui/Dialog'
@@ -9,7 +9,8 @@ import { problemOf } from '@/components/ui/problem'
 import { toast } from '@/components/ui/toastStore'
 import { useMe } from './Me'
 import { THEMES, type Theme, takeTheme } from './theme'
-import { ZoneForm } from './ZoneForm'
+
+const ZoneForm = lazy(() => import('./ZoneForm').then((module) => ({ default: module.ZoneForm })))
 
 const THEME_NAMES: Record<Theme, string> = { system: 'Theme of the system', light: 'Light', dark: 'Dark' }
 

@@ -1,8 +1,8 @@
 'use client'
-import { type ReactNode, useEffect, useId, useRef } from 'react'
+import { type ReactNode, Suspense, useEffect, useId, useRef } from 'react'
 import { Button } from './Button'
 
-/** A modal dialog; the browser's own element keeps focus inside and gives it back. */
+/** A modal dialog; the browser's own element keeps focus inside and gives it back. What it shows may be loaded when it opens. */
 export function Dialog({
   title,
   open,
@@ -37,7 +37,9 @@ export function Dialog({
               ×
             </Button>
           </div>
-          <div className="p-5">{children}</div>
+          <div className="min-h-24 p-5">
+            <Suspense>{children}</Suspense>
+          </div>
         </>
       )}
     </dialog>
