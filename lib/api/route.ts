@@ -3,10 +3,10 @@ import type { Actor } from '@/db/actor'
 import { newId } from '@/db/id'
 import { actorOf } from '@/lib/auth/actor'
 import { can, type Permission } from '@/lib/auth/permissions'
-import { config } from '@/lib/config'
 import { log } from '@/lib/log'
 import { AppError } from './errors'
 import { jsonIn, parse, parseParams, versionIn } from './input'
+import { refuseForeignOrigin } from './origin'
 import { knownError, problemResponse } from './problem'
 import { secure } from './securityHeaders'
 
@@ -76,14 +76,6 @@ export function route<W extends Who, P = null, Q = null, B = null>(
     return secure(response, requestId)
   }
   return Object.assign(handle, { permission: spec.permission })
-}
-
-/** A cookie comes along from any site; a change is taken only from our own pages. */
-function refuseForeignOrigin({ method, headers }: Request): void {
-  if (method === 'GET' || method === 'HEAD' || !headers.has('cookie')) return
-  const origin = headers.get('origin')
-  const own = [new URL(config().appUrl).host, headers.get('host')]
-  if (!origin || !URL.canParse(origin) || !own.includes(new URL(origin).host)) throw new AppError('bad_origin')
 }
 
 function requirePermission(permission: Who, actor: Actor | null): void {

@@ -62,6 +62,7 @@ export const Section = z.object({
     z.string(),
     z.object({
       kind: z.enum(['exact', 'iterated', 'element']),
+      estimate: z.literal(true).optional(),
       plusMinus: z.object({ digits: n.optional(), repairs: n.optional(), numerics: n.optional() }).optional(),
     }),
   ),
