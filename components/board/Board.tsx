@@ -4,6 +4,7 @@ import { AnnotationLayer } from './AnnotationLayer'
 import { annotate, type Writing } from './annotate'
 import type { BoardAction, BoardState } from './boardState'
 import { CentroidMark } from './CentroidMark'
+import { ShearCentreMark } from './ShearCentreMark'
 import { FindingMarks } from './FindingMarks'
 import { HotLayer } from './HotLayer'
 import { outlineAt } from './hit'
@@ -98,6 +99,9 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         <HotLayer {...{ model, hover, frame, base, choices, writing }} shown={state.shown} />
         {tool.layer}
         {model.section && <CentroidMark at={model.section.centroid} view={view} />}
+        {model.section?.shearCentre && state.shown.axes && (
+          <ShearCentreMark at={model.section.shearCentre} view={view} hover={hover} />
+        )}
         {state.share && <ShareLayer model={model} axis={state.share} frame={frame} />}
         <FindingMarks marks={model.marks} view={view} hover={hover} />
       </svg>

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react'
 import type { Shown } from './annotate'
-import { centroidMark } from './marks'
+import { centroidMark, shearCentreMark } from './marks'
 import type { AxisNames } from '@/lib/section/naming'
 import type { BoardModel } from './model'
 
@@ -35,6 +35,13 @@ export function Legend({ model, shown, names }: { model: BoardModel; shown: Show
           }
         >
           centroid
+        </Row>
+      )}
+      {section?.shearCentre && shown.axes && (
+        <Row
+          sample={<path d={shearCentreMark(2.5)} transform="translate(17 6)" className="fill-none stroke-ink" strokeWidth={1} />}
+        >
+          shear centre
         </Row>
       )}
       {section && shown.axes && <Row sample={line('stroke-soft', 1, '12 3 2 3')}>{`centroid axes ${names.x}, ${names.y}`}</Row>}

@@ -8,6 +8,10 @@ export function centroidMark(r: number): { circle: string; quarters: string } {
   }
 }
 
+/** The mark of the shear centre: a small circle with a cross through it, `r` px. */
+export const shearCentreMark = (r: number): string =>
+  `M${-r} 0A${r} ${r} 0 1 0 ${r} 0A${r} ${r} 0 1 0 ${-r} 0ZM${-2 * r} 0H${2 * r}M0 ${-2 * r}V${2 * r}`
+
 /** Hatch lines at 45°, `spacing` px apart across a board this large, with one period to spare for moving. */
 export function hatchLines(width: number, height: number, spacing: number): string {
   const step = spacing * Math.SQRT2

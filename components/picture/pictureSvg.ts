@@ -1,7 +1,7 @@
 import type { Annotations, TextLabel } from '@/components/board/annotation'
 import { annotate, type Writing } from '@/components/board/annotate'
 import { placeLabels, type Segment } from '@/components/board/labels'
-import { centroidMark, hatchLines, hatchShift } from '@/components/board/marks'
+import { centroidMark, hatchLines, hatchShift, shearCentreMark } from '@/components/board/marks'
 import { outlineSegments } from '@/components/board/outlineSegments'
 import { polylineOf } from '@/components/board/polyline'
 import { boxOfRegion } from '@/components/board/regionModel'
@@ -109,6 +109,12 @@ function centroid(at: { x: number; y: number }, view: View): string {
   return element('g', { transform: `translate(${x} ${y})` }, drawn)
 }
 
+function shearCentre(at: { x: number; y: number }, view: View): string {
+  const { x, y } = toScreen(view, at)
+  const drawn = element('path', { d: shearCentreMark(4.5), fill: 'none', stroke: INK, 'stroke-width': 1.2 })
+  return element('g', { transform: `translate(${x} ${y})` }, drawn)
+}
+
 function scaleBar(view: View, { writing, faces }: PictureOptions): string {
   const length = scaleBarLength(view.scale, 220)
   const x = WIDTH - 36 - length * view.scale
@@ -172,6 +178,7 @@ export function pictureSvg(answer: SectionAnswer, region: Region, options: Pictu
       metal(region, box, view),
       annotations(annotate(answer.section, frame, SHOWN, options.writing), edgesOf(region, view), options.faces),
       answer.section ? centroid(answer.section.centroid, view) : '',
+      answer.section?.shearCentre ? shearCentre(answer.section.shearCentre, view) : '',
       scaleBar(view, options),
       titleBlock(answer, options),
       element('rect', { x: 0.5, y: 0.5, width: WIDTH - 1, height: HEIGHT - 1, fill: 'none', stroke: HAIR }),

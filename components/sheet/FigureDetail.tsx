@@ -32,6 +32,13 @@ export function FigureDetail({
         </span>
         <CopyButton text={digits} name={`Copy ${digits} with all digits`} />
       </p>
+      {origin?.kind === 'element' && (
+        <p>
+          {origin.estimate
+            ? 'An estimate by finite elements; its ± is the change between the last two meshes.'
+            : 'By finite elements: the true value lies within the ±, which are bounds from both sides.'}
+        </p>
+      )}
       {causes.length === 0 ? (
         <p>No ± is known for this figure.</p>
       ) : (

@@ -18,6 +18,7 @@ const GROUPS: { group: FigureGroup; title: (names: Names) => string }[] = [
   { group: 'bending', title: ({ x, y }) => `Bending about ${x} and ${y}` },
   { group: 'principal', title: ({ axis1, axis2 }) => `Principal axes ${axis1} and ${axis2}` },
   { group: 'plastic', title: () => 'Plastic bending' },
+  { group: 'torsion', title: () => 'Torsion and shear' },
 ]
 
 interface Row {

@@ -38,6 +38,17 @@ export const SECTION_FINDINGS = {
       `A moment about ${axis} alone reaches only ${percent(part)} of the plastic modulus about ${axis}: the section is not ` +
       'symmetric, and the full modulus needs a moment about the other axis with it.',
   },
+  'torsion-not-sought': {
+    severity: 'note',
+    say: ({ edges, pieces }) =>
+      `Torsion and shear figures are not given for a section this large (${edges} edges in ${pieces} pieces; at most 1,500 edges ` +
+      'in 4 pieces). Take a part of the drawing to have them.',
+  },
+  'torsion-not-found': {
+    severity: 'note',
+    say: () =>
+      'Torsion and shear figures could not be found: the metal is too thin somewhere for finite elements. The other figures stand.',
+  },
 } satisfies Record<string, FindingRow>
 
 export type SectionFindingCode = keyof typeof SECTION_FINDINGS

@@ -12,6 +12,7 @@ import { type Causes, originsOf } from './origins'
 import { ownMoments } from './pieces'
 import { plasticFigures } from './plasticFigures'
 import { type Principal, principalOf } from './principal'
+import { torsionFigures } from './torsionFigures'
 import type { Section } from './types'
 
 export interface SectionInputs {
@@ -102,8 +103,10 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
     ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
     origin: {},
   }
-  section.origin = originsOf(section, boundary, causes, { widths, circle: leverage })
-  return { section, findings: [...sayings(section), ...findings] }
+  const torsion = torsionFigures(region)
+  Object.assign(section, torsion.figures)
+  section.origin = { ...originsOf(section, boundary, causes, { widths, circle: leverage }), ...torsion.origin }
+  return { section, findings: [...sayings(section), ...findings, ...torsion.findings] }
 }
 
 const nothing = (code: 'no-metal' | 'too-thin'): SectionResult => ({

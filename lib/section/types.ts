@@ -15,6 +15,8 @@ export interface PlusMinus {
 }
 export interface Origin {
   kind: OriginKind
+  /** an element figure without bounds: its ± is the change between the last two meshes */
+  estimate?: true
   plusMinus?: PlusMinus
 }
 
@@ -67,6 +69,14 @@ export interface Section {
   circle: { x: number; y: number; radius: number }
   /** sums of the pieces' own second moments, without Steiner terms; present with more than one piece */
   withoutSteiner?: { ix: number; iy: number; ixy: number }
+  /** torsion constant between its bounds; pieces that are not joined add. Absent where it was not sought, which a finding says */
+  j?: { value: number; lower: number; upper: number }
+  /** after Trefftz, free of Poisson's ratio; with iw and the shear areas only for one piece */
+  shearCentre?: { x: number; y: number }
+  /** about the shear centre, mm⁶ */
+  iw?: number
+  /** energy form at ν = 0, for a force along x and along y */
+  shearArea?: { x: number; y: number }
   origin: Record<string, Origin>
 }
 

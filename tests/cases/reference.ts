@@ -39,7 +39,12 @@ export interface Reference {
   pieces: number
   expected_mm: Figures
   accept_rel: Accept
-  torsion_mm?: { j: { value: number; accept_rel: number } }
+  /** drawing's coordinates × mmPerUnit, before any turn */
+  torsion_mm?: {
+    j: { value: number; accept_rel: number }
+    shearCentre: { x: number; y: number; accept_abs: number }
+    iw: { value: number; accept_rel?: number; accept_abs?: number }
+  }
   variants?: Variant[]
 }
 

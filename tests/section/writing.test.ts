@@ -20,10 +20,11 @@ const figure = (key: string) => {
   return found
 }
 
-/** Every number of a section by its dotted path. */
+/** Every number of a section by its dotted path; a bracketed one, { value, lower, upper }, counts once. */
 function numbersOf(value: unknown, path = ''): string[] {
   if (typeof value === 'number') return [path]
   if (value === null || typeof value !== 'object' || Array.isArray(value)) return []
+  if ('lower' in value && 'upper' in value) return [path]
   return Object.entries(value).flatMap(([key, inner]) =>
     key === 'origin' ? [] : numbersOf(inner, path ? `${path}.${key}` : key),
   )

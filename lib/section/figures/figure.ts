@@ -14,7 +14,7 @@ export type Dimension =
   | 'count'
   | 'warping'
 
-export type FigureGroup = 'size' | 'centroid' | 'bending' | 'principal' | 'plastic'
+export type FigureGroup = 'size' | 'centroid' | 'bending' | 'principal' | 'plastic' | 'torsion'
 
 /** A symbol in parts, so that the screen can lower the subscript: { base: 'W', sub: 'el,x' }. */
 export interface FigureSymbol {
@@ -50,6 +50,7 @@ export type Shows =
   | 'plastic2'
   | 'freePlasticX'
   | 'freePlasticY'
+  | 'shearCentre'
 
 /** The kinds of edges that make an otherwise exact figure an iterated one. */
 export type IteratedOn = 'ellipse' | 'bezier'

@@ -15,6 +15,7 @@ import { i1, i2, theta } from './principal'
 import { r1, r2, rx, ry } from './radii'
 import { ip, ix, ixy, iy } from './secondMoments'
 import { BENDING_AXES } from './spread'
+import { torsion } from './torsion'
 import { withoutSteiner } from './withoutSteiner'
 
 /** Every figure of a section, in the order in which sheet, CSV and JSON show them. */
@@ -47,4 +48,5 @@ export const FIGURES: readonly Figure[] = [
   ...BENDING_AXES.map(plasticOffset),
   ...BENDING_AXES.map(plasticShape),
   ...freePlastic,
+  ...torsion,
 ]

@@ -35,24 +35,33 @@ const TURN = Math.PI / 6
 
 /** Pieces of every loop: edges split so that none turns more than 30° nor is longer than `longest`. */
 export function boundaryOf(region: Region, points: Points, longest: number): Boundary {
+  const known = new Map<string, number>()
+  // loops that touch share the vertex, or the triangulation would see two in one place
+  const vertexAt = (x: number, y: number): number => {
+    const key = `${x} ${y}`
+    const vertex = known.get(key) ?? points.x.length
+    if (vertex === points.x.length) {
+      known.set(key, vertex)
+      points.x.push(x)
+      points.y.push(y)
+    }
+    return vertex
+  }
   const boundary: Boundary = { from: [], to: [], edge: [], t0: [], t1: [], curved: [], loop: [] }
   const { edges, loopStart } = region
   for (let loop = 0; loop + 1 < loopStart.length; loop++) {
-    const first = points.x.length
+    const first = boundary.from.length
     for (let edge = loopStart[loop]; edge < loopStart[loop + 1]; edge++) {
       const curved = edges.kind[edge] !== LINE
       const length = Math.hypot(
         edges.ends[4 * edge + 2] - edges.ends[4 * edge],
         edges.ends[4 * edge + 3] - edges.ends[4 * edge + 1],
       )
-      const pieces = Math.max(1, curved ? Math.ceil(turning(region, edge) / TURN - 1e-9) : 1, Math.ceil(length / longest - 1e-9))
+      const turns = curved ? Math.ceil(turning(region, edge) / TURN - 1e-9) : 1
+      const pieces = Math.max(1, turns, Math.ceil(length / longest - 1e-9))
       for (let i = 0; i < pieces; i++) {
-        const start = points.x.length
         const { x, y } = i === 0 ? { x: edges.ends[4 * edge], y: edges.ends[4 * edge + 1] } : pointOn(region, edge, i / pieces)
-        points.x.push(x)
-        points.y.push(y)
-        boundary.from.push(start)
-        boundary.to.push(start + 1)
+        boundary.from.push(vertexAt(x, y))
         boundary.edge.push(edge)
         boundary.t0.push(i / pieces)
         boundary.t1.push((i + 1) / pieces)
@@ -60,7 +69,8 @@ export function boundaryOf(region: Region, points: Points, longest: number): Bou
         boundary.loop.push(loop)
       }
     }
-    boundary.to[boundary.to.length - 1] = first
+    for (let k = first; k < boundary.from.length; k++)
+      boundary.to.push(boundary.from[k + 1 < boundary.from.length ? k + 1 : first])
   }
   return boundary
 }

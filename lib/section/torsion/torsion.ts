@@ -119,38 +119,69 @@ function solveOn(region: Region, mesh: Mesh, unknowns: Unknowns): Solution | nul
   return { ...both, warping: warpingOf(region, mesh, unknowns, warpingFactor, omega) }
 }
 
-/** Rim unknowns held (outer) or tied to their hole's one unknown. */
+/**
+ * Rim unknowns: held at 0 on the outer rim, tied to one unknown a hole. Holes that touch share theirs; one that touches the
+ * outer rim encloses nothing and is held too.
+ */
 function stressUnknowns(
   region: Region,
   mesh: Mesh,
   { count, dof }: Unknowns,
 ): { to: Int32Array; count: number; holes: Map<number, number> } {
-  const FREE = -2
-  const to = new Int32Array(count).fill(FREE)
-  const rimOf = new Int32Array(count).fill(-1)
-  mesh.piece.forEach((k, at) => {
-    if (k < 0) return
-    const t = Math.floor(at / 3)
-    const i = at % 3
-    for (const d of [dof[6 * t + i], dof[6 * t + ((i + 1) % 3)], dof[6 * t + 3 + i]]) rimOf[d] = mesh.boundary.loop[k]
-  })
-  const holes = new Map<number, number>()
+  const rim = rims(region, mesh, count, dof)
+  const to = new Int32Array(count)
+  const unknownOf = new Map<number, number>()
   let next = 0
+  for (let i = 0; i < count; i++) if (rim.of[i] < 0) to[i] = next++
   for (let i = 0; i < count; i++) {
-    const loop = rimOf[i]
-    if (loop < 0) to[i] = next++
-    else if (!region.hole[loop]) to[i] = -1
-  }
-  for (let i = 0; i < count; i++) {
-    if (to[i] !== FREE) continue
-    let k = holes.get(rimOf[i])
-    if (k === undefined) {
-      k = next++
-      holes.set(rimOf[i], k)
+    if (rim.of[i] < 0) continue
+    const loop = rim.root(rim.of[i])
+    if (rim.isOuter(loop)) {
+      to[i] = -1
+      continue
     }
-    to[i] = k
+    const unknown = unknownOf.get(loop) ?? next++
+    unknownOf.set(loop, unknown)
+    to[i] = unknown
   }
+  const holes = new Map<number, number>()
+  region.hole.forEach((isHole, loop) => {
+    const unknown = isHole ? unknownOf.get(rim.root(loop)) : undefined
+    if (unknown !== undefined) holes.set(loop, unknown)
+  })
   return { to, count: next, holes }
+}
+
+interface Rims {
+  /** a loop that the unknown lies on, −1 inside the metal */
+  of: Int32Array
+  /** one loop for all that touch each other */
+  root: (loop: number) => number
+  isOuter: (root: number) => boolean
+}
+
+function rims(region: Region, { piece, boundary }: Mesh, count: number, dof: Uint32Array): Rims {
+  const of = new Int32Array(count).fill(-1)
+  const parent = Int32Array.from(region.hole, (_, loop) => loop)
+  const root = (loop: number): number => {
+    let at = loop
+    while (parent[at] !== at) at = parent[at]
+    return at
+  }
+  piece.forEach((k, at) => {
+    if (k < 0) return
+    const [t, i] = [Math.floor(at / 3), at % 3]
+    for (const d of [dof[6 * t + i], dof[6 * t + ((i + 1) % 3)], dof[6 * t + 3 + i]]) {
+      const loop = boundary.loop[k]
+      if (of[d] >= 0) parent[root(of[d])] = root(loop)
+      of[d] = loop
+    }
+  })
+  const outer = new Set<number>()
+  region.hole.forEach((isHole, loop) => {
+    if (!isHole) outer.add(root(loop))
+  })
+  return { of, root, isOuter: (loop) => outer.has(loop) }
 }
 
 interface Fields {

@@ -96,7 +96,7 @@ const exact: [string, Region, number][] = [
   ]),
 ]
 
-test.each(exact)('J of %s lies between the bounds, at 0.2 %% and at 0.02 %%', (_name, region, j) => {
+test.each(exact)('J of %s lies between bounds a 500th and a 5000th apart', (_name, region, j) => {
   for (const bracket of [0.002, 0.0002]) {
     const torsion = torsionOf(region, { bracket })
     expect(torsion).not.toBeNull()

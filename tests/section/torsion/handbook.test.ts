@@ -21,7 +21,7 @@ const { rows }: { rows: Row[] } = JSON.parse(
 
 // J by FreeFem++ 4.11, second-order triangles on two meshes (fixtures/handbook/README.md); its own estimate × 10 is granted.
 test.each(rows.map((row): [string, Row] => [row.id, row]))(
-  'J of %s lies between bounds 0.2 %% apart',
+  'J of %s lies between bounds a 500th apart',
   (_id, { outline, fe_solution }) => {
     const region = regionOfLoops(outline.map(({ role, vertices }) => (role === 'hole' ? hole(vertices) : outer(vertices))))
     const torsion = torsionOf(region)
