@@ -6,6 +6,7 @@ import { taskFinding } from './findings'
 import type { SectionJob } from './sectionJob'
 import { serveJobs, type Work } from './serveJobs'
 import { readTask, sectionTask } from './tasks'
+import { warmUp } from './warmUp'
 
 const work: Work = ({ path, source, recipe, materials, unconfirmedBy }: SectionJob) => {
   let bytes: Uint8Array
@@ -32,3 +33,4 @@ const work: Work = ({ path, source, recipe, materials, unconfirmedBy }: SectionJ
 }
 
 serveJobs(work, new URL('./watchdog.mjs', import.meta.url))
+warmUp()

@@ -122,6 +122,8 @@ export function createSectionPool(given: Partial<PoolOptions> = {}): SectionPool
     const { item } = slot
     release(slot)
     if (item) settle(item, item.why ?? (signal && WHY[signal]) ?? 'died')
+    // a warm one stands ready for the next job
+    if (item && !closed) startSlot()
     pump()
   }
 
