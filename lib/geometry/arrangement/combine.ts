@@ -4,7 +4,7 @@ import { reverseEdge } from '../reverseEdge'
 import { containersOf } from './containers'
 import { joinLoops, type Loops, noLoops } from './loops'
 import { type Filling, fillingOf, type MakeUp } from './makeUp'
-import type { Tangle } from './tangle'
+import { type Tangle, unclearAt } from './tangle'
 
 /** What lies on both sides of every boundary: of whole outlines that meet no other, and of tangles by set. */
 export interface Combined {
@@ -57,6 +57,8 @@ export function loopsWhere(set: OutlineSet, { whole, tangled }: Combined, is: (f
   for (const { tangle, fillings } of tangled) {
     const a = tangle.arrangement
     const full = fillings.map(is)
+    const unclear = unclearAt(tangle, set, full)
+    if (unclear !== null) faults.push([a.x[unclear], a.y[unclear]])
     for (const v of joinLoops(a, (u) => Number(full[a.left[u]]) - Number(full[a.right[u]]), loops)) faults.push([a.x[v], a.y[v]])
   }
   return { loops, faults }

@@ -1,8 +1,8 @@
-import { type Finding, type FindingParams, type FindingRow, makeFinding } from '../finding'
+import { type Finding, type FindingParams, type FindingRow, makeFinding, placeText } from '../finding'
 
 const shortNumber = (value: number) => String(Number(value.toPrecision(4)))
 const text = (value: FindingParams[string]) => (typeof value === 'number' ? shortNumber(value) : String(value))
-const place = (p: FindingParams) => `(${text(p.x)}, ${text(p.y)})`
+const place = placeText
 
 /** What combining outlines can report. Lengths in the sentences are mm, places drawing units. */
 export const COMBINE_FINDINGS = {
@@ -15,6 +15,18 @@ export const COMBINE_FINDINGS = {
     severity: 'warning',
     say: (p) =>
       `Step ${text(p.step)} of the make-up names the point ${place(p)}, but the nearest outline is ${text(p.distance)} mm away. Check that the make-up belongs to this drawing.`,
+  },
+  'part-point-off': {
+    severity: 'warning',
+    say: (p) =>
+      `The part names an outline by the point ${place(p)}, but the nearest one is ${text(p.distance)} mm away. Check that it is the one that is meant.`,
+  },
+  'faces-undecided': {
+    severity: 'error',
+    say: (p) =>
+      p.count === 1
+        ? `1 area enclosed by branching edges, at ${place(p)}, waits for an answer: metal or void? Answer it, state a make-up, or leave out the lines that are no boundary.`
+        : `${text(p.count)} areas enclosed by branching edges, the first at ${place(p)}, wait for an answer: metal or void? Answer them, state a make-up, or leave out the lines that are no boundary.`,
   },
   'no-outlines': {
     severity: 'error',

@@ -89,7 +89,8 @@ function namedOutlines(set: OutlineSet, points: XY[]): Int32Array {
   return outlines
 }
 
-function distanceTo(set: OutlineSet, outline: number, [x, y]: XY): number {
+/** Distance of a point from the boundary of an outline. */
+export function distanceTo(set: OutlineSet, outline: number, [x, y]: XY): number {
   let least = Number.POSITIVE_INFINITY
   for (let i = set.loopStart[outline]; i < set.loopStart[outline + 1]; i++) {
     least = Math.min(least, nearestOn(set.edges, i, x, y).distance)

@@ -1,7 +1,6 @@
 import Flatbush from 'flatbush'
 import { boundsOfEdges, unionOfBoxes } from '../bounds'
-import { lengthOf } from '../evaluate'
-import { jetAt, newJet } from '../evaluate'
+import { jetAt, lengthOf, newJet } from '../evaluate'
 import { loopTester } from '../nest'
 import type { Region } from '../region'
 import type { Loops } from './loops'

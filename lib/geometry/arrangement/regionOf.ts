@@ -7,7 +7,7 @@ import { MOST_CROSSINGS } from './arrange'
 import { type Combined, combine, loopsWhere } from './combine'
 import { defaultSteps } from './defaultSteps'
 import { combineFinding } from './findings'
-import { type MakeUp, makeUpOf, type Step, statedSteps } from './makeUp'
+import { distanceTo, type MakeUp, makeUpOf, type Step, statedSteps } from './makeUp'
 import { narrowPlaces } from './narrow'
 import { abutting, overlaps, thinOverlaps } from './questions'
 import { regionFrom } from './regionFrom'
@@ -51,6 +51,7 @@ export function regionOf(
   const taken = takenOutlines(set, part)
   const named = makeUp && statedSteps(set, makeUp, taken)
   if (named) findings.push(...pointsOff(makeUp, named.off, tolerances, mmPerUnit))
+  if (part) findings.push(...partOff(set, part, tolerances, mmPerUnit))
   const used = named ? usedBy(set.count, named.steps) : taken
   const failed = (finding: Finding): RegionAnswer => ({
     region: null,
@@ -74,6 +75,8 @@ export function regionOf(
 
   let { steps, materials } = named ?? { steps: [], materials: [null] }
   if (!named) {
+    const open = undecidedFinding(set, taken)
+    if (open) return failed(open)
     const byNesting = defaultSteps(set, taken, tangles)
     if (byNesting.crossing) return failed(crossingFinding(set, byNesting.crossing))
     steps = byNesting.steps
@@ -122,6 +125,22 @@ function pointsOff(makeUp: MakeUpStep[], off: number[], { chaining }: Tolerances
   return far.map(({ at, n }) =>
     combineFinding('make-up-point-off', { step: n + 1, x: at[0], y: at[1], distance: off[n] * mmPerUnit }, at, off[n]),
   )
+}
+
+function partOff(set: OutlineSet, part: XY[], { chaining }: Tolerances, mmPerUnit: number): Finding[] {
+  const outlines = nearestOutlines(set, part)
+  return part.flatMap(([x, y], n) => {
+    const off = outlines[n] < 0 ? 0 : distanceTo(set, outlines[n], [x, y])
+    return off > 10 * chaining ? [combineFinding('part-point-off', { x, y, distance: off * mmPerUnit }, [x, y], off)] : []
+  })
+}
+
+/** Faces that wait for "metal or void?" among the outlines taken: nesting would guess. */
+function undecidedFinding(set: OutlineSet, taken: Uint8Array): Finding | null {
+  const waiting = Array.from({ length: set.count }, (_, k) => k).filter((k) => taken[k] && set.undecided[k])
+  if (waiting.length === 0) return null
+  const [x, y] = [set.at[2 * waiting[0]], set.at[2 * waiting[0] + 1]]
+  return combineFinding('faces-undecided', { count: waiting.length, x, y }, [x, y])
 }
 
 function crossingFinding(set: OutlineSet, crossing: [number, number][]): Finding {

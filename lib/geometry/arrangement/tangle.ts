@@ -1,6 +1,9 @@
 import { type EdgeTable, emptyTable, pushCopy } from '../edges'
 import type { OutlineSet } from '../outlineSet'
 import { type Arrangement, arrange } from './arrange'
+import { contradictions } from './contradictions'
+import { joinLoops, noLoops } from './loops'
+import { perimeterOf } from './regionFrom'
 
 /** Outlines of one cluster arranged together; owner n of the arrangement is outline members[n]. */
 export interface Tangle {
@@ -56,4 +59,22 @@ export function relationsOf({ arrangement, sets, members }: Tangle): Relations {
     for (const b of common.get(a)?.keys() ?? []) if (a < b && !within(a, b) && !within(b, a)) crossing.push([a, b])
   }
   return { within, crossing }
+}
+
+/**
+ * A vertex where rays and order contradict one another in earnest: `full` tells by set what is inside, and some member,
+ * put together again from its own faces, has not the area it was drawn with. Null where all is well.
+ */
+export function unclearAt({ arrangement: a, members }: Tangle, set: OutlineSet, full: boolean[]): number | null {
+  const [vertex] = contradictions(a, full)
+  if (vertex === undefined) return null
+  const sound = members.every((k, n) => {
+    const inside = a.sets.map((held) => held.includes(n))
+    const loops = noLoops()
+    const faults = joinLoops(a, (u) => Number(inside[a.left[u]]) - Number(inside[a.right[u]]), loops)
+    const area = loops.area.reduce((sum, v) => sum + v, 0)
+    const allowed = 8 * a.tolerance * perimeterOf(set, k) + 1e-9 * set.area[k]
+    return faults.length === 0 && Math.abs(area - set.area[k]) <= allowed
+  })
+  return sound ? null : vertex
 }

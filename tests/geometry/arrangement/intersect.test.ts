@@ -89,13 +89,14 @@ test('a cubic y = x³ meets the line y = x/4 in −0.5, 0 and 0.5', () => {
   for (const [k, x] of [-0.5, 0, 0.5].entries()) expect(found[k]).toBeWithin(x, { absolute: 1e-15 })
 })
 
-test('two Bézier arches that cross nine times in the worst case of cubics give all nine points', () => {
+test('two looped cubics turned against one another meet in the same points whichever comes first', () => {
   const s = bezier([p(0, 0), p(12, 5), p(-8, 5), p(4, 0)])
   const turned = mapped([s], turnAndMove(Math.PI / 2, 4.2, -0.3))[0]
   const found = intersectEdges(s, turned, TOLERANCE)
-  for (const m of found) expect(Number.isFinite(m.te + m.tf)).toBe(true)
-  const again = intersectEdges(turned, s, TOLERANCE)
-  expect(found.length).toBe(again.length)
+  const again = intersectEdges(turned, s, TOLERANCE).sort((m, n) => m.tf - n.tf)
+  expect(found.length).toBeGreaterThan(0)
+  expect(again.length).toBe(found.length)
+  for (const [k, m] of found.entries()) expect(again[k].tf).toBeWithin(m.te, { absolute: 1e-9 })
 })
 
 test('a rational quadratic quarter circle shares its whole length with the arc it equals', () => {

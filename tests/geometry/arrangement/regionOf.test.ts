@@ -270,3 +270,38 @@ test('a make-up that cuts everything away is an error, not an empty region', () 
   expect(answer.region).toBeNull()
   expect(codes(answer)).toEqual(['no-metal'])
 })
+
+test('a hole that breaks through the edge by 1e-8 … 1e-5 mm changes topology only with a finding, and area by the displacement', () => {
+  for (let e = -8; e <= -5; e++) {
+    const by = 10 ** e
+    const answer = combined([rectangle(0, 0, 40, 24), circle(20.3, 20 + by, 4)], {
+      makeUp: [step(0, 12, 'add'), step(20.3, 16 + by, 'cut')],
+    })
+    const region = metalOf(answer)
+    const holes = region.hole.reduce((sum, h) => sum + h, 0)
+    expect([by, holes === 1 || answer.findings.length > 0]).toEqual([by, true])
+    expect(measured(region).area).toBeWithin(960 - 16 * PI, { absolute: by * 8 * PI + 1e-7 })
+  }
+})
+
+test('plates that overlap by 1e-6 mm are one piece, with a finding that gives the width', () => {
+  const answer = combined([rectangle(0, 0, 10, 10), rectangle(10 - 1e-6, 2, 10, 6)], {
+    makeUp: [step(0, 5, 'add'), step(20 - 1e-6, 5, 'add')],
+  })
+  expect(metalOf(answer).pieces).toBe(1)
+  const found = answer.findings.find(({ code }) => code === 'overlap-thin')
+  expect(found?.params.width).toBeWithin(1e-6, { relative: 0.01 })
+  expect(found?.params.length).toBeWithin(6, { relative: 1e-6 })
+})
+
+test('parts of a make-up that lie apart from all crossings are taken as drawn, edge for edge', () => {
+  const far = rounded(100, 0, 20, 10, 2)
+  const answer = combined([rectangle(0, 0, 10, 10), circle(10, 5, 3), far], {
+    makeUp: [step(0, 5, 'add'), step(10, 8, 'cut'), step(110, 0, 'add')],
+  })
+  const { edges, loopStart } = metalOf(answer)
+  const loop = Array.from(loopStart.keys()).find((k) => edges.ends[4 * loopStart[k]] > 99)
+  expect(loop).toBeDefined()
+  expect(loopStart[(loop ?? 0) + 1] - loopStart[loop ?? 0]).toBe(far.length)
+  expect(answer.steps.map(({ does }) => does)).toEqual(['add', 'cut', 'add'])
+})
