@@ -24,7 +24,7 @@ export const profileColumns = [
   'job.id as jobId',
   'job.number as jobNumber',
   'job.title as jobTitle',
-  'owner.id as ownerId',
+  'profile.ownerId',
   'owner.name as ownerName',
   'material.id as materialId',
   'material.name as materialName',
@@ -40,7 +40,7 @@ export interface ProfileRow extends Own {
   jobNumber: number
   jobTitle: string
   ownerId: string
-  ownerName: string
+  ownerName: string | null
   materialId: string | null
   materialName: string | null
   revisionId: string | null
@@ -56,7 +56,7 @@ export const toProfileView = (row: ProfileRow): Profile => ({
   drawingNumber: row.drawingNumber,
   job: { id: row.jobId, number: jobNumber(row.jobNumber), title: row.jobTitle },
   material: row.materialId === null ? null : { id: row.materialId, name: row.materialName ?? '' },
-  owner: { id: row.ownerId, name: row.ownerName },
+  owner: { id: row.ownerId, name: row.ownerName ?? '' },
   latest: latestOf(row),
   revisions: row.revisions,
   createdAt: row.createdAt,

@@ -36,11 +36,12 @@ const KEYSET: Keyset<ProfileRow> = {
   circle: figure('circle'),
 }
 
+/** Left joins, though every owner is there: SQLite leaves out those that a count does not read. */
 const profiles = (db: Db, teamId: TeamId) =>
   db
     .selectFrom('profile')
     .innerJoin('job', 'job.id', 'profile.jobId')
-    .innerJoin('user as owner', 'owner.id', 'profile.ownerId')
+    .leftJoin('user as owner', 'owner.id', 'profile.ownerId')
     .leftJoin('material', 'material.id', 'profile.materialId')
     .leftJoin('revision', 'revision.id', 'profile.latestRevisionId')
     .where('profile.teamId', '=', teamId)
