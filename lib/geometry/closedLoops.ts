@@ -18,7 +18,7 @@ export interface ClosedLoops {
   openEdges: EdgeTable
   openStart: Uint32Array
   nets: EdgeTable[]
-  /** open chains that outlines close, with these outlines; null for none */
+  /** open chains and nets that outlines close, with these outlines; null for none */
   onLoops: EdgeTable | null
   repairs: Repair[]
   findings: Finding[]
@@ -61,13 +61,7 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
     for (let i = second.loopStart[k]; i < second.loopStart[k + 1]; i++) pushCopy(first.edges, second.edges, i)
     loopStart.push(first.edges.count)
   }
-  const { net, openEdges, openStart } = chainsOnLoops(
-    first.edges,
-    loopStart,
-    second.openEdges,
-    second.openStart,
-    tolerances.chaining,
-  )
+  const { net, nets, openEdges, openStart } = chainsOnLoops(first.edges, loopStart, second, tolerances)
   const before = reportJoins(first.joins, first.inLoop, true, mmPerUnit)
   const after = reportJoins(second.joins, second.inLoop, false, mmPerUnit)
   return {
@@ -75,7 +69,7 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
     loopStart,
     openEdges,
     openStart: Uint32Array.from(openStart),
-    nets: second.nets,
+    nets,
     onLoops: net,
     repairs: [...before.repairs, ...after.repairs],
     findings: [

@@ -1,11 +1,11 @@
-import { type Finding, type FindingParams, type FindingRow, makeFinding } from './finding'
+import { type Finding, type FindingParams, type FindingRow, makeFinding, placeText } from './finding'
 
 const text = (value: FindingParams[string]) => (typeof value === 'number' ? shortNumber(value) : String(value))
 const shortNumber = (value: number) => (Number.isInteger(value) ? String(value) : String(Number(value.toPrecision(6))))
 const plural = (n: FindingParams[string], one: string, many: string) => (n === 1 ? `1 ${one}` : `${text(n)} ${many}`)
 const mm = (value: FindingParams[string]) => `${typeof value === 'number' ? roundedMm(value) : value} mm`
 const roundedMm = (value: number) => (Math.abs(value) >= 0.1 ? value.toFixed(2) : String(Number(value.toPrecision(3))))
-const place = (p: FindingParams) => `(${text(p.x)}, ${text(p.y)})`
+const place = placeText
 
 /**
  * What chaining, nesting and grouping can report. Lengths in the sentences are mm, places drawing units.
@@ -24,7 +24,7 @@ export const GEOMETRY_FINDINGS = {
   'chain-open': {
     severity: 'warning',
     say: (p) =>
-      `${mm(p.gap)} open at ${place(p)}: a chain of ${plural(p.edges, 'edge', 'edges')} ends at (${text(p.x0)}, ${text(p.y0)}) and (${text(p.x1)}, ${text(p.y1)}) and encloses no metal. Raise the tolerance to close it, or close it in the drawing.`,
+      `${mm(p.gap)} open at ${place(p)}: a chain of ${plural(p.edges, 'edge', 'edges')} ends at ${placeText({ x: p.x0, y: p.y0 })} and ${placeText({ x: p.x1, y: p.y1 })} and encloses no metal. Raise the tolerance to close it, or close it in the drawing.`,
   },
   'ends-ambiguous': {
     severity: 'error',
@@ -62,7 +62,7 @@ export const GEOMETRY_FINDINGS = {
   'outline-without-area': {
     severity: 'warning',
     say: (p) =>
-      `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area; left out. Check the drawing there.`,
+      `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area; left out. It runs back over itself, or crosses itself so that its parts cancel: mend it in the drawing.`,
   },
   'outline-thin': {
     severity: 'warning',
