@@ -21,7 +21,8 @@ const freePort = () =>
 async function serving(args, env, url) {
   const child = spawn(process.execPath, args, { cwd: root, env: { ...process.env, ...env }, stdio: 'ignore' })
   for (let k = 0; k < 300; k++) {
-    if (await fetch(url).catch(() => null)) return child
+    const response = await fetch(url).catch(() => null)
+    if (response?.ok) return child
     if (child.exitCode !== null) break
     await wait(100)
   }
