@@ -16,8 +16,8 @@ export interface DrawingView extends Omit<Drawing, 'edges' | 'entities' | 'remar
   tallies: { layers: Tally[]; lineTypes: Tally[]; kinds: Tally[]; spaces: Tally[] }
 }
 
-/** What an outline does in the make-up; null where a person must still say it. */
-export type Role = Does | null
+/** What an outline does in the make-up taken; `out` too where a person must still say it. */
+export type Role = Does
 
 /** All that the page shows for one recipe. */
 export interface PreviewResult {
