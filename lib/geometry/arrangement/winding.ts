@@ -90,9 +90,7 @@ export function windings(
   for (const u of rows) {
     if (done[u]) continue
     const [x0, y0, x1, y1] = [local.x[from[u]], local.y[from[u]], local.x[to[u]], local.y[to[u]]]
-    const axis = Math.abs(y1 - y0) >= Math.abs(x1 - x0) ? 0 : 1
-    const middle = axis === 0 ? (x0 + x1) / 2 : (y0 + y1) / 2
-    const ahead = axis === 0 ? index.maxX - middle <= middle - index.minX : index.maxY - middle <= middle - index.minY
+    const { axis, ahead } = rayFrom(index, x0, y0, x1, y1)
     let clearest = -1
     let bestTouched: number[] = []
     for (const fraction of FRACTIONS) {
@@ -144,4 +142,17 @@ function interned() {
     return id
   }
   return { sets, idOf }
+}
+
+/** A sub-edge may be crossed by a ray at this sine of the angle between them or more, when that makes the ray shorter. */
+const STEEP = 0.3
+
+/** The axis and direction of the ray: the shorter way out of the drawing of those that cross the sub-edge steeply. */
+function rayFrom(box: Flatbush, x0: number, y0: number, x1: number, y1: number): { axis: 0 | 1; ahead: boolean } {
+  const [x, y] = [(x0 + x1) / 2, (y0 + y1) / 2]
+  const [dx, dy] = [Math.abs(x1 - x0), Math.abs(y1 - y0)]
+  const out = [Math.min(box.maxX - x, x - box.minX), Math.min(box.maxY - y, y - box.minY)]
+  const both = Math.min(dx, dy) > STEEP * Math.hypot(dx, dy)
+  const axis = (both ? out[0] <= out[1] : dy >= dx) ? 0 : 1
+  return { axis, ahead: axis === 0 ? box.maxX - x <= x - box.minX : box.maxY - y <= y - box.minY }
 }
