@@ -24,7 +24,8 @@ export function Dialog({
     <dialog
       ref={dialog}
       aria-labelledby={id}
-      onClose={onClose}
+      // the event comes late: the dialog may be open again by then
+      onClose={() => dialog.current?.open || onClose()}
       className="m-auto w-full max-w-xl rounded border border-hair bg-sheet p-0 text-ink backdrop:bg-black/40"
     >
       {open && (
