@@ -176,7 +176,7 @@ function sideBySide(n: Pieces, i: number, j: number, a: Stretch, tolerance: numb
   }
   function crossing(from: Measure, to: Measure): void {
     const at = halve(measure, from, to, 'side')
-    const touching = turnNear(measure, at, (a.t1 - a.t0) / 1024)
+    const touching = turnNear(measure, at, (a.t1 - a.t0) / 1024, (t) => inside(t, n.t0[j], n.t1[j]))
     const { t, foot } = touching && Math.abs(touching.side) <= tolerance ? touching : at
     found(t, foot)
   }
@@ -186,11 +186,19 @@ function sideBySide(n: Pieces, i: number, j: number, a: Stretch, tolerance: numb
  * Where the distance turns near a crossing, by two Newton steps on the slant, or null where that is not near. If it turns
  * within the tolerance the crossing is one of two that rounding made of a touch, and the turn is the one point to take.
  */
-function turnNear(measure: (t: number) => Measure, at: Measure, step: number): Measure | null {
+function turnNear(
+  measure: (t: number) => Measure,
+  at: Measure,
+  step: number,
+  onCurve: (foot: number) => boolean,
+): Measure | null {
   const reach = 256 * Math.abs(step)
   let turn = at
-  for (let n = 0; n < 2; n++) {
-    const rate = (measure(turn.t + step).slant - measure(turn.t - step).slant) / (2 * step)
+  for (let n = 0; n < 3; n++) {
+    // past the end of the other piece the foot stays at its end, and the slant has another rate
+    const ahead = measure(turn.t + step)
+    const beside = onCurve(ahead.foot) ? ahead : measure(turn.t - step)
+    const rate = (beside.slant - turn.slant) / (beside.t - turn.t)
     const t = turn.t - turn.slant / rate
     if (!(Math.abs(t - at.t) <= reach)) return null
     turn = measure(t)

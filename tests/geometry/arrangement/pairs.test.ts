@@ -6,11 +6,14 @@ import { arrangementOf, type Combined, where } from './combine'
 import { KINDS, pairOf } from './pairs'
 import type { Shape } from './shapes'
 
+/** Seeds that once failed in one kind of edge or another: touches that rounding split in two. */
+const ONCE_WRONG = [1624, 2824, 5904, 6885]
+
 for (const variant of VARIANTS) {
   const runs = runsOf(variant)
   test(`${runs} pairs of ten kinds with ${variant} keep |A∪B|+|A∩B| = |A|+|B| and |A−B|+|A∩B| = |A| to 1e-9`, () => {
     const failures = new Failures()
-    for (let seed = 1; seed <= runs; seed++) {
+    for (const seed of [...Array.from({ length: runs }, (_, n) => n + 1), ...ONCE_WRONG]) {
       const next = random(seed)
       const [a, b] = varied(pairOf(KINDS[seed % KINDS.length], next), variant, next)
       const both = arrangementOf([a, b])
