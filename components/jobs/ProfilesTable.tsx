@@ -73,11 +73,12 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
       head: 'Owner',
       wide: true,
       plain: (profile) => profile.owner.name,
-      cell: (profile) => profile.owner.name,
+      cell: (profile) => <span className="whitespace-nowrap">{profile.owner.name}</span>,
     },
     {
       key: 'revision',
       head: 'Revision',
+      wide: true,
       wide: true,
       plain: (profile) => profile.latest?.letter ?? null,
       cell: ({ latest }) =>

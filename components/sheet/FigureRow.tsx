@@ -70,7 +70,7 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
             {text}
           </button>
         </td>
-        <td className="w-14 whitespace-nowrap pl-1.5 align-baseline text-small text-soft">
+        <td className="w-16 whitespace-nowrap pl-1.5 align-baseline text-small text-soft">
           <UnitText unit={unit} />
         </td>
         <td className="w-4 text-right align-baseline">
