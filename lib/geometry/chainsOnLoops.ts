@@ -29,7 +29,7 @@ interface Foot {
  * Finds open chains both ends of which lie on closed loops within the tolerance (a lug of three lines on the side of a
  * plate), and nets with two such ends (webs that cross inside a chamber): together with the loops they bound faces. Their
  * ends are brought onto the loops. A straight line across an outline bounds no thickness and stays open unless another
- * one beside it makes a wall of both.
+ * line beside it may make a wall of both.
  */
 export function chainsOnLoops(
   edges: EdgeTable,
@@ -50,9 +50,11 @@ export function chainsOnLoops(
     const [a, b] = feetOfChain[k]
     return { chain: k, a, b }
   })
-  const walls = wallLines(straight)
-  const takenChains = new Set(onLoops.filter((k) => !isStraight(k) || walls.has(k)))
   const feetOfNet = nets.map((table) => freeEnds(table, snap).flatMap(([row, end]) => footOf(table, row, end) ?? []))
+  const bent = onLoops.filter((k) => !isStraight(k))
+  const asked = [...feetOfNet.filter((feet) => feet.length > 1), ...bent.map((k) => feetOfChain[k])].flat()
+  const walls = wallLines(straight, new Set(asked.map(({ loop }) => loop)))
+  const takenChains = new Set([...bent, ...walls])
   const net = emptyTable()
   const touched = new Set<number>()
   const take = (table: EdgeTable, from: number, to: number, feet: Foot[]) => {

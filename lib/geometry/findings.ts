@@ -6,6 +6,9 @@ const plural = (n: FindingParams[string], one: string, many: string) => (n === 1
 const mm = (value: FindingParams[string]) => `${typeof value === 'number' ? roundedMm(value) : value} mm`
 const roundedMm = (value: number) => (Math.abs(value) >= 0.1 ? value.toFixed(2) : String(Number(value.toPrecision(3))))
 const place = placeText
+/** ΔA, and ΔI where they are known. */
+const changes = ({ area, dIx, dIy }: FindingParams) =>
+  `the area by ${text(area)} mm²${dIx === undefined ? '' : `, Ix by ${text(dIx)} mm⁴ and Iy by ${text(dIy)} mm⁴`}`
 
 /**
  * What chaining, nesting and grouping can report. Lengths in the sentences are mm, places drawing units.
@@ -19,7 +22,7 @@ export const GEOMETRY_FINDINGS = {
   'gap-closed': {
     severity: 'warning',
     say: (p) =>
-      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how})${p.area === 0 ? '' : `; another reasonable closing would change its area by ${text(p.area)} mm²`}. Check the drawing there.`,
+      `A gap of ${mm(p.gap)} at ${place(p)} was closed (${p.how})${p.area === 0 ? '' : `; another reasonable closing would change ${changes(p)}`}. Check the drawing there.`,
   },
   'chain-open': {
     severity: 'warning',
@@ -104,12 +107,14 @@ export const GEOMETRY_FINDINGS = {
   'title-block-found': {
     severity: 'warning',
     say: (p) =>
-      `${plural(p.count, 'rectangle', 'rectangles')} at ${place(p)} ${p.count === 1 ? 'looks' : 'look'} like a title block or table. Leave ${p.count === 1 ? 'it' : 'them'} out unless they are metal.`,
+      p.count === 1
+        ? `1 area at ${place(p)} looks like a title block or table. Leave it out unless it is metal.`
+        : `${text(p.count)} areas, the first at ${place(p)}, look like a title block or table. Leave them out unless they are metal.`,
   },
   'chords-on-circle': {
     severity: 'note',
     say: (p) =>
-      `${plural(p.chords, 'short chord lies', 'short chords lie')} on one circle of radius ${mm(p.radius)} at ${place(p)}: an arc exploded by another program? As an arc the area changes by ${text(p.area)} mm².`,
+      `${plural(p.chords, 'short chord lies', 'short chords lie')} on one circle of radius ${mm(p.radius)} at ${place(p)}: an arc exploded by another program? As an arc it changes ${changes(p)}.`,
   },
   'arcs-from-chords': {
     severity: 'note',

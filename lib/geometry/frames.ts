@@ -1,6 +1,7 @@
 import { unionOfBoxes } from './bounds'
 import { LINE } from './edges'
 import type { Loops } from './nest'
+import type { OutlineSet } from './outlineSet'
 
 /** Outlines that look like part of a sheet, not of a profile. */
 export interface SheetParts {
@@ -48,14 +49,27 @@ function tableOf(loops: Loops, cluster: number[]): number[] | null {
  * Looks for drawing frames and title blocks. A frame is a rectangle outside all others that touches nothing but title
  * blocks, holds every other outline, these fill less than half of it, and it holds a title block or outlines that hold
  * others, or has the size of a drawing sheet. A title block is at least four rectangles that
- * touch one another and fill a box like cells. Common practice, no source: they are only offered, never decided.
+ * touch one another and fill a box like cells, or the `undecided` faces between a frame and lines that end on it.
+ * Common practice, no source: they are only offered, never decided.
  */
-export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][], mmPerUnit: number): SheetParts {
+export function sheetParts(
+  loops: Loops,
+  { depth, clusters, undecided }: Pick<OutlineSet, 'depth' | 'clusters' | 'undecided'>,
+  mmPerUnit: number,
+): SheetParts {
   const { count } = loops
   const touches = new Uint8Array(count)
   const apart = new Uint8Array(count)
   const titleBlocks: number[][] = []
+  const facesIn = new Map<number, number[]>()
   for (const cluster of clusters) {
+    const [ring, ...others] = cluster.filter((k) => !undecided[k])
+    if (ring !== undefined && others.length === 0 && cluster.length > 1 && isRectangle(loops, ring)) {
+      const faces = cluster.filter((k) => k !== ring)
+      facesIn.set(ring, faces)
+      for (const k of faces) apart[k] = 1
+      continue
+    }
     const cells = cluster.length >= FEWEST_CELLS && cluster.every((k) => isRectangle(loops, k)) ? tableOf(loops, cluster) : null
     if (cells) titleBlocks.push(cells)
     for (const k of cells ?? cluster) (cells ? apart : touches)[k] = 1
@@ -66,7 +80,12 @@ export function sheetParts(loops: Loops, depth: Int32Array, clusters: number[][]
     if (k < 0 || touches[k] || !isRectangle(loops, k)) break
     rings.push(k)
   }
-  while (rings.length > 0 && !isFrame(loops, depth, rings[rings.length - 1], rings.length - 1, apart, mmPerUnit)) rings.pop()
+  const isLastFrame = () => {
+    const ring = rings[rings.length - 1]
+    return isFrame(loops, depth, ring, rings.length - 1, apart, titleBlocks.length > 0 || facesIn.has(ring), mmPerUnit)
+  }
+  while (rings.length > 0 && !isLastFrame()) rings.pop()
+  for (const ring of rings) titleBlocks.push(...[facesIn.get(ring)].flatMap((faces) => (faces ? [faces] : [])))
   return { frames: rings, titleBlocks }
 }
 
@@ -81,7 +100,15 @@ function soleAt(depth: Int32Array, level: number, apart: Uint8Array): number {
   return sole
 }
 
-function isFrame(loops: Loops, depth: Int32Array, outer: number, level: number, apart: Uint8Array, mmPerUnit: number): boolean {
+function isFrame(
+  loops: Loops,
+  depth: Int32Array,
+  outer: number,
+  level: number,
+  apart: Uint8Array,
+  titled: boolean,
+  mmPerUnit: number,
+): boolean {
   const { count, bounds, area } = loops
   let filled = 0
   let deepest = level
@@ -91,7 +118,7 @@ function isFrame(loops: Loops, depth: Int32Array, outer: number, level: number, 
     deepest = Math.max(deepest, depth[k])
   }
   if (deepest === level || filled > 0.5 * area[outer]) return false
-  if (deepest >= level + 2 || apart.includes(1)) return true
+  if (deepest >= level + 2 || titled) return true
   const width = (bounds[4 * outer + 2] - bounds[4 * outer]) * mmPerUnit
   const height = (bounds[4 * outer + 3] - bounds[4 * outer + 1]) * mmPerUnit
   return isSheet(Math.max(width, height), Math.min(width, height))

@@ -96,7 +96,7 @@ type Completed = Omit<OutlineSet, 'openEdges' | 'openStart' | 'repairs'>
 export function completed(related: Related, tolerances: Tolerances, mmPerUnit: number, before: Finding[]): Completed {
   const findings = [...before, ...related.findings]
   const { count, bounds, at } = related
-  const { frames, titleBlocks } = sheetParts(related, related.depth, related.clusters, mmPerUnit)
+  const { frames, titleBlocks } = sheetParts(related, related, mmPerUnit)
   const alone = new Uint8Array(count)
   for (const k of frames) alone[k] = 1
   const { group, groups } = groupOutlines(related, alone)
@@ -121,9 +121,10 @@ export function completed(related: Related, tolerances: Tolerances, mmPerUnit: n
   const details = groups.length - frames.length
   if (details > 1) findings.push(geometryFinding('groups-apart', { groups: details }))
   const arcOffers = chordRuns(related, tolerances.lastDigit)
-  for (const { run, radius, chords, dArea } of arcOffers) {
+  for (const { run, radius, chords, dArea, dIx, dIy } of arcOffers) {
     const [x, y] = run.through
-    const params = { chords, radius: radius * mmPerUnit, area: dArea * mmPerUnit ** 2, x, y }
+    const change = { area: dArea * mmPerUnit ** 2, dIx: dIx * mmPerUnit ** 4, dIy: dIy * mmPerUnit ** 4 }
+    const params = { chords, radius: radius * mmPerUnit, ...change, x, y }
     findings.push(geometryFinding('chords-on-circle', params, [x, y], radius))
   }
   return { ...related, group, groups, frames, titleBlocks, arcOffers, findings }

@@ -111,3 +111,27 @@ test('inside a plate the answers turn round: void is an outline that cuts, metal
   expect([...set.area]).toEqual([400, 60])
   expect([...set.depth]).toEqual([0, 1])
 })
+
+/** an inner rectangle of four lines with a web of two lines between its long sides, each line ending on a side */
+const withWeb = () => new Drawn().lines(3, 3, 57, 37).line(29, 3, 29, 37).line(31, 3, 31, 37)
+
+test('a web of two lines across a chamber asks for 884 + 68 + 884 mm²; one line alone does not', () => {
+  const asked = withWeb().outlines()
+  expect([...asked.area]).toEqual([1836, 884, 68, 884])
+  expect([...asked.undecided]).toEqual([0, 1, 1, 1])
+  expect([...new Drawn().lines(3, 3, 57, 37).line(29, 3, 29, 37).outlines().area]).toEqual([1836])
+})
+
+test('a web that ends on a web line asks for four faces: 884 + 68 + 2 × 416 + 52 mm² make the chamber', () => {
+  const set = withWeb().line(31, 19, 57, 19).line(31, 21, 57, 21).outlines()
+  expect([...set.area.slice(1)].sort((a, b) => a - b)).toEqual([52, 68, 416, 416, 884])
+  expect(codesOf(set)).not.toContain('chain-open')
+})
+
+test('18 parallel lines across a plate are hatching: they stay open, the plate stays 100', () => {
+  const drawn = new Drawn().lines(0, 0, 10, 10)
+  for (let n = 1; n <= 18; n++) drawn.line(0.5 * n, 0, 0.5 * n, 10)
+  const set = drawn.outlines()
+  expect([...set.area]).toEqual([100])
+  expect(codesOf(set)).toEqual(new Array(18).fill('chain-open'))
+})

@@ -73,6 +73,14 @@ test('a title block of 6 cells in the corner of a frame is offered, the frame to
   expect(set.frames).toEqual([12])
 })
 
+test('a title block of lines that end on the frame is offered with it, as the 5 areas between them', () => {
+  const drawn = box(new Drawn(), 60, 60).rectangle(0, 0, 400, 277)
+  drawn.line(300, 0, 300, 40).line(300, 40, 400, 40).line(300, 20, 400, 20).line(350, 0, 350, 40)
+  const set = drawn.outlines()
+  expect(set.frames).toEqual([2])
+  expect(set.titleBlocks).toEqual([[3, 4, 5, 6, 7]])
+})
+
 test('an I of three plates that touch is no title block', () => {
   const set = new Drawn().rectangle(0, 0, 100, 10).rectangle(45, 10, 55, 90).rectangle(0, 90, 100, 100).outlines()
   expect(set.titleBlocks).toEqual([])
