@@ -24,7 +24,7 @@ export const TASK_FINDINGS = {
     say: ({ open }) =>
       Number(open) > 0
         ? `No closed outline was found; ${text(open)} chains stay open. Close their gaps, raise the tolerance or choose other layers.`
-        : 'No closed outline was found: the drawing has no lines, arcs, polylines or splines that the recipe takes. Check layers, line types and layouts.',
+        : 'No closed outline was found: nothing that the recipe takes encloses an area. Check layers, line types and layouts.',
   },
   'opinion-disagrees': {
     severity: 'warning',

@@ -25,6 +25,10 @@ export function unitFindings(drawing: Drawing, recipe: Recipe, section: Section 
   return findings
 }
 
+/** Without the questions "metal or void?" where a part or a make-up has answered them: else there would be no metal taken. */
+export const withoutMootQuestions = (findings: Finding[], taken: number[]): Finding[] =>
+  taken.length === 0 ? findings : findings.filter(({ code }) => code !== 'face-metal-or-void')
+
 /**
  * Where only some outlines of a sheet are taken, a fault that lies farther from them than their own size is another detail's:
  * it stays visible as a warning, and blocks nothing.
