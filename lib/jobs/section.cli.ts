@@ -26,42 +26,53 @@ function readFile(file: string): Uint8Array {
   return readFileSync(file)
 }
 
-function readJson(file: string): unknown {
-  const text = new TextDecoder().decode(readFile(file))
+function readJson(option: string, file: string): unknown {
   try {
-    return JSON.parse(text)
+    return JSON.parse(new TextDecoder().decode(readFile(file)))
   } catch (error) {
-    throw new Refusal(`${file} is not JSON: ${error instanceof Error ? error.message : String(error)}`)
+    if (error instanceof Refusal) throw new Refusal(`${option}: ${error.message}`)
+    throw new Refusal(`${option}: ${file} is not JSON: ${error instanceof Error ? error.message : String(error)}`)
   }
 }
 
-function numberOf(option: string, text: string): number {
-  const value = Number(text)
-  if (text.trim() === '' || !Number.isFinite(value)) throw new Refusal(`${option} takes a number, not "${text}".`)
+const NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i
+
+function numberOf(option: string, text: string, takes = 'a number'): number {
+  const value = NUMBER.test(text) ? Number(text) : Number.NaN
+  if (!Number.isFinite(value)) throw new Refusal(`${option} takes ${takes}, not "${text}".`)
   return value
 }
 
 function unitOf(text: string): Recipe['unit'] {
-  return UNITS.find((unit) => unit === text) ?? numberOf('--unit', text)
+  return UNITS.find((unit) => unit === text) ?? numberOf('--unit', text, `${UNITS.join(', ')} or a number of mm`)
 }
 
 /** The recipe of file and options; `unit` is undefined where nobody named one. */
 function recipeOf({ recipe, unit, scale, tolerance, makeUp }: CliArguments): { recipe: Recipe; unitGiven: boolean } {
-  const given = recipe === undefined ? {} : readJson(recipe)
-  if (typeof given !== 'object' || given === null || Array.isArray(given)) throw new Refusal(`${recipe} holds no recipe.`)
+  const given = recipe === undefined ? {} : readJson('--recipe', recipe)
+  if (typeof given !== 'object' || given === null || Array.isArray(given))
+    throw new Refusal(`--recipe: ${recipe} holds no recipe.`)
   const wanted = {
     ...given,
     ...(unit !== undefined && { unit: unitOf(unit) }),
     ...(scale !== undefined && { scale: numberOf('--scale', scale) }),
     ...(tolerance !== undefined && { tolerance: numberOf('--tolerance', tolerance) }),
-    ...(makeUp !== undefined && { makeUp: readJson(makeUp) }),
+    ...(makeUp !== undefined && { makeUp: readJson('--make-up', makeUp) }),
   }
   const parsed = RecipeInput.safeParse(wanted)
   if (!parsed.success) {
     const [{ path: where, message }] = parsed.error.issues
-    throw new Refusal(`The recipe cannot be used: ${where.join('.') || 'recipe'}: ${message}.`)
+    throw new Refusal(`${givenBy(where, { unit, scale, tolerance, makeUp })} cannot be used: ${message}.`)
   }
   return { recipe: parsed.data, unitGiven: 'unit' in wanted }
+}
+
+/** Which option a wrong field of the recipe came from, and where in its file. */
+function givenBy([field, ...rest]: PropertyKey[], options: Record<string, string | undefined>): string {
+  if (field === undefined) return '--recipe'
+  if (options[String(field)] === undefined) return `--recipe: ${[field, ...rest].join('.')}`
+  const option = field === 'makeUp' ? '--make-up' : `--${String(field)}`
+  return rest.length > 0 ? `${option}: ${rest.join('.')}` : option
 }
 
 function parsed(argv: string[]): CliArguments {
@@ -100,6 +111,7 @@ function main(): number {
     if (given.json) console.log(JSON.stringify(answer, null, 2))
     else if (answer.section) console.log(tableOf(answer))
     if (answer.section) return 0
+    if (given.json) return 2
     const errors = answer.findings.filter(({ severity }) => severity === 'error')
     for (const { message } of errors.length > 0 ? errors : answer.findings) console.error(message)
     return 2

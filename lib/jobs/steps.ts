@@ -24,6 +24,7 @@ export function keysOf(recipe: Recipe, materials: Record<string, UsedMaterial>):
 }
 
 export interface Chained {
+  drawing: Drawing
   selection: Selection
   outlines: OutlineSet
   tolerances: Tolerances
@@ -34,13 +35,15 @@ export function chainStep(drawing: Drawing, recipe: Recipe): Chained {
   const selection = selectEdges(drawing, recipe)
   const tolerances = tolerancesOf(drawing, selection.edges, recipe)
   const options = { arcs: recipe.arcs, bonds: recipe.bonds, mmPerUnit: mmPerUnit(recipe) }
-  return { selection, tolerances, outlines: outlinesOf(drawing.edges, selection.edges, tolerances, options) }
+  return { drawing, selection, tolerances, outlines: outlinesOf(drawing.edges, selection.edges, tolerances, options) }
 }
 
 /** Outlines to net metal, drawing units, before the turn. */
-export function combineStep({ outlines, tolerances }: Chained, recipe: Recipe): RegionAnswer {
+export function combineStep({ drawing, selection, outlines, tolerances }: Chained, recipe: Recipe): RegionAnswer {
   if (outlines.count > 0) return regionOf(outlines, recipe, tolerances, mmPerUnit(recipe))
-  const findings = [taskFinding('outlines-none', { open: outlines.openStart.length - 1 })]
+  // an error before this one says why there is nothing
+  const isExplained = [drawing, selection, outlines].some((step) => step.findings.some(({ severity }) => severity === 'error'))
+  const findings = isExplained ? [] : [taskFinding('outlines-none', { open: outlines.openStart.length - 1 })]
   return { region: null, parts: [], roles: [], steps: [], findings, repairs: [] }
 }
 
@@ -49,6 +52,8 @@ export interface Figures {
   /** mm, turned */
   region: Region | null
   findings: Finding[]
+  /** the repairs of the outlines taken, where the section has them: mm, turned */
+  repairs: Repair[]
 }
 
 /** Net metal to section: scaled to mm and turned first. */
@@ -58,14 +63,15 @@ export function figuresStep(
   recipe: Recipe,
   materials: Record<string, UsedMaterial>,
 ): Figures {
-  if (!combined.region) return { section: null, region: null, findings: [] }
+  if (!combined.region) return { section: null, region: null, findings: [], repairs: [] }
   const scale = mmPerUnit(recipe)
   const placed = (region: Region) => transformRegion(region, { scale, turn: recipe.turn })
   const region = placed(combined.region)
   const { masses, findings } = massesOf(combined.parts, recipe.material, materials, placed)
-  const inputs = { lastDigit: drawing.lastDigit * scale, repairs: placedRepairs(combined.repairs, scale, recipe.turn), ...masses }
+  const repairs = placedRepairs(combined.repairs, scale, recipe.turn)
+  const inputs = { lastDigit: drawing.lastDigit * scale, repairs, ...masses }
   const result = sectionOf(region, inputs)
-  return { section: result.section, region, findings: [...findings, ...result.findings] }
+  return { section: result.section, region, findings: [...findings, ...result.findings], repairs }
 }
 
 function placedRepairs(repairs: Repair[], scale: number, turn: number): Repair[] {

@@ -81,14 +81,29 @@ describe('npm run section', () => {
     const broken = section(casePath('p01.dxf'), '--recipe', written('broken.json', '{"unit":'))
     expect(broken).toMatchObject({ status: 2, stderr: expect.stringContaining('broken.json is not JSON') })
     const wrong = section(casePath('p01.dxf'), '--recipe', written('wrong.json', { tolerance: 'fine' }))
-    expect(wrong).toMatchObject({ status: 2, stderr: expect.stringContaining('tolerance') })
+    expect(wrong).toMatchObject({ status: 2, stderr: expect.stringContaining('--recipe: tolerance') })
+  })
+
+  it.each([
+    ['--unit', '0'],
+    ['--unit', '0x10'],
+    ['--scale', '-2'],
+    ['--scale', 'two'],
+    ['--tolerance', '0,01'],
+    ['--tolerance', '1e9'],
+    ['--make-up', written('burn.json', [{ at: [0, 1], does: 'burn' }])],
+    ['--make-up', 'missing.json'],
+  ])('%s=%s ends with 2 and a sentence that names the option', (option, value) => {
+    const { status, stdout, stderr } = section(casePath('p01.dxf'), `${option}=${value}`)
+    expect([status, stdout]).toEqual([2, ''])
+    expect(stderr.startsWith(option)).toBe(true)
   })
 
   it('a drawing without a section ends with 2: a sentence, or with --json the answer with section null', () => {
     const file = written('text.dxf', 'this is no drawing\n')
     expect(section(file)).toMatchObject({ status: 2, stdout: '', stderr: expect.stringMatching(/\w+/) })
     const json = section(file, '--json')
-    expect(json.status).toBe(2)
+    expect([json.status, json.stderr]).toEqual([2, ''])
     const answer = SectionAnswer.parse(JSON.parse(json.stdout))
     expect(answer.section).toBeNull()
     expect(answer.findings.some(({ severity }) => severity === 'error')).toBe(true)
