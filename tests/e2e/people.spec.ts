@@ -46,4 +46,5 @@ test('figures follow the team’s unit, and the densities name their source', as
   await expect(page.getByRole('row').filter({ hasText: 'EN AW-6060 T66' })).toContainText('EN 1999-1-1')
   await page.getByLabel('mm, mm², mm⁴').check()
   await page.getByRole('button', { name: 'Save settings' }).click()
+  await expect(page.getByText('The team’s settings are saved.')).toBeVisible()
 })

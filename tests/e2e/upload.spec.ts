@@ -80,6 +80,7 @@ test('from sign-in to a saved revision by keys alone', async ({ page }) => {
   await page.keyboard.type(fresh('Keys'))
   await page.keyboard.press('Enter')
   await expect(page.getByText('Drop the DXF here')).toBeVisible({ timeout: 20_000 })
+  await page.getByRole('button', { name: 'Choose a file' }).focus()
   const choosing = page.waitForEvent('filechooser')
   await page.keyboard.press('o')
   await (await choosing).setFiles(drawing('mullion-60x118.dxf'))
