@@ -8,9 +8,10 @@ import type { Region } from '../geometry/region'
 import type { Combination } from '../opinions/combination'
 import type { SectionAnswer } from '../section/types'
 import { answerOf, type Source, type UsedMaterial } from './answer'
+import { withGapMoments } from './gapMoments'
 import { memo } from './memo'
 import type { Role, Stage } from './previewProtocol'
-import { unitFindings, withoutFarFaults } from './sayings'
+import { unitFindings, withoutFarFaults, withoutMootQuestions } from './sayings'
 import { chainStep, combineStep, figuresStep, keysOf } from './steps'
 
 export interface TaskResult {
@@ -58,10 +59,11 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
       onStage('figures')
       const figures = figured(keys.figures, drawing, combine, recipe, materials)
       const taken = combine.steps.map(({ outline }) => outline)
+      const chainFindings = withGapMoments(outlines.findings, combine.repairs, figures.repairs, figures.section)
       const findings = [
         ...drawing.findings,
         ...selection.findings,
-        ...withoutFarFaults(outlines.findings, outlines, taken),
+        ...withoutFarFaults(withoutMootQuestions(chainFindings, taken), outlines, taken),
         ...combine.findings,
         ...figures.findings,
         ...unitFindings(drawing, recipe, figures.section),

@@ -8,12 +8,15 @@ import { createSectionPool, type SectionPool } from '@/lib/jobs/server-pool'
 import { createTask, readTask, sectionTask } from '@/lib/jobs/tasks'
 import { caseBytes, casePath, references } from '../cases/reference'
 import { bundle } from '../support/bundle'
+import { circle, drawn as draw, line, read } from '../support/dxf'
 
 const source = (file: string) => ({ name: file, bytes: caseBytes(file).length, sha256: '' })
 const compute = (file: string, change: Partial<Recipe> = {}) =>
   sectionTask(readTask(caseBytes(file)), source(file), { ...DEFAULT_RECIPE, ...change }, { al: ALUMINIUM })
 const ALUMINIUM = { name: 'aluminium', density: 2700, source: 'EN 1999-1-1, from memory' }
 const entities = (text: string) => new TextEncoder().encode(`0\nSECTION\n2\nENTITIES\n${text}0\nENDSEC\n0\nEOF\n`)
+const rectangle = (x: number, y: number, w: number, h: number) =>
+  line(x, y, x + w, y) + line(x + w, y, x + w, y + h) + line(x + w, y + h, x, y + h) + line(x, y + h, x, y)
 const circles = (count: number) =>
   Array.from({ length: count }, (_, k) => `0\nCIRCLE\n8\nA\n10\n${3 * k}.0\n20\n0.0\n40\n1.0\n`).join('')
 
@@ -87,6 +90,39 @@ describe('drawing and recipe to section', () => {
     const { answer, region } = sectionTask(readTask(entities('')), source('p01.dxf'), DEFAULT_RECIPE, {})
     expect([answer.section, region]).toEqual([null, null])
     expect(answer.findings.some(({ severity }) => severity === 'error')).toBe(true)
+  })
+
+  it.each([
+    ['this is no drawing', ['file-not-dxf']],
+    [draw(''), ['nothing-drawn']],
+    [draw(circle(0, 0, -1)), ['radius-bad']],
+    [draw(line(0, 0, 1, 0)), ['outlines-none']],
+  ])('one error says why there is no outline in drawing %#', (text, errors) => {
+    const { findings } = sectionTask(read(text), source('p01.dxf'), DEFAULT_RECIPE, {}).answer
+    expect(findings.flatMap(({ code, severity }) => (severity === 'error' ? [code] : []))).toEqual(errors)
+  })
+
+  it('a gap closed at a corner says what a straight edge would change there: ΔA = ∓0.125 mm², ΔIx and ΔIy with it', () => {
+    const cutCorner = (x: number, y: number, w: number, h: number) =>
+      line(x, y, x + w - 0.5, y) + line(x + w, y + 0.5, x + w, y + h) + line(x + w, y + h, x, y + h) + line(x, y + h, x, y)
+    const gapIn = (entities: string) => {
+      const { section, findings } = sectionTask(
+        read(draw(entities)),
+        source('p01.dxf'),
+        { ...DEFAULT_RECIPE, tolerance: 1 },
+        {},
+      ).answer
+      const { params, message } = findings.find(({ code }) => code === 'gap-closed') ?? { params: {}, message: '' }
+      return { params, message, dIx: 0.125 * (0.25 - (section?.centroid.y ?? 0)) ** 2, dIy: 0.125 * (59.75 - 30) ** 2 }
+    }
+    const outer = gapIn(cutCorner(0, 0, 60, 40))
+    expect(outer.params.area).toBeWithin(-0.125, { relative: 1e-12 })
+    expect(outer.params.dIx).toBeWithin(-outer.dIx, { relative: 1e-12 })
+    expect(outer.params.dIy).toBeWithin(-outer.dIy, { relative: 1e-12 })
+    expect(outer.message).toContain('the area by -0.125 mm², Ix by -48.7578 mm⁴ and Iy by -110.633 mm⁴')
+    const hole = gapIn(rectangle(-10, -10, 80, 60) + cutCorner(0, 0, 60, 40))
+    expect(hole.params.area).toBeWithin(0.125, { relative: 1e-12 })
+    expect(hole.params.dIx).toBeWithin(hole.dIx, { relative: 1e-12 })
   })
 })
 
