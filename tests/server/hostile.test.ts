@@ -27,7 +27,7 @@ let saved = 0
 test.each(HOSTILE)('$name: a clear sentence and nothing stored, or read right', async ({ bytes, file, expects }) => {
   const started = Date.now()
   const { status, json } = await me.upload(profileId, new Uint8Array(bytes), { name: file })
-  expect(Date.now() - started).toBeLessThan(8000)
+  expect(Date.now() - started).toBeLessThan(20_000)
   if ('area' in expects) {
     expect(status, JSON.stringify(json.findings ?? json)).toBe(201)
     saved++

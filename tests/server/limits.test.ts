@@ -31,7 +31,7 @@ function lattice(n: number): string {
 test('a drawing of 9,000,000 crossings is stopped after 2 s with a sentence, and the next one is computed', async () => {
   const started = Date.now()
   const { status, json } = await me.upload(profileId, lattice(3000))
-  expect(Date.now() - started).toBeLessThan(15_000)
+  expect(Date.now() - started).toBeLessThan(30_000)
   expect([status, json.code], JSON.stringify(json).slice(0, 500)).toEqual([422, 'compute_limit'])
   expect(json.detail).toContain('more than the 2 s')
   expect((await me.upload(profileId, rectanglesDxf([0, 0, 40, 60]))).status).toBe(201)
@@ -71,7 +71,7 @@ test('a computation that its person cancels frees the child at once', async () =
   expect(await cancelled).toBe('cancelled')
   const started = Date.now()
   expect((await person.upload(profile, rectanglesDxf([0, 0, 40, 60]))).status).toBe(201)
-  expect(Date.now() - started).toBeLessThan(10_000)
+  expect(Date.now() - started).toBeLessThan(30_000)
   await patient.stop()
 })
 
