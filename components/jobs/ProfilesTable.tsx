@@ -79,7 +79,6 @@ export function useProfileColumns({ ofJob = false }: { ofJob?: boolean } = {}): 
       key: 'revision',
       head: 'Revision',
       wide: true,
-      wide: true,
       plain: (profile) => profile.latest?.letter ?? null,
       cell: ({ latest }) =>
         latest ? <StateBadge letter={latest.letter} state={latest.state} /> : <span className="text-soft">none yet</span>,
