@@ -45,7 +45,7 @@ const CHECKS = {
     }))
   },
   browser() {
-    const env = { PLAYWRIGHT_JSON_OUTPUT_NAME: report('browser') }
+    const env = { PLAYWRIGHT_JSON_OUTPUT_NAME: report('browser'), E2E_DATA_DIR: path.join(reports, 'data') }
     const ok = run(bin('@playwright/test/cli.js'), ['test', '--reporter=list,json', '--pass-with-no-tests'], env)
     return counted(ok, 'browser', ({ stats }) => ({ passed: stats.expected + stats.flaky, failed: stats.unexpected }))
   },
