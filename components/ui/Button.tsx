@@ -6,6 +6,7 @@ const LOOKS = {
   plain: 'border-edge bg-field text-ink hover:border-ink',
   main: 'border-accent bg-accent text-sheet hover:opacity-90',
   quiet: 'border-transparent bg-transparent text-soft hover:text-ink hover:border-hair',
+  link: 'border-transparent bg-transparent text-accent hover:border-hair',
   danger: 'border-brick bg-field text-brick hover:bg-brick hover:text-sheet',
 }
 interface Own {

@@ -19,8 +19,7 @@ export function Toasts() {
           <p className="flex-1">{text}</p>
           {undo && (
             <Button
-              look="quiet"
-              className="text-accent"
+              look="link"
               onClick={() => {
                 dismiss(id)
                 undo()

@@ -62,7 +62,7 @@ export function FindingsPanel({
             <div className="flex flex-wrap gap-1">
               {finding.at && <Show at={finding.at} size={finding.size ?? 0} onShow={onShow} />}
               {remediesOf(finding, result).map(({ word, action }) => (
-                <Button key={word} look="quiet" className="text-accent" onClick={() => dispatch(action)}>
+                <Button key={word} look="link" onClick={() => dispatch(action)}>
                   {word}
                 </Button>
               ))}
@@ -87,7 +87,7 @@ function Show({
   onShow: (at: [number, number], size: number) => void
 }) {
   return (
-    <Button look="quiet" className="text-accent" onClick={() => onShow(at, size)}>
+    <Button look="link" onClick={() => onShow(at, size)}>
       Show
     </Button>
   )

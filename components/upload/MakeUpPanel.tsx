@@ -38,9 +38,15 @@ export function MakeUpPanel({
   const { answer, roles } = result
   const { outlines, recipe } = answer
   const unsaid = roles.filter((role) => role === null).length
-  const all = stepsOf(recipe.makeUp, outlines).map((step) => ({ step, outline: outlineOf(step, outlines) }))
   const roleOf = (outline: OutlineView | undefined) => (outline ? roles[Number(outline.id.slice(1)) - 1] : 'out')
-  const shown = all.length > LISTED ? all.filter(({ outline }) => roleOf(outline) !== 'out').slice(0, LISTED) : all
+  // what belongs to another detail of the sheet is no question here
+  const part = recipe.part && new Set(recipe.part.map((at) => at.join(' ')))
+  const all = stepsOf(recipe.makeUp, outlines)
+    .map((step) => ({ step, outline: outlineOf(step, outlines) }))
+    .filter(({ outline }) => !part || (outline !== undefined && part.has(outline.at.join(' '))))
+  const counted = all.filter(({ outline }) => roleOf(outline) !== 'out' || outline?.id === picked)
+  const listed = counted.filter(({ outline }, i) => i < LISTED || outline?.id === picked)
+  const shown = all.length > LISTED ? listed : all
   const silent = recipe.part ? 0 : outlines.filter((outline) => outline.depth === null && roleOf(outline) === 'out').length
   const adds = roles.filter((role) => role === 'add').length
   const cuts = roles.filter((role) => role === 'cut').length
@@ -81,7 +87,9 @@ export function MakeUpPanel({
       </ol>
       {shown.length < all.length && (
         <p className="text-small text-soft">
-          {all.length - shown.length} further outlines are left out. Pick one on the board to see it.
+          {counted.length > shown.length && `${counted.length - shown.length} further outlines count. `}
+          {all.length > counted.length && `${all.length - counted.length} outlines are left out. `}
+          Pick one on the board to see its row.
         </p>
       )}
       {recipe.makeUp && (

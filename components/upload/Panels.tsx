@@ -21,10 +21,11 @@ export function Panels({
   hover,
   picked,
   measured,
-  window,
+  windowing,
   zoneOf,
   dispatch,
   onShow,
+  onWindow,
 }: {
   result: PreviewResult
   choices: Choices
@@ -33,16 +34,17 @@ export function Panels({
   hover: HoverStore
   picked: string | null
   measured: number | null
-  window: [XY, XY] | null
+  windowing: boolean
   zoneOf: (at: XY) => string
   dispatch: (action: FlowAction) => void
   onShow: (at: XY, size: number) => void
+  onWindow: () => void
 }) {
   const { recipe } = choices
   return (
     <>
       <FindingsPanel {...{ result, hover, zoneOf, dispatch, onShow }} />
-      <PartPanel {...{ result, details, window, dispatch, onShow }} saved={made} />
+      <PartPanel {...{ result, details, windowing, dispatch, onShow, onWindow }} frames={choices.frames} saved={made} />
       <SizePanel {...{ result, choices, measured, dispatch, onShow }} />
       <MakeUpPanel {...{ result, hover, picked, dispatch }} />
       <ArcsPanel {...{ result, recipe, dispatch, onShow }} declined={choices.declined} />

@@ -1,11 +1,12 @@
 'use client'
 import { Button } from '@/components/ui/Button'
+import { Select } from '@/components/ui/Field'
 import { Notice } from '@/components/ui/Notice'
 import type { XY } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
 import { FigureText } from '../lists/FigureText'
 import type { FlowAction } from './flow/flow'
-import { type Detail, likelyFrame, partInWindow } from './flow/groups'
+import { blocksOf, type Detail, likelyFrame, type PlacedBlock } from './flow/groups'
 import { NumberChoice } from './NumberChoice'
 import { Panel } from './Panel'
 
@@ -15,22 +16,27 @@ const LISTED = 60
 export function PartPanel({
   result,
   details,
-  window,
+  frames,
+  windowing,
   saved,
   dispatch,
   onShow,
+  onWindow,
 }: {
   result: PreviewResult
   details: Detail[]
-  /** two corners measured on the board, drawing units */
-  window: [XY, XY] | null
+  /** outlines that a person said are the sheet's frame */
+  frames: readonly XY[]
+  /** the window is being drawn on the board */
+  windowing: boolean
   /** what was saved from this sheet, by the detail's number */
   saved: ReadonlyMap<number, string>
   dispatch: (action: FlowAction) => void
   onShow: (at: XY, size: number) => void
+  onWindow: () => void
 }) {
   const { part, turn } = result.answer.recipe
-  const inWindow = window ? partInWindow(result, window[0], window[1]) : []
+  const blocks = blocksOf(result, frames)
   const take = (next: XY[] | null) => dispatch({ type: 'set', change: { part: next } })
   const turnBy = (degrees: number) => dispatch({ type: 'set', change: { turn: ((((turn + degrees) % 360) + 540) % 360) - 180 } })
   const frame = likelyFrame(result)
@@ -59,7 +65,7 @@ export function PartPanel({
         <>
           {chosen.length !== 1 && (
             <Notice tone="asked">
-              <b>{details.length} details lie apart.</b> Click one on the board, choose it here, or keep all as one section of
+              <b>{details.length} details lie apart.</b> Click one on the board, draw a window round it, choose it here, or keep all as one section of
               several pieces.
             </Notice>
           )}
@@ -94,16 +100,13 @@ export function PartPanel({
           {details.length > LISTED && (
             <p className="text-small text-soft">{details.length - LISTED} smaller ones: click them on the board.</p>
           )}
+          {blocks.length > 0 && <BlockChoice blocks={blocks} onTake={take} />}
           <div className="mt-2 flex flex-wrap items-center gap-2">
             {chosen.length > 0 && chosen.length < details.length && (
               <Button onClick={() => take(details.flatMap((detail) => detail.part))}>Take all</Button>
             )}
-            <Button
-              disabled={inWindow.length === 0}
-              title="Measure on the board from corner to corner of a window first"
-              onClick={() => take(inWindow)}
-            >
-              Take what lies in the measured window{inWindow.length > 0 && ` (${inWindow.length})`}
+            <Button aria-pressed={windowing} title="Take what lies in a window drawn on the board" onClick={onWindow}>
+              Draw a window
             </Button>
           </div>
         </>
@@ -126,5 +129,28 @@ export function PartPanel({
         </Button>
       </div>
     </Panel>
+  )
+}
+
+/** Takes a block as it is placed first: each placement has the same outlines. */
+function BlockChoice({ blocks, onTake }: { blocks: readonly PlacedBlock[]; onTake: (part: XY[]) => void }) {
+  return (
+    <div className="mt-2">
+      <Select
+        label="Or take a block"
+        value=""
+        onChange={(event) => {
+          const block = blocks.find(({ name }) => name === event.target.value)
+          if (block) onTake(block.part)
+        }}
+      >
+        <option value="">Choose a block</option>
+        {blocks.slice(0, LISTED).map(({ name, times, part }) => (
+          <option key={name} value={name}>
+            {`${name}: ${part.length} ${part.length === 1 ? 'outline' : 'outlines'}, placed ${times === 1 ? 'once' : `${times} times`}`}
+          </option>
+        ))}
+      </Select>
+    </div>
   )
 }

@@ -3,17 +3,20 @@ import { useCallback, useMemo, useReducer, useState } from 'react'
 import { Board } from '@/components/board/Board'
 import { boardReducer, initialBoard } from '@/components/board/boardState'
 import { createHover } from '@/components/board/hover'
+import { outlinesWithin } from '@/components/board/hit'
 import { placeInSection } from '@/components/board/regionModel'
+import type { DrawingPoint } from '@/components/board/view'
 import { sheetAround, zoneOf } from '@/components/board/zones'
 import { BoardBoundary } from '@/components/sheet/BoardBoundary'
 import { writingOf } from '@/components/sheet/writing'
 import { useMe } from '@/components/shell/Me'
+import { toast } from '@/components/ui/toastStore'
 import type { Material } from '@/lib/api/schemas/people'
+import type { Finding } from '@/lib/geometry/finding'
 import { mmPerUnit, type XY } from '@/lib/geometry/recipe'
-import type { PreviewResult } from '@/lib/jobs/browser-pool'
+import { Asked } from './Asked'
 import { FileLine } from './FileLine'
-import { detailAt, detailsOf } from './flow/groups'
-import { placeInDrawing } from './flow/window'
+import { detailAt, detailsOf, partOf } from './flow/groups'
 import { LiveFigures } from './LiveFigures'
 import { Panels } from './Panels'
 import { Progress } from './Progress'
@@ -46,6 +49,7 @@ export function UploadFlow({
   const [board, boardDispatch] = useReducer(boardReducer, initialBoard)
   const [hover] = useState(createHover)
   const [picked, setPicked] = useState<string | null>(null)
+  const [asked, setAsked] = useState<Finding | null>(null)
   const [made, setMade] = useState<ReadonlyMap<number, string>>(new Map())
   const { settings } = useMe().team
   const writing = useMemo(() => writingOf(settings), [settings])
@@ -76,6 +80,15 @@ export function UploadFlow({
     const detail = detailAt(details, Number(id.slice(1)) - 1)
     if (detail) dispatch({ type: 'set', change: { part: detail.part } })
   }
+  const takeWindow = (a: DrawingPoint, b: DrawingPoint) => {
+    if (!result || !model) return
+    const part = partOf(
+      result,
+      outlinesWithin(model.outlines, a, b).map(({ id }) => id),
+    )
+    if (part.length === 0) toast('No outline lies wholly in that window. Draw it from corner to corner round all you want.')
+    else dispatch({ type: 'set', change: { part } })
+  }
   const further = () => {
     if (!saved || !result) return
     const taken = details.filter((detail) => detail.taken)
@@ -102,7 +115,11 @@ export function UploadFlow({
               writing={writing}
               label={`Preview of ${file.name}`}
               onPick={pick}
-            />
+              onMark={(index) => setAsked(result.answer.findings[index] ?? null)}
+              onWindow={takeWindow}
+            >
+              <Asked finding={asked} result={result} dispatch={dispatch} onClose={() => setAsked(null)} />
+            </Board>
           </BoardBoundary>
         ) : (
           <div className="grid h-[22rem] place-content-center border border-hair bg-sheet text-soft md:h-[min(68vh,46rem)]">
@@ -122,7 +139,8 @@ export function UploadFlow({
           <Panels
             {...{ result, choices, details, made, hover, picked, dispatch }}
             measured={distance(board.points)}
-            window={windowOf(board.points, result)}
+            windowing={board.tool === 'window'}
+            onWindow={() => boardDispatch({ do: 'tool', tool: 'window' })}
             zoneOf={(at) => (model ? zoneOf(sheetAround(model.extents), placeInSection(at, result.answer)) : '')}
             onShow={show}
           />
@@ -147,8 +165,3 @@ const next = (target: Target) =>
 
 type Points = readonly { x: number; y: number }[]
 const distance = ([a, b]: Points) => (a && b ? Math.hypot(b.x - a.x, b.y - a.y) : null)
-
-function windowOf([a, b]: Points, { answer }: PreviewResult): [XY, XY] | null {
-  const { recipe } = answer
-  return a && b ? [placeInDrawing(a, recipe), placeInDrawing(b, recipe)] : null
-}

@@ -72,14 +72,39 @@ export function likelyFrame(result: PreviewResult): { at: XY; part: XY[] } | nul
 /** The detail that an outline belongs to. */
 export const detailAt = (details: readonly Detail[], outline: number) => details.find(({ members }) => members.includes(outline))
 
-/** A point on each outline that lies wholly in the window, two opposite corners of it in drawing units. */
-export function partInWindow(result: PreviewResult, [ax, ay]: XY, [bx, by]: XY): XY[] {
-  const { outlines } = result
-  const [minX, maxX, minY, maxY] = [Math.min(ax, bx), Math.max(ax, bx), Math.min(ay, by), Math.max(ay, by)]
-  const part: XY[] = []
-  for (let k = 0; k < outlines.count; k++) {
-    const [x0, y0, x1, y1] = outlines.bounds.subarray(4 * k, 4 * k + 4)
-    if (x0 >= minX && x1 <= maxX && y0 >= minY && y1 <= maxY) part.push(pointOf(result, k))
-  }
-  return part
+/** A block of the drawing that holds outlines. */
+export interface PlacedBlock {
+  name: string
+  /** how often it is placed */
+  times: number
+  /** a point on each outline of its first placement, as a recipe's part names it */
+  part: XY[]
+  area: number
 }
+
+/** The blocks that brought outlines in, largest first; frames and title blocks are none of the profile. */
+export function blocksOf(result: PreviewResult, frames: readonly XY[] = []): PlacedBlock[] {
+  const { outlines, placed, drawing } = result
+  const aside = sheetParts(result, frames)
+  const found = new Map<number, { first: number; inserts: Set<number>; members: number[] }>()
+  for (let k = 0; k < outlines.count; k++) {
+    const block = placed.block[k]
+    if (block === 0 || aside.has(k)) continue
+    const entry = found.get(block) ?? { first: placed.insert[k], inserts: new Set(), members: [] }
+    found.set(block, entry)
+    entry.inserts.add(placed.insert[k])
+    if (placed.insert[k] === entry.first) entry.members.push(k)
+  }
+  return [...found]
+    .map(([block, { inserts, members }]) => ({
+      name: drawing.blocks[block - 1],
+      times: inserts.size,
+      part: members.map((k) => pointOf(result, k)),
+      area: Math.max(...members.map((k) => outlines.area[k])),
+    }))
+    .sort((a, b) => b.area - a.area)
+}
+
+/** Points that name these outlines, by the board's ids (o1 is the first), in a recipe's part. */
+export const partOf = (result: PreviewResult, ids: readonly string[]): XY[] =>
+  ids.map((id) => pointOf(result, Number(id.slice(1)) - 1))

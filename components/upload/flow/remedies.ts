@@ -1,5 +1,5 @@
 import type { Finding } from '@/lib/geometry/finding'
-import type { XY } from '@/lib/geometry/recipe'
+import type { Bond, XY } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
 import type { FlowAction } from './flow'
 
@@ -24,11 +24,27 @@ export function remediesOf({ code, params, at }: Finding, result: PreviewResult)
   const { drawing, outlines, answer } = result
   const { tallies } = drawing
   const left = (list: typeof tallies.layers) => list.filter((tally) => tally.taken + tally.left > 0).map(({ name }) => name)
+  const answers = (words: readonly (readonly [Bond['is'], string])[]): Remedy[] =>
+    at ? words.map(([is, word]) => ({ word, action: { type: 'bond', bond: { at, is } } })) : []
   switch (code) {
     case 'face-metal-or-void':
-      return at
-        ? (['metal', 'void'] as const).map((is) => ({ word: `It is ${is}`, action: { type: 'bond', bond: { at, is } } }))
-        : []
+      return answers([
+        ['metal', 'It is metal'],
+        ['void', 'It is void'],
+      ])
+    case 'gap':
+      return answers([
+        ['bonded', 'Bonded'],
+        ['contact', 'In contact'],
+        ['void', 'Apart'],
+      ])
+    case 'material-overlap':
+      return answers([
+        ['bonded', 'Bonded'],
+        ['contact', 'In contact'],
+      ])
+    case 'slit':
+      return answers([['void', 'It is open']])
     case 'chain-open':
       return typeof params.gap === 'number' && params.gap > 0 && params.gap < 5
         ? [set(`Close gaps up to ${toleranceFor(params.gap)} mm`, { tolerance: toleranceFor(params.gap) })]
