@@ -8,8 +8,8 @@ import { firstPerson, type Person } from './person'
 import { aliveAfter, childrenOf } from './processes'
 import { newDataDir, removeDataDir, type Server, startServer } from './server'
 
-const KILLS = Number(process.env.KILLS ?? 5)
-const SEED = Number(process.env.SEED ?? 20261201)
+const KILLS = Number(process.env.CAMPAIGN_KILLS ?? 5)
+const SEED = Number(process.env.CAMPAIGN_SEED ?? 20261201)
 const dataDir = newDataDir()
 afterAll(() => removeDataDir(dataDir))
 
