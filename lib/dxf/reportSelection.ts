@@ -1,7 +1,17 @@
 import type { Drawing } from './drawing'
 import type { FindingList } from './findingList'
 import { type DxfCode, dxfFinding, quoted } from './findings'
-import { HATCH, OTHER_LAYER, OTHER_LINE_TYPE, OTHER_SPACE, type Selecting, TAKEN, type Tallies, UNSEEN } from './select'
+import {
+  HATCH,
+  OTHER_LAYER,
+  OTHER_LINE_TYPE,
+  OTHER_SPACE,
+  type Selecting,
+  spaceIndex,
+  TAKEN,
+  type Tallies,
+  UNSEEN,
+} from './select'
 
 const LISTED_NAMES = 12
 
@@ -34,7 +44,7 @@ function reportUnknownNames(drawing: Drawing, { layers, lineTypes, space }: Sele
   for (const lineType of missing(lineTypes, drawing.lineTypes)) {
     findings.add('line-type-not-found', () => dxfFinding('line-type-not-found', { lineType }))
   }
-  if (space !== 'model' && drawing.spaces.indexOf(space, 1) < 0) {
+  if (spaceIndex(drawing.spaces, space) < 0) {
     findings.add('space-not-found', () =>
       dxfFinding('space-not-found', { space, has: drawing.spaces.map((s) => quoted(s)).join(', ') }),
     )

@@ -86,8 +86,14 @@ function lineTypesTaken({ lineTypes }: Drawing, wanted: readonly string[] | null
 }
 
 function spaceTaken({ spaces }: Drawing, wanted: string): number {
-  const index = wanted === 'model' ? 0 : spaces.indexOf(wanted, 1)
+  const index = spaceIndex(spaces, wanted)
   return index < 0 ? spaces.length : index
+}
+
+/** Index of a space by its name, upper or lower case as for all names of the format; −1 where there is none. */
+export function spaceIndex(spaces: string[], wanted: string): number {
+  const name = wanted.toUpperCase()
+  return name === 'MODEL' ? 0 : spaces.findIndex((space, index) => index > 0 && space.toUpperCase() === name)
 }
 
 export type Tallies = Pick<Selection, 'layers' | 'lineTypes' | 'kinds' | 'spaces'>
