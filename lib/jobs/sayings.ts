@@ -25,9 +25,20 @@ export function unitFindings(drawing: Drawing, recipe: Recipe, section: Section 
   return findings
 }
 
-/** Without the questions "metal or void?" where a part or a make-up has answered them: else there would be no metal taken. */
-export const withoutMootQuestions = (findings: Finding[], taken: number[]): Finding[] =>
-  taken.length === 0 ? findings : findings.filter(({ code }) => code !== 'face-metal-or-void')
+/**
+ * Without questions that a part or a make-up has answered: metal or void (else no metal would be taken), and what of the
+ * sheet is the profile, where neither frame, title block nor another group is taken.
+ */
+export function withoutMootQuestions(findings: Finding[], outlines: OutlineSet, taken: number[]): Finding[] {
+  if (taken.length === 0) return findings
+  const { frames, titleBlocks, group } = outlines
+  const takes = new Set(taken)
+  const moot = new Set(['face-metal-or-void'])
+  if (!frames.some((k) => takes.has(k))) moot.add('frame-found')
+  if (!titleBlocks.flat().some((k) => takes.has(k))) moot.add('title-block-found')
+  if (taken.every((k) => group[k] === group[taken[0]])) moot.add('groups-apart')
+  return findings.filter(({ code }) => !moot.has(code))
+}
 
 /**
  * Where only some outlines of a sheet are taken, a fault that lies farther from them than their own size is another detail's:

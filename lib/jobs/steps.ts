@@ -56,6 +56,8 @@ export interface Figures {
   repairs: Repair[]
 }
 
+export const NO_FIGURES: Figures = { section: null, region: null, findings: [], repairs: [] }
+
 /** Net metal to section: scaled to mm and turned first. */
 export function figuresStep(
   drawing: Drawing,
@@ -63,7 +65,7 @@ export function figuresStep(
   recipe: Recipe,
   materials: Record<string, UsedMaterial>,
 ): Figures {
-  if (!combined.region) return { section: null, region: null, findings: [], repairs: [] }
+  if (!combined.region) return NO_FIGURES
   const scale = mmPerUnit(recipe)
   const placed = (region: Region) => transformRegion(region, { scale, turn: recipe.turn })
   const region = placed(combined.region)

@@ -2,6 +2,7 @@ import type { Drawing, ReadLimits } from '../dxf/drawing'
 import { readDrawing } from '../dxf/read'
 import type { Tally } from '../dxf/select'
 import type { RegionAnswer } from '../geometry/arrangement/regionOf'
+import type { Finding } from '../geometry/finding'
 import type { OutlineSet } from '../geometry/outlineSet'
 import { mmPerUnit, type Recipe } from '../geometry/recipe'
 import type { Region } from '../geometry/region'
@@ -12,7 +13,7 @@ import { withGapMoments } from './gapMoments'
 import { memo } from './memo'
 import type { Role, Stage } from './previewProtocol'
 import { unitFindings, withoutFarFaults, withoutMootQuestions } from './sayings'
-import { chainStep, combineStep, figuresStep, keysOf } from './steps'
+import { chainStep, combineStep, figuresStep, keysOf, NO_FIGURES } from './steps'
 
 export interface TaskResult {
   answer: SectionAnswer
@@ -56,22 +57,22 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
       const { selection, outlines } = chain
       onStage('combine')
       const combine = combined(keys.combine, chain, recipe)
-      onStage('figures')
-      const figures = figured(keys.figures, drawing, combine, recipe, materials)
       const taken = combine.steps.map(({ outline }) => outline)
-      const chainFindings = withGapMoments(outlines.findings, combine.repairs, figures.repairs, figures.section)
+      const ofOutlines = withoutFarFaults(withoutMootQuestions(outlines.findings, outlines, taken), outlines, taken)
+      const before = [drawing.findings, selection.findings, ofOutlines, combine.findings].flat()
+      onStage('figures')
+      const figures = before.some(isError) ? NO_FIGURES : figured(keys.figures, drawing, combine, recipe, materials)
       const findings = [
         ...drawing.findings,
         ...selection.findings,
-        ...withoutFarFaults(withoutMootQuestions(chainFindings, taken), outlines, taken),
+        ...withGapMoments(ofOutlines, combine.repairs, figures.repairs, figures.section),
         ...combine.findings,
         ...figures.findings,
         ...unitFindings(drawing, recipe, figures.section),
       ]
       const unlisted = drawing.findingsTotal - drawing.findings.length + selection.findingsTotal - selection.findings.length
       const findingsTotal = findings.length + unlisted
-      const isBlocked = findings.some(({ severity }) => severity === 'error')
-      const section = isBlocked ? null : figures.section
+      const section = findings.some(isError) ? null : figures.section
       const { layers, lineTypes, kinds, spaces } = selection
       return {
         answer: answerOf({ source, recipe, drawing, outlines, roles: combine.roles, findings, findingsTotal, section }),
@@ -85,6 +86,8 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
     },
   }
 }
+
+const isError = ({ severity }: Finding) => severity === 'error'
 
 function stepsAsked({ steps }: RegionAnswer): Combination['steps'] {
   return steps.flatMap(({ outline, does }) => (does === 'out' ? [] : [{ outline, does }]))
