@@ -23,13 +23,13 @@ export interface FindingRow {
   say: (params: FindingParams) => string
 }
 
-/** A place for a sentence, to six digits and three decimals at least: far from the origin both would be too few alone. */
+/** A place for a sentence: six digits, but three decimals at least (far from the origin) and nine at most (rounding). */
 export const placeText = ({ x, y }: FindingParams): string => `(${coordinate(x)}, ${coordinate(y)})`
 
 const coordinate = (value: FindingParams[string]): string => {
   if (typeof value !== 'number') return String(value)
-  const decimals = Math.max(3, 5 - Math.floor(Math.log10(Math.abs(value) || 1)))
-  return String(Number(value.toFixed(Math.min(decimals, 100))))
+  const decimals = Math.min(9, Math.max(3, 5 - Math.floor(Math.log10(Math.abs(value) || 1))))
+  return String(Number(value.toFixed(decimals)))
 }
 
 /** A finding from one row of a table; the only way findings are made. */

@@ -6,6 +6,8 @@ const plural = (n: FindingParams[string], one: string, many: string) => (n === 1
 const mm = (value: FindingParams[string]) => `${typeof value === 'number' ? roundedMm(value) : value} mm`
 const roundedMm = (value: number) => (Math.abs(value) >= 0.1 ? value.toFixed(2) : String(Number(value.toPrecision(3))))
 const place = placeText
+/** A gap wider than this (mm) is no lack of tolerance. */
+const WIDEST_TO_CLOSE = 1
 /** ΔA, and ΔI where they are known. */
 const changes = ({ area, dIx, dIy }: FindingParams) =>
   `the area by ${text(area)} mm²${dIx === undefined ? '' : `, Ix by ${text(dIx)} mm⁴ and Iy by ${text(dIy)} mm⁴`}`
@@ -26,8 +28,14 @@ export const GEOMETRY_FINDINGS = {
   },
   'chain-open': {
     severity: 'warning',
-    say: (p) =>
-      `${mm(p.gap)} open at ${place(p)}: a chain of ${plural(p.edges, 'edge', 'edges')} ends at ${placeText({ x: p.x0, y: p.y0 })} and ${placeText({ x: p.x1, y: p.y1 })} and encloses no metal. Raise the tolerance to close it, or close it in the drawing.`,
+    say: (p) => {
+      const [from, to] = [placeText({ x: p.x0, y: p.y0 }), placeText({ x: p.x1, y: p.y1 })]
+      if (p.edges === 1 && Number(p.gap) > WIDEST_TO_CLOSE) {
+        return `An edge from ${from} to ${to} belongs to no outline and encloses no metal. Is it a centre line, hatching or construction? Else join it to its neighbours in the drawing.`
+      }
+      const cure = Number(p.gap) <= WIDEST_TO_CLOSE ? 'Raise the tolerance to close it, or close' : 'Close'
+      return `${mm(p.gap)} open at ${place(p)}: a chain of ${plural(p.edges, 'edge', 'edges')} ends at ${from} and ${to} and encloses no metal. ${cure} it in the drawing.`
+    },
   },
   'ends-ambiguous': {
     severity: 'error',
@@ -102,7 +110,7 @@ export const GEOMETRY_FINDINGS = {
   'frame-found': {
     severity: 'warning',
     say: (p) =>
-      `A rectangle of ${text(p.width)} × ${text(p.height)} mm at ${place(p)} lies round everything and touches nothing: a drawing frame? Leave it out unless it is metal.`,
+      `A rectangle of ${text(p.width)} × ${text(p.height)} mm at ${place(p)} lies round everything: a drawing frame? Leave it out unless it is metal.`,
   },
   'title-block-found': {
     severity: 'warning',

@@ -23,7 +23,7 @@ export const TASK_FINDINGS = {
     severity: 'error',
     say: ({ open }) =>
       Number(open) > 0
-        ? `No closed outline was found; ${text(open)} chains stay open. Close their gaps, raise the tolerance or choose other layers.`
+        ? `No closed outline was found; ${text(open)} chains stay open. Close their gaps, trim lines that run past their corners, raise the tolerance or choose other layers.`
         : 'No closed outline was found: nothing that the recipe takes encloses an area. Check layers, line types and layouts.',
   },
   'opinion-disagrees': {
