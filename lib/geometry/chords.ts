@@ -131,8 +131,8 @@ function goesOn(vertex: Vertex, isLine: (n: number) => boolean, { first, last }:
   )
 }
 
-function offer(outline: number, vertex: Vertex, { first, last, circle }: Run, middle: [number, number]): ArcOffer {
-  let dArea = 0
+function offer(outline: number, vertex: Vertex, { first, last, circle }: Run, [mx, my]: [number, number]): ArcOffer {
+  let [dArea, dIx, dIy] = [0, 0, 0]
   for (let n = first; n < last; n++) {
     const [ax, ay] = vertex(n)
     const [bx, by] = vertex(n + 1)
@@ -140,18 +140,25 @@ function offer(outline: number, vertex: Vertex, { first, last, circle }: Run, mi
       (ax - circle.x) * (by - circle.y) - (ay - circle.y) * (bx - circle.x),
       (ax - circle.x) * (bx - circle.x) + (ay - circle.y) * (by - circle.y),
     )
-    dArea += 0.5 * circle.r ** 2 * (angle - Math.sin(angle))
+    const sliver = 0.5 * circle.r ** 2 * (angle - Math.sin(angle))
+    // the middle of the chord, pushed out to two fifths of the sliver's height: where its centroid lies, to first order
+    const chord = Math.cos(angle / 2)
+    const out = (chord + 0.4 * (1 - chord)) / chord
+    const x = circle.x + out * ((ax + bx) / 2 - circle.x)
+    const y = circle.y + out * ((ay + by) / 2 - circle.y)
+    dArea += sliver
+    dIx += sliver * (y - my) ** 2
+    dIy += sliver * (x - mx) ** 2
   }
-  const through = vertex((first + last) >> 1)
   return {
     outline,
-    run: { from: vertex(first), through, to: vertex(last) },
+    run: { from: vertex(first), through: vertex((first + last) >> 1), to: vertex(last) },
     centre: { x: circle.x, y: circle.y },
     radius: circle.r,
     chords: last - first,
     dArea,
-    dIx: dArea * (through[1] - middle[1]) ** 2,
-    dIy: dArea * (through[0] - middle[0]) ** 2,
+    dIx,
+    dIy,
   }
 }
 
