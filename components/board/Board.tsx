@@ -7,7 +7,7 @@ import { CentroidMark } from './CentroidMark'
 import { ShearCentreMark } from './ShearCentreMark'
 import { FindingMarks } from './FindingMarks'
 import { HotLayer } from './HotLayer'
-import { outlineAt } from './hit'
+import { markAt, outlineAt } from './hit'
 import type { HoverStore } from './hover'
 import { Legend } from './Legend'
 import { Metal } from './Metal'
@@ -21,7 +21,7 @@ import { useLabels } from './useLabels'
 import { useTool } from './useTool'
 import { useView } from './useView'
 import { useViewport } from './useViewport'
-import { toDrawing } from './view'
+import { type DrawingPoint, toDrawing } from './view'
 import { ZoneMarks } from './ZoneMarks'
 import { sheetAround } from './zones'
 
@@ -42,12 +42,16 @@ interface Props {
   /** said to those who cannot see it */
   label: string
   onPick?: (outlineId: string | null) => void
+  /** a finding's ring was pressed: its place in the list */
+  onMark?: (index: number) => void
+  /** offers the window tool: two opposite corners */
+  onWindow?: (a: DrawingPoint, b: DrawingPoint) => void
   /** the title block, at the foot */
   children?: ReactNode
 }
 
 /** The drawing board: the metal, its axes and what a person asks of it. */
-export function Board({ model, state, dispatch, hover, writing, label, onPick, children }: Props) {
+export function Board({ model, state, dispatch, hover, writing, label, onPick, onMark, onWindow, children }: Props) {
   const svg = useRef<SVGSVGElement>(null)
   const id = useId()
   const viewport = useViewport(svg)
@@ -58,7 +62,7 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
   const frame = useMemo(() => ({ view, viewport, extents: model.extents }), [view, viewport, model.extents])
   const base = useMemo(() => annotate(model.section, frame, state.shown, writing), [model.section, frame, state.shown, writing])
   const choices = useLabels(base, model, frame, control.moving)
-  const tool = useTool({ model, state, dispatch, view, viewport, writing, lines: base.lines })
+  const tool = useTool({ model, state, dispatch, view, viewport, writing, lines: base.lines, onWindow })
   const { goTo } = control
 
   useEffect(() => {
@@ -74,9 +78,22 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
       const outline = at && pick(at.x, at.y)
       hover.set(outline ? { kind: 'outline', id: outline } : null)
     },
-    click: (at) => (state.tool === 'look' ? onPick?.(pick(at.x, at.y)) : tool.click(at)),
+    click: (at) => {
+      if (state.tool !== 'look') return tool.click(at)
+      const mark = onMark && markAt(model.marks, at, view)
+      if (mark) onMark(mark.index)
+      else onPick?.(pick(at.x, at.y))
+    },
+    dragsTool: state.tool === 'window',
   })
-  const onKeyDown = useBoardKeys({ control, viewport, tool: state.tool, dispatch, toolKey: tool.key })
+  const onKeyDown = useBoardKeys({
+    control,
+    viewport,
+    tool: state.tool,
+    dispatch,
+    hasWindow: onWindow !== undefined,
+    toolKey: tool.key,
+  })
 
   return (
     <section aria-label="Board" onKeyDown={onKeyDown} className="grid grid-cols-1 border border-hair bg-sheet">
@@ -106,13 +123,15 @@ export function Board({ model, state, dispatch, hover, writing, label, onPick, c
         <FindingMarks marks={model.marks} view={view} hover={hover} />
       </svg>
       <p id={`${id}-keys`} className="sr-only">
-        Arrow keys move the drawing, plus and minus zoom, F fits it, M measures, U places an axis of your own, Escape ends a tool.
+        Arrow keys move the drawing, plus and minus zoom, F fits it, M measures, U places an axis of your own,
+        {onWindow && ' W takes what lies in a window,'} Escape ends a tool.
       </p>
       <div className="border-hair border-t">
         <Toolbar
           state={state}
           dispatch={dispatch}
           hasSection={model.section !== null}
+          hasWindow={onWindow !== undefined}
           zoom={(factor) => control.zoom({ x: viewport.width / 2, y: viewport.height / 2 }, factor)}
           fit={control.fit}
         />

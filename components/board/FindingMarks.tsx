@@ -2,16 +2,15 @@
 import type { HoverStore } from './hover'
 import type { BoardMark } from './model'
 import { useHover } from './useHover'
+import { markRadius } from './marks'
 import { toScreen, type View } from './view'
 
 const TONES = { note: 'stroke-soft', warning: 'stroke-ochre', error: 'stroke-brick' }
-/** No mark is drawn smaller than this, px. */
-const LEAST = 9
 
 function Mark({ mark, view, hover }: { mark: BoardMark; view: View; hover: HoverStore }) {
   const hot = useHover(hover, (hovered) => hovered?.kind === 'finding' && hovered.index === mark.index)
   const at = toScreen(view, mark.at)
-  const r = Math.max(LEAST, (mark.size * view.scale) / 2) + (hot ? 4 : 0)
+  const r = markRadius(mark, view) + (hot ? 4 : 0)
   return (
     <circle cx={at.x} cy={at.y} r={r} className={`fill-none ${TONES[mark.severity]}`} strokeWidth={hot ? 3 : 2}>
       <title>{mark.message}</title>

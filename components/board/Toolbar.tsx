@@ -17,12 +17,14 @@ interface Props {
   state: BoardState
   dispatch: Dispatch<BoardAction>
   hasSection: boolean
+  /** outlines can be taken by a window */
+  hasWindow: boolean
   zoom: (factor: number) => void
   fit: () => void
 }
 
 /** What the board shows and what the pointer does, as quiet words under it. */
-export function Toolbar({ state, dispatch, hasSection, zoom, fit }: Props) {
+export function Toolbar({ state, dispatch, hasSection, hasWindow, zoom, fit }: Props) {
   const layers = hasSection ? LAYERS : LAYERS.filter(({ what }) => what === 'dimensions')
   return (
     <div role="toolbar" aria-label="Board" className="flex flex-wrap items-center gap-1 px-2 py-1 text-small">
@@ -48,6 +50,17 @@ export function Toolbar({ state, dispatch, hasSection, zoom, fit }: Props) {
       >
         Measure
       </Button>
+      {hasWindow && (
+        <Button
+          look="quiet"
+          shortcut="W"
+          title="Take what lies in a window"
+          aria-pressed={state.tool === 'window'}
+          onClick={() => dispatch({ do: 'tool', tool: 'window' })}
+        >
+          Window
+        </Button>
+      )}
       {hasSection && (
         <Button
           look="quiet"

@@ -2,12 +2,12 @@ import type { Axis, AxisId } from './axesOf'
 import type { Shown } from './annotate'
 import type { DrawingPoint } from './view'
 
-/** `look`: move about and pick; `measure`: two points; `axis`: place and turn an axis of one's own. */
-export type Tool = 'look' | 'measure' | 'axis'
+/** `look`: move about and pick; `measure`: two points; `axis`: place and turn an axis of one's own; `window`: two corners. */
+export type Tool = 'look' | 'measure' | 'axis' | 'window'
 
 /** What a person can take back. */
 interface Placed {
-  /** points of the measurement, none to two */
+  /** points of the measurement, or the first corner of a window: none to two */
   points: DrawingPoint[]
   axis: Axis | null
 }

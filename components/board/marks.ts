@@ -1,4 +1,11 @@
-import type { ScreenPoint } from './view'
+import type { BoardMark } from './model'
+import type { ScreenPoint, View } from './view'
+
+/** No finding's ring is drawn smaller than this, px. */
+const LEAST_RING = 9
+
+/** Radius of the ring round a finding, px. */
+export const markRadius = ({ size }: BoardMark, view: View) => Math.max(LEAST_RING, (size * view.scale) / 2)
 
 /** The mark of a centre of area: a circle with two opposite quarters filled, `r` px. */
 export function centroidMark(r: number): { circle: string; quarters: string } {

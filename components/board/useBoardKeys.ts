@@ -18,12 +18,14 @@ interface Options {
   viewport: Viewport
   tool: Tool
   dispatch: Dispatch<BoardAction>
+  /** outlines can be taken by a window */
+  hasWindow: boolean
   /** the tool's own keys: moves the pointer of the tool by px on the board; true where it took the key */
   toolKey: (event: KeyboardEvent) => boolean
 }
 
 /** All that the board does, by keys while it or its tools have the focus. */
-export function useBoardKeys({ control, viewport, tool, dispatch, toolKey }: Options) {
+export function useBoardKeys({ control, viewport, tool, dispatch, hasWindow, toolKey }: Options) {
   const middle = { x: viewport.width / 2, y: viewport.height / 2 }
   const actions: Record<string, () => void> = {
     '+': () => control.zoom(middle, ZOOM),
@@ -36,6 +38,7 @@ export function useBoardKeys({ control, viewport, tool, dispatch, toolKey }: Opt
     c: () => dispatch({ do: 'show', what: 'circle' }),
     m: () => dispatch({ do: 'tool', tool: 'measure' }),
     u: () => dispatch({ do: 'tool', tool: 'axis' }),
+    ...(hasWindow && { w: () => dispatch({ do: 'tool', tool: 'window' }) }),
     escape: () => dispatch({ do: 'escape' }),
   }
   const onKeyDown = (event: KeyboardEvent) => {

@@ -11,6 +11,8 @@ interface Handlers {
   /** the pointer moved without dragging */
   over: (at: ScreenPoint | null) => void
   click: (at: ScreenPoint) => void
+  /** a drag is the tool's: it counts as a click where it begins and one where it ends, and the view stays */
+  dragsTool: boolean
 }
 
 const middleOf = (points: ScreenPoint[]): ScreenPoint => ({
@@ -19,7 +21,7 @@ const middleOf = (points: ScreenPoint[]): ScreenPoint => ({
 })
 const spreadOf = ([a, b]: ScreenPoint[]) => Math.max(Math.hypot(a.x - b.x, a.y - b.y), 1)
 
-/** Drag to move, wheel to zoom at the cursor, Shift + wheel to move, two fingers to move and zoom. */
+/** Drag to move (or to work a tool), wheel to zoom at the cursor, Shift + wheel to move, two fingers to move and zoom. */
 export function useGestures(ref: RefObject<SVGSVGElement | null>, handlers: Handlers) {
   const pointers = useRef(new Map<number, ScreenPoint>())
   const start = useRef<{ at: ScreenPoint; dragged: boolean } | null>(null)
@@ -65,6 +67,14 @@ export function useGestures(ref: RefObject<SVGSVGElement | null>, handlers: Hand
       if (event.pointerType === 'mouse') latest.current.over(at)
       return
     }
+    if (latest.current.dragsTool && start.current) {
+      if (!start.current.dragged && Math.hypot(at.x - start.current.at.x, at.y - start.current.at.y) >= CLICK) {
+        latest.current.click(start.current.at)
+        start.current.dragged = true
+      }
+      latest.current.over(at)
+      return
+    }
     const before = [...pointers.current.values()]
     pointers.current.set(event.pointerId, at)
     const after = [...pointers.current.values()]
@@ -81,7 +91,7 @@ export function useGestures(ref: RefObject<SVGSVGElement | null>, handlers: Hand
   }
   const onPointerUp = (event: PointerEvent<SVGSVGElement>) => {
     pointers.current.delete(event.pointerId)
-    if (start.current && !start.current.dragged) latest.current.click(place(event))
+    if (start.current && (!start.current.dragged || latest.current.dragsTool)) latest.current.click(place(event))
     start.current = null
   }
   const onPointerCancel = (event: PointerEvent<SVGSVGElement>) => {

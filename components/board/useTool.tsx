@@ -8,7 +8,8 @@ import { MeasureReadout } from './MeasureReadout'
 import type { BoardModel } from './model'
 import { type Snapped, snapperOf } from './snapper'
 import { UserAxisLayer } from './UserAxisLayer'
-import { type ScreenPoint, toDrawing, toScreen, type View, type Viewport } from './view'
+import { WindowLayer } from './WindowLayer'
+import { type DrawingPoint, type ScreenPoint, toDrawing, toScreen, type View, type Viewport } from './view'
 
 /** How near a point must be to be snapped to, px. */
 const REACH = 12
@@ -23,6 +24,7 @@ interface Options {
   writing: Writing
   /** what is drawn already and no figure may lie on */
   lines: Segment[]
+  onWindow?: (a: DrawingPoint, b: DrawingPoint) => void
 }
 
 interface ToolControl {
@@ -41,12 +43,18 @@ const ARROWS: Record<string, [number, number]> = {
 }
 
 /** The tool in hand: where its pointer is, what a click and a key do, what it draws. */
-export function useTool({ model, state, dispatch, view, viewport, writing, lines }: Options): ToolControl {
+export function useTool({ model, state, dispatch, view, viewport, writing, lines, onWindow }: Options): ToolControl {
   const snapper = useMemo(() => snapperOf(model.region), [model.region])
   const [pointer, setPointer] = useState<ScreenPoint | null>(null)
   const snapped: Snapped | null = pointer && snapper(toDrawing(view, pointer), REACH / view.scale)
 
+  const corner = (at: DrawingPoint) => {
+    const [first] = state.points
+    dispatch(first ? { do: 'tool', tool: 'window' } : { do: 'point', at })
+    if (first) onWindow?.(first, at)
+  }
   const place = (at: ScreenPoint) => {
+    if (state.tool === 'window') return corner(toDrawing(view, at))
     const point = snapper(toDrawing(view, at), REACH / view.scale).at
     if (state.tool === 'measure') dispatch({ do: 'point', at: point })
     else dispatch({ do: 'axis', axis: { through: point, angle: state.axis?.angle ?? 0 }, step: true })
@@ -79,7 +87,8 @@ export function useTool({ model, state, dispatch, view, viewport, writing, lines
     layer: (
       <>
         <UserAxisLayer {...{ model, state, dispatch, view, viewport }} />
-        {state.tool !== 'look' && (
+        {state.tool === 'window' && <WindowLayer corner={state.points[0] ?? null} pointer={pointer} view={view} />}
+        {(state.tool === 'measure' || state.tool === 'axis') && (
           <MeasureLayer points={state.points} pointer={snapped} {...{ view, viewport, lines }} length={writing.length} />
         )}
       </>
@@ -91,6 +100,11 @@ export function useTool({ model, state, dispatch, view, viewport, writing, lines
         <p className="text-small text-soft">
           Choose a point, by click or with arrow keys and Enter. Drag the ring to turn the axis, or press [ and ]. Its figures
           stand in the sheet.
+        </p>
+      ) : state.tool === 'window' ? (
+        <p className="text-small text-soft">
+          Drag from corner to corner round what you want, or set two corners by click or with arrow keys and Enter. What lies
+          wholly inside is taken.
         </p>
       ) : null,
   }

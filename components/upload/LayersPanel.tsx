@@ -26,7 +26,11 @@ export function LayersPanel({
   const taken = (list: Tally[]) => list.reduce((sum, tally) => sum + tally.taken, 0)
   const left = (list: Tally[]) => list.reduce((sum, tally) => sum + tally.left, 0)
   return (
-    <Panel title="Layers and line types" open={false} state={`${taken(layers)} ${taken(layers) === 1 ? 'entity' : 'entities'} taken, ${left(layers)} left out`}>
+    <Panel
+      title="Layers and line types"
+      open={false}
+      state={`${taken(layers)} ${taken(layers) === 1 ? 'entity' : 'entities'} taken, ${left(layers)} left out`}
+    >
       {spaces.length > 1 && (
         <Select
           label="Drawn in"

@@ -65,8 +65,8 @@ export function PartPanel({
         <>
           {chosen.length !== 1 && (
             <Notice tone="asked">
-              <b>{details.length} details lie apart.</b> Click one on the board, draw a window round it, choose it here, or keep all as one section of
-              several pieces.
+              <b>{details.length} details lie apart.</b> Click one on the board, draw a window round it, choose it here, or keep
+              all as one section of several pieces.
             </Notice>
           )}
           <ol className="max-h-72 overflow-y-auto">

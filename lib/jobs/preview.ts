@@ -18,6 +18,10 @@ export function previewOf(
     drawing: viewOf(drawing, tallies),
     outlines: { ...structuredClone(columns), edges: cut(edges), openEdges: cut(openEdges) },
     roles,
+    placed: {
+      block: outlines.source.map((row) => drawing.entities.block[row]),
+      insert: outlines.source.map((row) => drawing.entities.insert[row]),
+    },
     region: region && {
       edges: cut(region.edges),
       loopStart: region.loopStart.slice(),

@@ -19,6 +19,14 @@ export interface DrawingView extends Omit<Drawing, 'edges' | 'entities' | 'remar
 /** What an outline does in the make-up taken; `out` too where a person must still say it. */
 export type Role = Does
 
+/** Which block each outline came in with, one row an outline: the entity that gave its first edge tells. */
+export interface Placed {
+  /** index into `drawing.blocks` + 1 of the outermost block; 0 where drawn directly */
+  block: Uint32Array
+  /** running number of that block's placement; 0 where drawn directly */
+  insert: Uint32Array
+}
+
 /** All that the page shows for one recipe. */
 export interface PreviewResult {
   answer: SectionAnswer
@@ -26,6 +34,7 @@ export interface PreviewResult {
   /** drawing units, before the recipe's turn */
   outlines: OutlineSet
   roles: Role[]
+  placed: Placed
   /** mm, turned: the frame of the figures; null without a section */
   region: Region | null
 }

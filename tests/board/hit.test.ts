@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { outlineAt } from '@/components/board/hit'
+import { markAt, outlineAt } from '@/components/board/hit'
 import { regionModel } from '@/components/board/regionModel'
 import { answerWith } from './answer'
 import { plateWithHole } from './shapes'
@@ -31,4 +31,12 @@ test('outside of everything nothing is picked', () => {
 test('an outline whose named point lies 30 mm away is not taken for the loop', () => {
   const strayed = regionModel(plateWithHole(), answerWith(plateWithHole(), [{ id: 'o9', at: [40, 90] }]))
   expect(strayed.outlines.map(({ id }) => id)).toEqual(['loop 1', 'loop 2'])
+})
+
+test('a finding is picked at its middle and on its ring of 50 px, not between, the smaller of two', () => {
+  const view = { scale: 1, x: 0, y: 0 }
+  const mark = (index: number, size: number) => ({ index, severity: 'note', at: { x: 100, y: -100 }, size, message: '' }) as const
+  const at = (x: number, marks = [mark(0, 100)]) => markAt(marks, { x, y: 100 }, view)?.index ?? null
+  expect([at(104), at(151), at(130), at(170)]).toEqual([0, 0, null, null])
+  expect(at(100, [mark(0, 100), mark(1, 10)])).toBe(1)
 })

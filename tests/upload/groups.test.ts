@@ -1,10 +1,14 @@
 import { readFileSync } from 'node:fs'
 import { expect, test } from 'vitest'
-import { detailAt, detailsOf, likelyFrame, partInWindow } from '@/components/upload/flow/groups'
-import { placeInDrawing } from '@/components/upload/flow/window'
+import { outlinesWithin } from '@/components/board/hit'
+import { blocksOf, detailAt, detailsOf, likelyFrame, partOf } from '@/components/upload/flow/groups'
+import { referencesOf } from '@/components/upload/flow/references'
+import { previewModel } from '@/components/upload/previewModel'
 import { DEFAULT_RECIPE, type Recipe } from '@/lib/geometry/recipe'
 import { previewOf } from '@/lib/jobs/preview'
+import type { PreviewResult } from '@/lib/jobs/previewProtocol'
 import { createTask, readTask } from '@/lib/jobs/tasks'
+import { facadeSheet } from './sheet'
 
 const bytes = readFileSync('fixtures/demo/facade-sheet.dxf')
 const task = createTask(readTask(bytes), { name: 'facade-sheet.dxf', bytes: bytes.length, sha256: '' })
@@ -31,14 +35,63 @@ test('an outline picked on the board belongs to the detail that holds it', () =>
   for (const detail of details) for (const k of detail.members) expect(detailAt(details, k)).toBe(detail)
 })
 
-test('a window round the largest detail takes its outlines and no other', () => {
-  const [{ at, width, height, members }] = details
-  const corner = (sign: number): [number, number] => [at[0] + sign * (width / 2 + 1), at[1] + sign * (height / 2 + 1)]
-  expect(partInWindow(whole, corner(-1), corner(1))).toHaveLength(members.length)
+test('a window round the largest detail takes its outlines and no other, also on a board turned by 30°', () => {
+  const members = details[0].members.map((k) => `o${k + 1}`)
+  const { outlines } = previewModel(preview({ turn: 30 }))
+  const boxes = outlines.filter(({ id }) => members.includes(id)).map(({ box }) => box)
+  const [minX, minY] = [Math.min(...boxes.map((box) => box.minX)) - 1, Math.min(...boxes.map((box) => box.minY)) - 1]
+  const [maxX, maxY] = [Math.max(...boxes.map((box) => box.maxX)) + 1, Math.max(...boxes.map((box) => box.maxY)) + 1]
+  const taken = outlinesWithin(outlines, { x: maxX, y: minY }, { x: minX, y: maxY }).map(({ id }) => id)
+  expect(taken).toEqual(members)
+  expect(partOf(whole, taken)).toEqual(details[0].part)
 })
 
-test('a place on the board turned by 90° and read in inches goes back to its drawing units', () => {
-  const [x, y] = placeInDrawing({ x: -25.4, y: 50.8 }, { ...DEFAULT_RECIPE, unit: 'in', turn: 90 })
-  expect(x).toBeWithin(2, { absolute: 1e-12 })
-  expect(y).toBeWithin(1, { absolute: 1e-12 })
+const sheet = Buffer.from(facadeSheet())
+const sheetTask = createTask(readTask(sheet), { name: 'sheet.dxf', bytes: sheet.length, sha256: '' })
+const sheetPreview = (part: Recipe['part'] = null) => previewOf(sheetTask, { ...DEFAULT_RECIPE, part }, {}, () => {})
+
+test('a sheet of 20 profiles, 600 inserts and 300 dimensions offers the blocks TUBE, placed 5 times, and BOLT, 195 times', () => {
+  const result = sheetPreview()
+  expect(result.drawing.ignored).toMatchObject({ TEXT: 400, DIMENSION: 300 })
+  expect(
+    detailsOf(result)
+      .slice(0, 20)
+      .every(({ members }) => members.length === 2),
+  ).toBe(true)
+  const blocks = blocksOf(result).map(({ name, times, part }) => [name, times, part.length])
+  expect(blocks).toEqual([
+    ['TUBE', 5, 2],
+    ['BOLT', 195, 1],
+  ])
+})
+
+test('the block TUBE taken is one tube of 50 × 30 × 3 mm: A 444 mm²', () => {
+  const [block] = blocksOf(sheetPreview())
+  expect(sheetPreview(block.part).answer.section?.area).toBeWithin(50 * 30 - 44 * 24, { relative: 1e-12 })
+})
+
+test('the 300 equal dimensions of the sheet are offered once, and only beside what is taken', () => {
+  const drawn = (result: PreviewResult) => referencesOf(result, null).filter(({ by }) => by === 'drawn')
+  const whole = sheetPreview()
+  expect(drawn(whole).map(({ name }) => name)).toEqual(['drawn dimension 60'])
+  const [first] = detailsOf(whole)
+  expect(drawn(sheetPreview(first.part))).toHaveLength(1)
+  const bolt = detailsOf(whole).at(-1)
+  expect(drawn(sheetPreview(bolt?.part ?? []))).toHaveLength(0)
+})
+
+const rail = readFileSync('fixtures/demo/guide-rail.dxf')
+const railTask = createTask(readTask(rail), { name: 'guide-rail.dxf', bytes: rail.length, sha256: '' })
+
+test('the domed back of the guide rail, 24 chords, is offered as an arc of R 18 with what it changes in A and I', () => {
+  const asDrawn = previewOf(railTask, DEFAULT_RECIPE, {}, () => {})
+  const [offer] = asDrawn.outlines.arcOffers
+  expect([offer.chords, offer.radius]).toEqual([24, 18])
+  const taken = previewOf(railTask, { ...DEFAULT_RECIPE, arcs: [offer.run] }, {}, () => {})
+  const [before, after] = [asDrawn.answer.section, taken.answer.section]
+  if (!before || !after) throw new Error('no section')
+  // the drawing's vertices are rounded, and the offer is to first order
+  expect(offer.dArea).toBeWithin(after.area - before.area, { relative: 1e-4 })
+  expect(offer.dIx).toBeWithin(after.ix - before.ix, { relative: 2e-3 })
+  expect(offer.dIy).toBeWithin(after.iy - before.iy, { relative: 2e-3 })
 })

@@ -64,8 +64,16 @@ export function referencesOf({ answer, drawing, outlines, roles }: PreviewResult
 type Dimension = PreviewResult['drawing']['dimensions'][number]
 
 /** Whether a dimension measures what is taken: both its ends lie on or close to it, not on another detail of the sheet. */
-function besidePart({ bounds, count }: PreviewResult['outlines'], roles: PreviewResult['roles']): (dimension: Dimension) => boolean {
-  let [minX, minY, maxX, maxY] = [Number.POSITIVE_INFINITY, Number.POSITIVE_INFINITY, Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY]
+function besidePart(
+  { bounds, count }: PreviewResult['outlines'],
+  roles: PreviewResult['roles'],
+): (dimension: Dimension) => boolean {
+  let [minX, minY, maxX, maxY] = [
+    Number.POSITIVE_INFINITY,
+    Number.POSITIVE_INFINITY,
+    Number.NEGATIVE_INFINITY,
+    Number.NEGATIVE_INFINITY,
+  ]
   for (let k = 0; k < count; k++) {
     if (roles[k] === 'out') continue
     minX = Math.min(minX, bounds[4 * k])
@@ -74,6 +82,7 @@ function besidePart({ bounds, count }: PreviewResult['outlines'], roles: Preview
     maxY = Math.max(maxY, bounds[4 * k + 3])
   }
   const reach = CLOSE * Math.max(maxX - minX, maxY - minY)
-  const near = ({ x, y }: { x: number; y: number }) => x >= minX - reach && x <= maxX + reach && y >= minY - reach && y <= maxY + reach
+  const near = ({ x, y }: { x: number; y: number }) =>
+    x >= minX - reach && x <= maxX + reach && y >= minY - reach && y <= maxY + reach
   return ({ a, b }) => near(a) && near(b)
 }
