@@ -10,6 +10,7 @@ import { sortEdges } from './looseEdges'
 import type { Tolerances } from './outlineSet'
 import type { Repair } from './region'
 import { splitAtEnds } from './splitAtEnds'
+import { withoutArea } from './withoutArea'
 
 /** Closed loops (counter-clockwise), what stayed open, and what branches. */
 export interface ClosedLoops {
@@ -99,7 +100,7 @@ function openFindings(openEdges: EdgeTable, openStart: number[], snap: number, m
     const [x1, y1] = [e[4 * to - 2], e[4 * to - 1]]
     const gap = Math.hypot(x1 - x0, y1 - y0)
     const at: [number, number] = [0.5 * (x0 + x1), 0.5 * (y0 + y1)]
-    if (gap <= snap) return geometryFinding('outline-without-area', { edges: to - from, x: x0, y: y0 }, at)
+    if (gap <= snap) return withoutArea(openEdges, from, to, snap)
     return geometryFinding('chain-open', { gap: gap * mmPerUnit, x: at[0], y: at[1], edges: to - from, x0, y0, x1, y1 }, at, gap)
   })
 }

@@ -73,7 +73,7 @@ export const GEOMETRY_FINDINGS = {
   'outline-without-area': {
     severity: 'warning',
     say: (p) =>
-      `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area; left out. It runs back over itself, or crosses itself so that its parts cancel: mend it in the drawing.`,
+      `A closed chain of ${plural(p.edges, 'edge', 'edges')} at ${place(p)} encloses no area, as it runs back over itself; left out. Check the drawing there.`,
   },
   'outline-thin': {
     severity: 'warning',

@@ -14,6 +14,7 @@ import type { OutlineSet, Tolerances } from './outlineSet'
 import type { ArcRun, Bond } from './recipe'
 import { measured, type Related, relate } from './relations'
 import { selectLoops } from './selectLoops'
+import { withoutArea } from './withoutArea'
 
 export interface OutlineOptions {
   arcs: ArcRun[]
@@ -72,8 +73,7 @@ function withoutEmpty(
   }
   for (let k = 0; k < loops.count; k++) {
     if (!empty[k] || doubled[k]) continue
-    const at = place(k)
-    findings.push(geometryFinding('outline-without-area', { edges: loopStart[k + 1] - loopStart[k], x: at[0], y: at[1] }, at))
+    findings.push(withoutArea(edges, loopStart[k], loopStart[k + 1], tolerances.snap))
   }
   const keep = (k: number) => !doubled[k] && !empty[k]
   if (count === 0 && !empty.includes(1)) return { edges, loopStart, undecided }

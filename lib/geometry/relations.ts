@@ -31,7 +31,7 @@ export type Related = Pick<
  * Whether a counter-clockwise loop that meets itself crosses itself: it winds round some face more than once or
  * backwards. One that only touches itself (a pinch point, a cut to a hole and back) winds round every point once or not.
  */
-function crossesItself(edges: EdgeTable, from: number, to: number, snap: number): boolean {
+export function crossesItself(edges: EdgeTable, from: number, to: number, snap: number): boolean {
   const rows = Uint32Array.from({ length: to - from }, (_, n) => from + n)
   const faces = facesOf(edges, rows, { snap })
   if (faces.tooMany) return true
