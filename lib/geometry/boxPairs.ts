@@ -1,4 +1,4 @@
-/** Children of a node. */
+/** Children of a node, and boxes in a run. */
 const WIDTH = 8
 
 /** Distance along a Hilbert curve over a 2¹⁵ × 2¹⁵ grid (Hacker's Delight, from memory). */
@@ -46,55 +46,104 @@ function hilbertOrder(boxes: Float64Array, count: number): Uint32Array {
   return Uint32Array.from(keys, (key) => key % slots)
 }
 
-/** Levels of boxes, leaves first: level n + 1 holds the union of each eight of level n. */
-function levelsOf(boxes: Float64Array, order: Uint32Array, pad: number): Float64Array[] {
-  const count = order.length
-  let level = new Float64Array(4 * count)
-  for (let i = 0; i < count; i++) {
-    const b = 4 * order[i]
-    level[4 * i] = boxes[b] - pad
-    level[4 * i + 1] = boxes[b + 1] - pad
-    level[4 * i + 2] = boxes[b + 2] + pad
-    level[4 * i + 3] = boxes[b + 3] + pad
+/** Runs of up to eight of the boxes that follow one another in a group; the first box of each, and the count at the end. */
+function runsOf(count: number, groups: ArrayLike<number>): Uint32Array {
+  let runs = 0
+  for (let k = 0; k + 1 < groups.length; k++) runs += Math.ceil((groups[k + 1] - groups[k]) / WIDTH)
+  const start = new Uint32Array(runs + 1)
+  let run = 0
+  for (let k = 0; k + 1 < groups.length; k++) for (let i = groups[k]; i < groups[k + 1]; i += WIDTH) start[run++] = i
+  start[runs] = count
+  return start
+}
+
+/** The box round boxes from … to − 1, written to `out` as its n-th. */
+function unite(boxes: Float64Array, from: number, to: number, out: Float64Array, n: number): void {
+  let minX = boxes[4 * from]
+  let minY = boxes[4 * from + 1]
+  let maxX = boxes[4 * from + 2]
+  let maxY = boxes[4 * from + 3]
+  for (let b = 4 * from + 4; b < 4 * to; b += 4) {
+    if (boxes[b] < minX) minX = boxes[b]
+    if (boxes[b + 1] < minY) minY = boxes[b + 1]
+    if (boxes[b + 2] > maxX) maxX = boxes[b + 2]
+    if (boxes[b + 3] > maxY) maxY = boxes[b + 3]
   }
+  out[4 * n] = minX
+  out[4 * n + 1] = minY
+  out[4 * n + 2] = maxX
+  out[4 * n + 3] = maxY
+}
+
+/** Levels of boxes, leaves first: level n + 1 holds the union of each eight of level n. */
+function levelsOf(boxes: Float64Array, order: Uint32Array): Float64Array[] {
+  let level = new Float64Array(4 * order.length)
+  for (let i = 0; i < order.length; i++) unite(boxes, order[i], order[i] + 1, level, i)
   const levels = [level]
   while (level.length > 4) {
     const below = level
     const n = below.length / 4
     level = new Float64Array(4 * Math.ceil(n / WIDTH))
-    for (let p = 0; 4 * p < level.length; p++) {
-      const last = Math.min(n, WIDTH * (p + 1))
-      let [minX, minY, maxX, maxY] = [
-        below[4 * WIDTH * p],
-        below[4 * WIDTH * p + 1],
-        below[4 * WIDTH * p + 2],
-        below[4 * WIDTH * p + 3],
-      ]
-      for (let c = WIDTH * p + 1; c < last; c++) {
-        minX = Math.min(minX, below[4 * c])
-        minY = Math.min(minY, below[4 * c + 1])
-        maxX = Math.max(maxX, below[4 * c + 2])
-        maxY = Math.max(maxY, below[4 * c + 3])
-      }
-      level[4 * p] = minX
-      level[4 * p + 1] = minY
-      level[4 * p + 2] = maxX
-      level[4 * p + 3] = maxY
-    }
+    for (let p = 0; 4 * p < level.length; p++) unite(below, WIDTH * p, Math.min(n, WIDTH * (p + 1)), level, p)
     levels.push(level)
   }
   return levels
 }
 
+/** Visits the pairs of boxes within run a, or between runs a and b; false where the visitor has had enough. */
+function joinRuns(
+  boxes: Float64Array,
+  start: Uint32Array,
+  runBoxes: Float64Array,
+  a: number,
+  b: number,
+  reach: number,
+  visit: (i: number, j: number) => boolean,
+): boolean {
+  const lastA = start[a + 1]
+  const lastB = start[b + 1]
+  for (let i = start[a]; i < lastA; i++) {
+    const minX = boxes[4 * i] - reach
+    const minY = boxes[4 * i + 1] - reach
+    const maxX = boxes[4 * i + 2] + reach
+    const maxY = boxes[4 * i + 3] + reach
+    if (runBoxes[4 * b] > maxX || runBoxes[4 * b + 2] < minX || runBoxes[4 * b + 1] > maxY || runBoxes[4 * b + 3] < minY) continue
+    for (let j = a === b ? i + 1 : start[b]; j < lastB; j++) {
+      if (boxes[4 * j] > maxX || boxes[4 * j + 2] < minX || boxes[4 * j + 1] > maxY || boxes[4 * j + 3] < minY) continue
+      if (!visit(i, j)) return false
+    }
+  }
+  return true
+}
+
+const NO_GROUPS: ArrayLike<number> = []
+
 /**
  * Calls `visit(i, j)`, i < j, once for each two of the first `count` boxes (minX minY maxX maxY each) that come within
  * 2 × `pad` of one another; stops when it returns false. A tree of boxes packed along a Hilbert curve is joined
- * with itself: near-linear where few boxes overlap. Up to 2²³ boxes.
+ * with itself: near-linear where few boxes overlap. Where boxes of a group follow one another in space, as the edges of a
+ * loop do (group k is boxes groups[k] … groups[k + 1] − 1, all of them together all boxes), runs of them are the leaves
+ * of a much smaller tree. Up to 2²³ leaves.
  */
-export function visitBoxPairs(boxes: Float64Array, count: number, pad: number, visit: (i: number, j: number) => boolean): void {
+export function visitBoxPairs(
+  boxes: Float64Array,
+  count: number,
+  pad: number,
+  visit: (i: number, j: number) => boolean,
+  groups = NO_GROUPS,
+): void {
   if (count < 2) return
-  const order = hilbertOrder(boxes, count)
-  const levels = levelsOf(boxes, order, pad)
+  const reach = 2 * pad
+  const start = groups.length > 0 ? runsOf(count, groups) : Uint32Array.from({ length: count + 1 }, (_, i) => i)
+  const runs = start.length - 1
+  const runBoxes = new Float64Array(4 * runs)
+  for (let r = 0; r < runs; r++) unite(boxes, start[r], start[r + 1], runBoxes, r)
+  const order = hilbertOrder(runBoxes, runs)
+  const levels = levelsOf(runBoxes, order)
+  if (levels.length === 1) {
+    joinRuns(boxes, start, runBoxes, 0, 0, reach, visit)
+    return
+  }
   const stack = [levels.length - 1, 0, 0]
   while (stack.length > 0) {
     const b = stack.pop() ?? 0
@@ -105,16 +154,17 @@ export function visitBoxPairs(boxes: Float64Array, count: number, pad: number, v
     const lastA = Math.min(n, WIDTH * (a + 1))
     const lastB = Math.min(n, WIDTH * (b + 1))
     for (let i = WIDTH * a; i < lastA; i++) {
-      const minX = boxesHere[4 * i]
-      const minY = boxesHere[4 * i + 1]
-      const maxX = boxesHere[4 * i + 2]
-      const maxY = boxesHere[4 * i + 3]
-      // a node joins itself too, a leaf does not
-      for (let j = a === b ? i + (level === 0 ? 1 : 0) : WIDTH * b; j < lastB; j++) {
+      const minX = boxesHere[4 * i] - reach
+      const minY = boxesHere[4 * i + 1] - reach
+      const maxX = boxesHere[4 * i + 2] + reach
+      const maxY = boxesHere[4 * i + 3] + reach
+      // a node joins itself too
+      for (let j = a === b ? i : WIDTH * b; j < lastB; j++) {
         if (boxesHere[4 * j] > maxX || boxesHere[4 * j + 2] < minX || boxesHere[4 * j + 1] > maxY || boxesHere[4 * j + 3] < minY)
           continue
         if (level > 0) stack.push(level, i, j)
-        else if (!visit(Math.min(order[i], order[j]), Math.max(order[i], order[j]))) return
+        else if (!joinRuns(boxes, start, runBoxes, Math.min(order[i], order[j]), Math.max(order[i], order[j]), reach, visit))
+          return
       }
     }
   }
