@@ -1,19 +1,15 @@
 import { boundsOfEdges, unionOfBoxes } from '../bounds'
 import { visitBoxPairs } from '../boxPairs'
-import { type EdgeTable, LINE } from '../edges'
-import { jetAt, lengthOf, newJet } from '../evaluate'
+import type { EdgeTable } from '../edges'
 import type { Finding } from '../finding'
-import { nearestOn } from '../nearest'
 import type { Bond } from '../recipe'
 import type { Region } from '../region'
+import { type Across, across, type Between } from './across'
 import { isConvex } from './convex'
 import { combineFinding } from './findings'
 import { perimeterOf } from './regionFrom'
 
-/**
- * Edges that face one another across a void narrower than the limit, those that belong together as one finding. Loops
- * marked `thin` are reported otherwise.
- */
+/** Slits and gaps narrower than the limit. Loops marked `thin` are reported otherwise. */
 export function facingGaps(
   region: Region,
   thin: Uint8Array,
@@ -22,10 +18,31 @@ export function facingGaps(
   limit: number,
   mmPerUnit: number,
 ): Finding[] {
-  const { edges, loopStart, piece } = region
-  const boxes = boundsOfEdges(edges)
+  const boxes = boundsOfEdges(region.edges)
   const loops = suspects(region, thin, area, boxes, limit)
-  if (loops.length === 0) return []
+  return facingPlaces(region, loops, boxes, limit, 'void').map((place) => gapFinding(place, bonds, limit, mmPerUnit))
+}
+
+/** Above this no torsion is sought (lib/section), and nothing else hangs on a wall a few µm thick. */
+const MOST_EDGES = 5000
+
+/** Metal thinner than the limit between edges of loops that are not `thin` themselves. */
+export function thinWalls(region: Region, thin: Uint8Array, limit: number, mmPerUnit: number): Finding[] {
+  if (region.edges.count > MOST_EDGES) return []
+  const loops = Array.from(thin.keys()).filter((k) => !thin[k])
+  return facingPlaces(region, loops, boundsOfEdges(region.edges), limit, 'metal').map(({ gap, length, at: [x, y] }) =>
+    combineFinding('wall-thin', { width: gap * mmPerUnit, length: length * mmPerUnit, x, y }, [x, y], length),
+  )
+}
+
+/** Where edges of the loops face one another closer than the limit; those that belong together are one place. */
+function facingPlaces(
+  { edges, loopStart, piece }: Region,
+  loops: number[],
+  boxes: Float64Array,
+  limit: number,
+  between: Between,
+): Place[] {
   const rows: number[] = []
   const loopOf: number[] = []
   for (const k of loops) {
@@ -34,6 +51,7 @@ export function facingGaps(
       loopOf.push(k)
     }
   }
+  if (rows.length === 0) return []
   const own = new Float64Array(4 * rows.length)
   rows.forEach((i, n) => {
     own.set(boxes.subarray(4 * i, 4 * i + 4), 4 * n)
@@ -46,7 +64,7 @@ export function facingGaps(
   const places: Place[] = []
   visitBoxPairs(own, rows.length, limit / 2, (m, n) => {
     if (joined(edges, rows[m], rows[n])) return true
-    const place = across(edges, rows[m], rows[n], limit)
+    const place = across(edges, rows[m], rows[n], limit, between)
     if (!place) return true
     const [a, b] = [find(m), find(n)].sort((p, q) => p - q)
     parent.set(b, a)
@@ -65,9 +83,7 @@ export function facingGaps(
         length: group.length + place.length,
       })
   }
-  return [...groups.values()]
-    .filter(({ length, gap }) => length > 4 * gap)
-    .map((place) => gapFinding(place, bonds, limit, mmPerUnit))
+  return [...groups.values()].filter(({ length, gap }) => length > 4 * gap)
 }
 
 /**
@@ -92,11 +108,6 @@ function suspects(region: Region, thin: Uint8Array, area: number[], edgeBoxes: F
   return Array.from(suspect.keys()).filter((k) => suspect[k] && !thin[k])
 }
 
-interface Across {
-  gap: number
-  length: number
-  at: [number, number]
-}
 interface Place extends Across {
   edge: number
   apart: boolean
@@ -114,34 +125,4 @@ function joined({ ends }: EdgeTable, i: number, j: number): boolean {
     for (const b of [4 * j, 4 * j + 2]) if (ends[a] === ends[b] && ends[a + 1] === ends[b + 1]) return true
   }
   return false
-}
-
-const jet = newJet()
-const SAMPLES = [1 / 6, 0.5, 5 / 6]
-
-/** How far two edges run opposite to each other with void between: metal is on the left of both. */
-function across(edges: EdgeTable, i: number, j: number, limit: number): Across | null {
-  const e = edges.ends
-  if (edges.kind[i] === LINE && edges.kind[j] === LINE) {
-    const dot =
-      (e[4 * i + 2] - e[4 * i]) * (e[4 * j + 2] - e[4 * j]) + (e[4 * i + 3] - e[4 * i + 1]) * (e[4 * j + 3] - e[4 * j + 1])
-    if (dot >= 0) return null
-  }
-  const [short, other] = lengthOf(edges, i) <= lengthOf(edges, j) ? [i, j] : [j, i]
-  let hits = 0
-  let gap = limit
-  let at: [number, number] = [0, 0]
-  for (const t of SAMPLES) {
-    const { x, y, dx, dy } = jetAt(edges, short, t, jet)
-    const near = nearestOn(edges, other, x, y)
-    if (!(near.distance < limit) || near.t <= 0 || near.t >= 1) continue
-    const toRight = dx * (near.y - y) - dy * (near.x - x) < 0
-    const there = jetAt(edges, other, near.t, jet)
-    const dot = dx * there.dx + dy * there.dy
-    if (!toRight || dot > -0.9 * Math.hypot(dx, dy) * Math.hypot(there.dx, there.dy)) continue
-    hits++
-    gap = Math.min(gap, near.distance)
-    at = [(x + near.x) / 2, (y + near.y) / 2]
-  }
-  return hits === 0 ? null : { gap, length: (hits / SAMPLES.length) * lengthOf(edges, short), at }
 }

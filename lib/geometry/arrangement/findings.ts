@@ -71,6 +71,11 @@ export const COMBINE_FINDINGS = {
     say: (p) =>
       `A slit only ${text(p.gap)} mm wide runs ${text(p.length)} mm at ${place(p)}. It is kept open; closed, torsion would be far greater. Open or closed: a person must know.`,
   },
+  'wall-thin': {
+    severity: 'warning',
+    say: (p) =>
+      `The metal is only ${text(p.width)} mm thick over ${text(p.length)} mm at ${place(p)}. It is kept as drawn; without it, torsion may be far smaller. Is it meant, or should the outlines touch or part there?`,
+  },
   gap: {
     severity: 'warning',
     say: (p) =>

@@ -4,14 +4,14 @@ import type { Finding } from '../finding'
 import type { Tolerances } from '../outlineSet'
 import type { Bond } from '../recipe'
 import type { Region } from '../region'
-import { facingGaps } from './facing'
+import { facingGaps, thinWalls } from './facing'
 import { combineFinding } from './findings'
 import { perimeterOf } from './regionFrom'
 
-/** Gaps narrower than this are asked about, mm. */
+/** Gaps and walls narrower than this are asked about, mm. */
 const NARROW = 0.05
 
-/** Slivers (2A ÷ perimeter below the duplicate tolerance), and slits and gaps between facing edges. */
+/** Slivers (2A ÷ perimeter below the duplicate tolerance), and slits, gaps and thin walls between facing edges. */
 export function narrowPlaces(
   region: Region,
   area: number[],
@@ -20,7 +20,9 @@ export function narrowPlaces(
   mmPerUnit: number,
 ): Finding[] {
   const { findings, thin } = slivers(region, area, tolerances.duplicate, mmPerUnit)
-  return [...findings, ...facingGaps(region, thin, area, bonds, NARROW / mmPerUnit, mmPerUnit)]
+  const limit = NARROW / mmPerUnit
+  const gaps = facingGaps(region, thin, area, bonds, limit, mmPerUnit)
+  return [...findings, ...gaps, ...thinWalls(region, thin, limit, mmPerUnit)]
 }
 
 function slivers(region: Region, area: number[], duplicate: number, mmPerUnit: number) {
