@@ -1,8 +1,9 @@
 import { z } from 'zod'
 import { RecipeInput } from '@/lib/api/schemas/recipe'
-import { RevisionFields } from '@/lib/api/schemas/revision'
+import { type OpenIntake, RevisionFields } from '@/lib/api/schemas/revision'
 import type { Actor } from './actor'
 import type { Db, Trx } from './client'
+import { profileNumber } from './counter'
 import { record } from './events'
 import type { TeamId } from './id'
 import { releaseKey } from './idempotency'
@@ -35,6 +36,29 @@ export async function addIntake(
     .values({ ...intake, teamId, userId, form: JSON.stringify(intake.form), attempts: 1, createdAt: now() })
     .execute()
   return { ...intake, teamId, userId, attempts: 1 }
+}
+
+/** The person's own uploads in this team that are not yet revisions, oldest first. */
+export async function intakesOf(db: Db, { teamId, userId }: Actor): Promise<OpenIntake[]> {
+  const rows = await db
+    .selectFrom('intake')
+    .innerJoin('profile', (join) =>
+      join.onRef('profile.id', '=', 'intake.profileId').onRef('profile.teamId', '=', 'intake.teamId'),
+    )
+    .select([
+      'intake.id',
+      'intake.profileId',
+      'profile.number',
+      'profile.title',
+      'intake.fileName',
+      'intake.bytes',
+      'intake.createdAt',
+    ])
+    .where('intake.teamId', '=', teamId)
+    .where('intake.userId', '=', userId)
+    .orderBy('intake.createdAt')
+    .execute()
+  return rows.map(({ number, ...row }) => ({ ...row, number: profileNumber(number) }))
 }
 
 /** Every upload that was under way when the server stopped. Not of one team: the server itself asks. */

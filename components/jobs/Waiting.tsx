@@ -6,8 +6,9 @@ import { LinkButton } from '@/components/ui/Button'
 import { formatDate } from '@/components/ui/dates'
 import { Empty } from '@/components/ui/Empty'
 import { keys } from '@/lib/api/keys'
+import type { OpenIntake } from '@/lib/api/schemas/revision'
 import type { Profile } from '@/lib/api/schemas/profile'
-import { useProfiles } from './data'
+import { useIntakes, useProfiles } from './data'
 import { ProfilesTable, useProfileColumns } from './ProfilesTable'
 
 /** The first page: what a person is expected to do next, then what changed last. */
@@ -16,14 +17,19 @@ export function Waiting() {
   const mayUpload = useMay('revision.add')
   const columns = useProfileColumns()
   const profiles = useProfiles(keys.profiles({ limit: 200 })).data?.items ?? []
-  const undrawn = profiles.filter(({ latest, owner }) => latest === null && owner.id === me.id)
+  const intakes = useIntakes(mayUpload)
+  const isTakenIn = (id: string) => intakes.some(({ profileId }) => profileId === id)
+  const undrawn = profiles.filter(({ id, latest, owner }) => latest === null && owner.id === me.id && !isTakenIn(id))
   const drawn = profiles.filter(({ latest }) => latest !== null).slice(0, 12)
   if (profiles.length === 0) return <Beginning />
   return (
     <>
       <PageHead title="Waiting for me" />
-      {undrawn.length > 0 ? (
+      {undrawn.length + intakes.length > 0 ? (
         <ul className="border-t border-hair">
+          {intakes.map((intake) => (
+            <TakenIn key={intake.id} intake={intake} />
+          ))}
           {undrawn.map((profile) => (
             <Undrawn key={profile.id} profile={profile} zone={me.zone} may={mayUpload} />
           ))}
@@ -40,6 +46,22 @@ export function Waiting() {
         </section>
       )}
     </>
+  )
+}
+
+function TakenIn({ intake }: { intake: OpenIntake }) {
+  const { profileId, number, title, fileName } = intake
+  return (
+    <li className="flex flex-wrap items-center gap-x-4 border-b border-line py-2">
+      <Link href={`/profiles/${profileId}`} className="font-mono text-accent hover:underline">
+        {number}
+      </Link>
+      <span>{title}</span>
+      <span className="text-small text-soft" role="status">
+        <span className="break-all font-mono">{fileName}</span> is on the server and being computed; its revision appears by
+        itself.
+      </span>
+    </li>
   )
 }
 

@@ -1,9 +1,12 @@
 'use client'
+import { useEffect, useRef } from 'react'
 import useSWR from 'swr'
+import { z } from 'zod'
 import { getJson, refresh, sendJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
 import { page } from '@/lib/api/schemas/common'
 import { Job, type JobChange, type JobFields } from '@/lib/api/schemas/job'
+import { OpenIntake } from '@/lib/api/schemas/revision'
 import { Profile, type ProfileChange, type ProfileFields } from '@/lib/api/schemas/profile'
 
 export const JOBS = keys.jobs()
@@ -14,6 +17,23 @@ const Profiles = page(Profile)
 export const useJobs = (path: string) => useSWR(path, getJson(Jobs), { keepPreviousData: true })
 export const useJob = (id: string) => useSWR(keys.job(id), getJson(Job))
 export const useProfiles = (path: string) => useSWR(path, getJson(Profiles), { keepPreviousData: true })
+
+const Intakes = z.object({ items: z.array(OpenIntake) })
+const POLL = 2000
+
+/** One's own uploads that the server still computes; asked again while there are any, and the lists with the last one's end. */
+export function useIntakes(may: boolean): OpenIntake[] {
+  const { data } = useSWR(may ? keys.intakes : null, getJson(Intakes), {
+    refreshInterval: (latest) => (latest && latest.items.length > 0 ? POLL : 0),
+  })
+  const items = data?.items ?? []
+  const before = useRef(0)
+  useEffect(() => {
+    if (items.length < before.current) void refresh(PROFILES)
+    before.current = items.length
+  }, [items.length])
+  return items
+}
 
 /** Every row of a list, page after page. */
 async function everything<T>(

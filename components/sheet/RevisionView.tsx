@@ -83,7 +83,7 @@ export function RevisionView({ profile, revision, revisions, region, regionFault
               <UserAxisPanel {...{ bundles, display, state, dispatch }} section={answer.section} />
             </>
           )}
-          <Cautions revision={revision} />
+          <Cautions answer={answer} />
         </>
       ),
     },

@@ -12,12 +12,19 @@ import { writingOf } from './writing'
 
 type Names = ReturnType<typeof axisNames>
 
-const GROUPS: { group: FigureGroup; title: (names: Names) => string }[] = [
+/** Rows that few need stand folded under the others, with words for what they are. */
+interface Fold {
+  has: (key: string) => boolean
+  word: string
+}
+const PLASTIC: Fold = { has: (key) => !/^plastic\.\w+$/.test(key), word: 'Neutral axes, shape factors, free bending' }
+
+const GROUPS: { group: FigureGroup; title: (names: Names) => string; fold?: Fold }[] = [
   { group: 'size', title: () => 'Size' },
   { group: 'centroid', title: () => 'Centroid, as drawn' },
   { group: 'bending', title: ({ x, y }) => `Bending about ${x} and ${y}` },
   { group: 'principal', title: ({ axis1, axis2 }) => `Principal axes ${axis1} and ${axis2}` },
-  { group: 'plastic', title: () => 'Plastic bending' },
+  { group: 'plastic', title: () => 'Plastic bending', fold: PLASTIC },
   { group: 'torsion', title: () => 'Torsion and shear' },
 ]
 
@@ -42,37 +49,49 @@ interface Props {
 /** Every figure of the section, from the one table of figures, in groups. */
 export const SectionSheet = memo(function SectionSheet({ section, display, hover }: Props) {
   const names = axisNames(display.axes)
+  const row = ({ figure, value }: Row) => (
+    <FigureRow
+      key={figure.key}
+      figure={figure}
+      value={value}
+      origin={section.origin[figure.key]}
+      display={display}
+      hover={hover}
+    />
+  )
   return (
     <>
-      {GROUPS.map(({ group, title }) => (
-        <section key={group} className="border-hair border-t py-2 first:border-t-0 first:pt-0">
-          <table className="w-full border-collapse">
-            <caption className="pb-1 text-left font-semibold text-small text-soft">{title(names)}</caption>
-            <tbody>
-              {rowsOf(section, group).map(({ figure, value }) => (
-                <FigureRow
-                  key={figure.key}
-                  figure={figure}
-                  value={value}
-                  origin={section.origin[figure.key]}
-                  display={display}
-                  hover={hover}
-                />
-              ))}
-            </tbody>
-          </table>
-          {group === 'size' && section.mass === undefined && (
-            <p className="text-small text-soft">No mass: no material was chosen for this revision.</p>
-          )}
-          {group === 'plastic' && <FreeAxes section={section} display={display} />}
-          {group === 'principal' && section.theta === null && (
-            <p className="text-small text-soft">
-              Every axis through the centroid is principal: the two second moments agree within what the drawing's digits tell, so
-              there is no angle, and no moduli belong to axes {names.axis1} and {names.axis2} alone.
-            </p>
-          )}
-        </section>
-      ))}
+      {GROUPS.map(({ group, title, fold }) => {
+        const rows = rowsOf(section, group)
+        if (rows.length === 0) return null
+        return (
+          <section key={group} className="border-hair border-t py-2 first:border-t-0 first:pt-0">
+            <table className="w-full border-collapse">
+              <caption className="pb-1 text-left font-semibold text-small text-soft">{title(names)}</caption>
+              <tbody>{rows.filter(({ figure }) => !fold?.has(figure.key)).map(row)}</tbody>
+            </table>
+            {fold && (
+              <details>
+                <summary className="min-h-7 text-small text-soft max-md:min-h-12">{fold.word}</summary>
+                <table className="w-full border-collapse">
+                  <caption className="sr-only">{fold.word}</caption>
+                  <tbody>{rows.filter(({ figure }) => fold.has(figure.key)).map(row)}</tbody>
+                </table>
+              </details>
+            )}
+            {group === 'size' && section.mass === undefined && (
+              <p className="text-small text-soft">No mass: no material was chosen for this revision.</p>
+            )}
+            {group === 'plastic' && <FreeAxes section={section} display={display} />}
+            {group === 'principal' && section.theta === null && (
+              <p className="text-small text-soft">
+                Every axis through the centroid is principal: the two second moments agree within what the drawing's digits tell,
+                so there is no angle, and no moduli belong to axes {names.axis1} and {names.axis2} alone.
+              </p>
+            )}
+          </section>
+        )
+      })}
       <OriginLegend />
     </>
   )

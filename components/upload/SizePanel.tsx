@@ -46,7 +46,7 @@ export function SizePanel({
       state={
         confirmed ? (
           <b className="text-moss">
-            confirmed: {claim?.what} {short(claim?.value ?? 0)} mm
+            confirmed: {claim?.what}, {short(claim?.value ?? 0)} mm
           </b>
         ) : (
           <b className="text-ochre">not confirmed yet</b>
@@ -70,7 +70,7 @@ export function SizePanel({
         </Select>
         <NumberChoice
           label="Scale"
-          hint="1 where drawn at full size; 10 for 1 : 10."
+          hint="1 where drawn at full size; 10 for 1:10."
           value={recipe.scale}
           allow={(scale) => scale > 0}
           onChoose={(scale) => dispatch({ type: 'set', change: { scale } })}
@@ -107,7 +107,7 @@ function Confirm({
     setKey(next.key)
     setWrong(null)
     if (next.by === 'drawn') setTyped(short(next.says ?? next.drawn * mmPerUnit(recipe)))
-    if (next.at) onShow(next.at, next.drawn * mmPerUnit(recipe))
+    if (next.at) onShow(next.at, next.drawn)
   }
   const parsed = parseLength(typed, 'mm')
   const confirm = (event: FormEvent) => {

@@ -8,6 +8,7 @@ import { placeInSection } from '@/components/board/regionModel'
 import type { DrawingPoint } from '@/components/board/view'
 import { sheetAround, zoneOf } from '@/components/board/zones'
 import { BoardBoundary } from '@/components/sheet/BoardBoundary'
+import { Cautions } from '@/components/sheet/Cautions'
 import { writingOf } from '@/components/sheet/writing'
 import { useMe } from '@/components/shell/Me'
 import { toast } from '@/components/ui/toastStore'
@@ -145,6 +146,7 @@ export function UploadFlow({
             onShow={show}
           />
         )}
+        {result?.answer.section && <Cautions answer={result.answer} />}
         {saved ? (
           <Saved revision={saved.revision} number={saved.number} further={left} onFurther={further} />
         ) : (

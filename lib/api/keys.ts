@@ -37,5 +37,6 @@ export const keys = {
   figuresCsv: (id: string) => `${V1}/revisions/${id}/figures.csv`,
   files: (sha256: string) => `${V1}/files${queryOf({ sha256 })}`,
   events: (query?: Query) => `${V1}/events${queryOf(query)}`,
+  intakes: `${V1}/intakes`,
   demo: `${V1}/demo`,
 }

@@ -49,6 +49,7 @@ test('figures as CSV carry full precision and no cell that a spreadsheet would r
   const { text, headers } = await call(csv, { cookie: me.cookie, params: { id }, query: '?separator=semicolon&bom=true' })
   expect(headers.get('content-disposition')).toContain('P-0001-A.csv')
   expect(text).toContain('ix;I_x;407500;mm4')
+  expect(text).toMatch(/^caution;.*A competent person checks each figure/m)
   for (const line of text.slice(1).split('\r\n')) for (const cell of line.split(';')) expect(cell).not.toMatch(/^"?[=+@]/)
 })
 

@@ -10,14 +10,15 @@ import { getRevision } from '@/db/revisions'
 import { RecipeInput } from '@/lib/api/schemas/recipe'
 import { RevisionFields } from '@/lib/api/schemas/revision'
 import { config } from '@/lib/config'
+import { GET as intakes } from '@/app/api/v1/intakes/route'
 import { incomingPath, isEarlier, takeIn } from '@/lib/jobs/intake'
 import { recover } from '@/lib/jobs/recovery'
 import { opinionsSettled } from '@/lib/jobs/saveRevision'
 import type { SectionPool } from '@/lib/jobs/server-pool'
 import { sweep } from '@/lib/jobs/sweep'
-import { givenDatabase } from '@/tests/support/call'
+import { call, givenDatabase } from '@/tests/support/call'
 import { rectanglesDxf } from '@/tests/support/rectanglesDxf'
-import { givenTeam, type Member } from '@/tests/support/team'
+import { givenMember, givenTeam, type Member } from '@/tests/support/team'
 import { givenJob, givenProfile, givenRevision } from '@/tests/support/things'
 import { givenPool, upload } from '@/tests/support/upload'
 
@@ -61,6 +62,16 @@ test('an upload that was taken in is finished at the next start, and the retry w
     .prepare<[], { status: number; result_id: string }>('select status, result_id from idempotency')
     .get()
   expect(key).toEqual({ status: 201, result_id: id })
+})
+
+test('an upload under way is listed for its own person only, until its revision is there', async () => {
+  const { id } = await interrupted()
+  const items = async ({ cookie }: Member) => (await call(intakes, { cookie })).json.items
+  expect(await items(me)).toEqual([expect.objectContaining({ id, profileId, number: 'P-0001', fileName: 'a.dxf' })])
+  expect(await items(await givenMember(database, me.actor.teamId, { roles: ['designer'] }))).toEqual([])
+  await recover()
+  await opinionsSettled()
+  expect(await items(me)).toEqual([])
 })
 
 test('an upload whose bytes are gone, or that was tried three times, is given up and written down', async () => {

@@ -72,6 +72,16 @@ export const FileUses = z.object({
   known: z.boolean(),
   uses: z.array(z.object({ revisionId: Id, profileId: Id, number: z.string(), title: z.string(), letter: z.string() })),
 })
+/** A row of GET /api/v1/intakes: an upload of one's own that the server has taken in and still computes. */
+export const OpenIntake = z.object({
+  id: Id,
+  profileId: Id,
+  number: z.string(),
+  title: z.string(),
+  fileName: z.string(),
+  bytes: z.int(),
+  createdAt: Timestamp,
+})
 /** 422 of an upload that gives no section. */
 export const NoSection = z.object({ findings: z.array(Finding) })
 export type SizeConfirmation = z.infer<typeof SizeConfirmation>
@@ -82,4 +92,5 @@ export type NoSection = z.infer<typeof NoSection>
 export type UsedMaterial = z.infer<typeof UsedMaterial>
 export type RevisionSummary = z.infer<typeof RevisionSummary>
 export type RevisionAdded = z.infer<typeof RevisionAdded>
+export type OpenIntake = z.infer<typeof OpenIntake>
 export type FileUses = z.infer<typeof FileUses>

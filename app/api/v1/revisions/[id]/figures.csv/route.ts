@@ -6,6 +6,7 @@ import { attachment } from '@/lib/api/download'
 import { AppError } from '@/lib/api/errors'
 import { route } from '@/lib/api/route'
 import { ById } from '@/lib/api/schemas/common'
+import { cautionsOf } from '@/lib/section/cautions'
 import { figuresCsv } from '@/lib/section/csv'
 
 const CsvQuery = z.object({
@@ -30,6 +31,7 @@ export const GET = route({ permission: 'profile.read', params: ById, query: CsvQ
       ['file', file.name],
       ['sha256', file.sha256],
       ['engine', answer.engineVersion],
+      ...cautionsOf(answer.section, { shrinkage: answer.recipe.shrinkage ?? 1 }).map((caution) => ['caution', caution] as const),
     ],
   })
   return new Response(csv, { headers: attachment(`${number}-${letter}.csv`, 'text/csv; charset=utf-8') })
