@@ -87,6 +87,8 @@ describe('what is taken by default', () => {
     'plan$0$HIDDEN2',
     'Mitte',
     'VERDECKT2',
+    'ISO_MITTELLINIE',
+    'AM_ISO08W050',
   ])('%s draws no metal', (name) => {
     expect(drawsNoMetal(name)).toBe(true)
   })
