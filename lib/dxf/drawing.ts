@@ -17,6 +17,8 @@ export const INVISIBLE = 1
 export const HATCH_BOUNDARY = 2
 /** `EntityColumns.flags`: placed by an insert on a frozen layer, which hides all it places. */
 export const FROZEN_INSERT = 4
+/** `EntityColumns.flags`: a line of a hatch's pattern, placed by an anonymous block *X as up to R12. */
+export const HATCH_PATTERN = 8
 
 /** DXF entities (after blocks were opened up: one per placed entity). Columns, one row an entity. */
 export interface EntityColumns {
@@ -35,7 +37,7 @@ export interface EntityColumns {
   insert: Uint32Array
   /** 1 where the entity closes on itself (CIRCLE, closed polyline, full ellipse, closed spline) */
   closed: Uint8Array
-  /** INVISIBLE, HATCH_BOUNDARY, FROZEN_INSERT */
+  /** INVISIBLE, HATCH_BOUNDARY, FROZEN_INSERT, HATCH_PATTERN */
   flags: Uint8Array
   /** index into `Drawing.remarks` + 1: what there is to say about this entity; 0 for nothing */
   remark: Uint32Array

@@ -152,6 +152,7 @@ export const DXF_FINDINGS = {
   'hatches-left-out': note(
     (p) => `${plural(p.count, 'hatch', 'hatches')} left out; their boundaries can be taken as outlines on request.`,
   ),
+  'patterns-left-out': note((p) => `${plural(p.count, 'line', 'lines')} of hatch patterns (blocks named *X…) left out.`),
   'layouts-left-out': note((p) => `Left out, as drawn on layouts and not in the model: ${p.list}.`),
   'layer-not-found': warning((p) => `Layer ${p.layer}, which the recipe names, is not in the drawing.`),
   'line-type-not-found': warning((p) => `Line type ${p.lineType}, which the recipe names, is not in the drawing.`),

@@ -1,6 +1,6 @@
 import { type Affine, after } from './affine'
 import type { BlockDefinition } from './blocks'
-import { type EntityColumns, FROZEN_INSERT } from './drawing'
+import { type EntityColumns, FROZEN_INSERT, HATCH_PATTERN } from './drawing'
 import { pushEntity } from './entityTable'
 import type { Shown } from './measureBlocks'
 import type { Naming } from './naming'
@@ -17,6 +17,9 @@ export interface Surroundings {
   block: number
   insert: number
 }
+
+/** Names that programs give to the blocks of hatch patterns up to R12 (from memory). */
+const IS_PATTERN = /^\*X\d/i
 
 /** Puts copies of blocks into the root, entity by entity, in world coordinates. */
 export class BlockOpener {
@@ -60,7 +63,10 @@ export class BlockOpener {
       layer,
       lineType: entities.lineType[row],
       space: entities.space[row],
-      flags: entities.flags[row] | (this.naming.layers[layer].frozen ? FROZEN_INSERT : 0),
+      flags:
+        entities.flags[row] |
+        (this.naming.layers[layer].frozen ? FROZEN_INSERT : 0) |
+        (IS_PATTERN.test(block.sheet.name) ? HATCH_PATTERN : 0),
       block: outer === 0 ? this.numberOf(block) : outer,
       insert: entities.insert[row],
     }

@@ -6,6 +6,7 @@ import {
   OTHER_LAYER,
   OTHER_LINE_TYPE,
   OTHER_SPACE,
+  PATTERN,
   type Selecting,
   spaceIndex,
   TAKEN,
@@ -79,6 +80,7 @@ class Left {
   private readonly layouts = new Map<string, number>()
   private unseen = 0
   private hatches = 0
+  private patterns = 0
 
   constructor({ entities, layers, lineTypes, spaces }: Drawing, why: Uint8Array, gave: Uint8Array) {
     const add = (to: Map<string, number>, name: string) => to.set(name, (to.get(name) ?? 0) + 1)
@@ -86,6 +88,7 @@ class Left {
       if (gave[row] === 0) continue
       if (why[row] === OTHER_SPACE) add(this.layouts, spaces[entities.space[row]])
       else if (why[row] === HATCH) this.hatches++
+      else if (why[row] === PATTERN) this.patterns++
       else if (why[row] === UNSEEN) this.unseen++
       else if (why[row] === OTHER_LAYER) {
         const { name, off, frozen, plots } = layers[entities.layer[row]]
@@ -102,9 +105,10 @@ class Left {
     say('layers-left-out', this.layers)
     say('line-types-left-out', this.lineTypes)
     say('layouts-left-out', this.layouts)
-    const { unseen, hatches } = this
+    const { unseen, hatches, patterns } = this
     if (unseen > 0) findings.add('invisible-left-out', () => dxfFinding('invisible-left-out', { count: unseen }))
     if (hatches > 0) findings.add('hatches-left-out', () => dxfFinding('hatches-left-out', { count: hatches }))
+    if (patterns > 0) findings.add('patterns-left-out', () => dxfFinding('patterns-left-out', { count: patterns }))
   }
 
   /** Nothing is taken: where is the outline? */
@@ -125,6 +129,7 @@ class Left {
       return
     }
     const kinds = Object.entries(drawing.ignored).map(([kind, n]) => `${n} ${quoted(kind)}`)
+    if (this.patterns > 0) kinds.push(`${this.patterns} lines of hatch patterns`)
     const hint = kinds.length > 0 ? `It has ${kinds.slice(0, LISTED_NAMES).join(', ')}.` : 'It is empty.'
     findings.add('nothing-drawn', () => dxfFinding('nothing-drawn', { hint }))
   }

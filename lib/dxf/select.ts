@@ -1,6 +1,6 @@
 import type { Finding } from '../geometry/finding'
 import type { Recipe } from '../geometry/recipe'
-import { type Drawing, FROZEN_INSERT, HATCH_BOUNDARY, INVISIBLE } from './drawing'
+import { type Drawing, FROZEN_INSERT, HATCH_BOUNDARY, HATCH_PATTERN, INVISIBLE } from './drawing'
 import { FindingList } from './findingList'
 import { INSERT_KIND } from './kinds'
 import { drawsNoMetal } from './lineTypes'
@@ -29,17 +29,18 @@ export interface Selection {
   spaces: Tally[]
 }
 
-// why an entity is left out; the first that applies, in this order
+// why an entity is left out
 export const TAKEN = 0
 export const OTHER_SPACE = 1
 export const HATCH = 2
 export const UNSEEN = 3
 export const OTHER_LAYER = 4
 export const OTHER_LINE_TYPE = 5
+export const PATTERN = 6
 
 /**
  * Chooses the edges that a recipe takes. By default: model space; layers that are on, thawed and plot; line types
- * other than hidden, centre and phantom (`drawsNoMetal`); visible entities; no hatch boundaries. Layers or line
+ * other than hidden, centre and phantom (`drawsNoMetal`); visible entities; no hatch boundaries; never the lines of a hatch's pattern. Layers or line
  * types that the recipe names are taken whatever their state. Names are compared without regard to case.
  * A fault of an entity (an error) counts only where the entity is taken.
  */
@@ -53,6 +54,7 @@ export function selectEdges(drawing: Drawing, selecting: Selecting): Selection {
     const flags = entities.flags[row]
     if (entities.space[row] !== space) why[row] = OTHER_SPACE
     else if ((flags & HATCH_BOUNDARY) !== 0 && !selecting.hatches) why[row] = HATCH
+    else if ((flags & HATCH_PATTERN) !== 0) why[row] = PATTERN
     else if ((flags & INVISIBLE) !== 0) why[row] = UNSEEN
     else if (layers[entities.layer[row]] === 0 || ((flags & FROZEN_INSERT) !== 0 && !selecting.layers)) why[row] = OTHER_LAYER
     else if (lineTypes[entities.lineType[row]] === 0) why[row] = OTHER_LINE_TYPE
