@@ -28,7 +28,7 @@ function shaken({ edges, loopStart, ...rest }: Region, delta: number, next: () =
 }
 
 /** Figures that say where the section lies. */
-const placed = (key: string): boolean => /^(extents|centroid)\.|^circle\.[xy]$/.test(key)
+const placed = (key: string): boolean => /^(extents|centroid|shearCentre)\.|^circle\.[xy]$/.test(key)
 
 describe('the ± from the drawing’s digits', () => {
   test('covers what random polygons’ figures do when every corner moves by its last digit', () => {
