@@ -46,15 +46,19 @@ function hilbertOrder(boxes: Float64Array, count: number): Uint32Array {
   return Uint32Array.from(keys, (key) => key % slots)
 }
 
-/** Runs of up to eight of the boxes that follow one another in a group; the first box of each, and the count at the end. */
-function runsOf(count: number, groups: ArrayLike<number>): Uint32Array {
+const near = (boxes: Float64Array, i: number, j: number, reach: number): boolean =>
+  boxes[4 * j] <= boxes[4 * i + 2] + reach &&
+  boxes[4 * j + 2] >= boxes[4 * i] - reach &&
+  boxes[4 * j + 1] <= boxes[4 * i + 3] + reach &&
+  boxes[4 * j + 3] >= boxes[4 * i + 1] - reach
+
+/** Runs of up to eight boxes, each near the one before, as the edges of a loop are: the first of each run, and the count at the end. */
+function runsOf(boxes: Float64Array, count: number, reach: number): Uint32Array {
+  const start = new Uint32Array(count + 1)
   let runs = 0
-  for (let k = 0; k + 1 < groups.length; k++) runs += Math.ceil((groups[k + 1] - groups[k]) / WIDTH)
-  const start = new Uint32Array(runs + 1)
-  let run = 0
-  for (let k = 0; k + 1 < groups.length; k++) for (let i = groups[k]; i < groups[k + 1]; i += WIDTH) start[run++] = i
+  for (let i = 0; i < count; i++) if (i === 0 || i - start[runs - 1] === WIDTH || !near(boxes, i - 1, i, reach)) start[runs++] = i
   start[runs] = count
-  return start
+  return start.subarray(0, runs + 1)
 }
 
 /** The box round boxes from … to − 1, written to `out` as its n-th. */
@@ -116,25 +120,16 @@ function joinRuns(
   return true
 }
 
-const NO_GROUPS: ArrayLike<number> = []
-
 /**
  * Calls `visit(i, j)`, i < j, once for each two of the first `count` boxes (minX minY maxX maxY each) that come within
  * 2 × `pad` of one another; stops when it returns false. A tree of boxes packed along a Hilbert curve is joined
- * with itself: near-linear where few boxes overlap. Where boxes of a group follow one another in space, as the edges of a
- * loop do (group k is boxes groups[k] … groups[k + 1] − 1, all of them together all boxes), runs of them are the leaves
- * of a much smaller tree. Up to 2²³ leaves.
+ * with itself: near-linear where few boxes overlap. Its leaves are runs of neighbours, so that loops given edge by edge
+ * make a small tree. Up to 2²³ leaves.
  */
-export function visitBoxPairs(
-  boxes: Float64Array,
-  count: number,
-  pad: number,
-  visit: (i: number, j: number) => boolean,
-  groups = NO_GROUPS,
-): void {
+export function visitBoxPairs(boxes: Float64Array, count: number, pad: number, visit: (i: number, j: number) => boolean): void {
   if (count < 2) return
   const reach = 2 * pad
-  const start = groups.length > 0 ? runsOf(count, groups) : Uint32Array.from({ length: count + 1 }, (_, i) => i)
+  const start = runsOf(boxes, count, reach)
   const runs = start.length - 1
   const runBoxes = new Float64Array(4 * runs)
   for (let r = 0; r < runs; r++) unite(boxes, start[r], start[r + 1], runBoxes, r)

@@ -90,7 +90,7 @@ export function crossingsOf(
   let looked = 0
   const touched = new Uint8Array(edges.count)
   let tooMany = false
-  const meet = (i: number, j: number): boolean => {
+  visitBoxPairs(boxes, edges.count, tolerance, (i, j) => {
     const a = loopOf[i]
     const b = loopOf[j]
     if (++looked > MOST_PAIRS || met > MOST_MEETINGS) {
@@ -119,8 +119,7 @@ export function crossingsOf(
       pair.onB.push({ edge: j, other: i, from: fraction(edges, j, meeting.tf), to: fraction(edges, j, end.tf) })
     }
     return true
-  }
-  visitBoxPairs(boxes, edges.count, tolerance, meet, loopStart)
+  })
   const contacts = [...pairs.values()].map((pair) => ({
     a: pair.a,
     b: pair.b,
