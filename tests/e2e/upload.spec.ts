@@ -80,9 +80,11 @@ test('from sign-in to a saved revision by keys alone', async ({ page }) => {
   await page.keyboard.type(fresh('Keys'))
   await page.keyboard.press('Enter')
   await expect(page.getByText('Drop the DXF here')).toBeVisible({ timeout: 20_000 })
-  await page.getByRole('button', { name: 'Choose a file' }).focus()
   const choosing = page.waitForEvent('filechooser')
-  await page.keyboard.press('o')
+  await expect(async () => {
+    await page.keyboard.press('o')
+    await page.waitForEvent('filechooser', { timeout: 1000 })
+  }).toPass()
   await (await choosing).setFiles(drawing('mullion-60x118.dxf'))
   await page.getByLabel('A dimension you know').focus()
   await page.keyboard.press('Tab')
