@@ -1,11 +1,11 @@
 'use client'
 import type { HoverStore } from '@/components/board/hover'
-import { figureSymbol, figureWord } from '@/lib/section/naming'
 import { totalPlusMinus } from '@/components/sheet/plusMinus'
 import { SymbolText } from '@/components/sheet/SymbolText'
 import { useMe } from '@/components/shell/Me'
 import { UnitText } from '@/components/ui/UnitText'
 import { FIGURES } from '@/lib/section/figures'
+import { figureSymbol, figureWord } from '@/lib/section/naming'
 import type { Section } from '@/lib/section/types'
 import { format } from '@/lib/units/format'
 

@@ -1,8 +1,8 @@
 'use client'
 import { mmPerUnit } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
-import { forScreen } from '@/lib/units/format'
 import { survivingDigits } from '@/lib/units/digits'
+import { forScreen } from '@/lib/units/format'
 
 const shown = (value: number) => forScreen(survivingDigits(value, 4))
 

@@ -1,12 +1,12 @@
 'use client'
 import { type FormEvent, useState } from 'react'
 import { Button } from '@/components/ui/Button'
-import { Check, Choices } from '@/components/ui/Check'
 import { Field, Select } from '@/components/ui/Field'
 import { Notice } from '@/components/ui/Notice'
 import { mmPerUnit } from '@/lib/geometry/recipe'
 import type { PreviewResult } from '@/lib/jobs/browser-pool'
 import { parseLength } from '@/lib/units/parseLength'
+import { Finished } from './Finished'
 import { type Choices as Chosen, type FlowAction, isConfirmed } from './flow/flow'
 import { type Reference, referencesOf } from './flow/references'
 import { type Cure, compare, cures, UNITS } from './flow/size'
@@ -187,43 +187,4 @@ function actionOf(cure: Cure): FlowAction {
   if (cure.kind === 'unit') return { type: 'set', change: { unit: cure.unit } }
   if (cure.kind === 'scale') return { type: 'set', change: { scale: cure.scale } }
   return { type: 'finished', finished: 'die', shrinkage: cure.shrinkage }
-}
-
-function Finished({
-  finished,
-  shrinkage,
-  dispatch,
-}: {
-  finished: 'finished' | 'die' | null
-  shrinkage: number
-  dispatch: (action: FlowAction) => void
-}) {
-  return (
-    <Choices legend="What is drawn?" className="mt-3">
-      <Check
-        type="radio"
-        name="finished"
-        label="The finished profile"
-        checked={finished === 'finished'}
-        onChange={() => dispatch({ type: 'finished', finished: 'finished' })}
-      />
-      <Check
-        type="radio"
-        name="finished"
-        label="The die, larger by its shrinkage"
-        checked={finished === 'die'}
-        onChange={() => dispatch({ type: 'finished', finished: 'die' })}
-      />
-      {finished === 'die' && (
-        <NumberChoice
-          label="Shrinkage"
-          unit="%"
-          hint="Undone and recorded: 1.2 % makes the profile 1.012 times smaller than the die."
-          value={Number(((shrinkage - 1) * 100).toPrecision(10))}
-          allow={(percent) => percent >= 0 && percent < 100}
-          onChoose={(percent) => dispatch({ type: 'finished', finished: 'die', shrinkage: 1 + percent / 100 })}
-        />
-      )}
-    </Choices>
-  )
 }
