@@ -87,7 +87,8 @@ export const GEOMETRY_FINDINGS = {
   },
   'outlines-touch': {
     severity: 'note',
-    say: (p) => `${plural(p.count, 'outline touches', 'outlines touch')} another one, the first at ${place(p)}.`,
+    say: (p) =>
+      `${plural(p.count, 'outline touches', 'outlines touch')} another one, the first at ${place(p)}. Where they meet at a point only there is no wall and no joint: torsion is taken as open, and pieces as not joined.`,
   },
   'outline-crosses-itself': {
     severity: 'error',

@@ -9,7 +9,7 @@ export const COMBINE_FINDINGS = {
   'make-up-needed': {
     severity: 'error',
     say: (p) =>
-      `${text(p.count)} outlines cross one another, the first two at ${place(p)}: metal or void cannot be told from nesting. Say what each outline does: add, cut, common or out; of an outline drawn twice, leave one out.`,
+      `${text(p.count)} outlines cross one another, those at ${text(p.places)}: metal or void cannot be told from nesting. State a make-up, what each outline does: add, cut, common or out; of an outline drawn twice, leave one out.`,
   },
   'make-up-point-off': {
     severity: 'warning',

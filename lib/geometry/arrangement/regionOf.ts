@@ -1,4 +1,4 @@
-import type { Finding } from '../finding'
+import { type Finding, placeText } from '../finding'
 import type { OutlineSet, Tolerances } from '../outlineSet'
 import { nearestOutlines } from '../pickOutlines'
 import type { Bond, Does, MakeUpStep, XY } from '../recipe'
@@ -143,9 +143,15 @@ function undecidedFinding(set: OutlineSet, taken: Uint8Array): Finding | null {
   return combineFinding('faces-undecided', { count: waiting.length, x, y }, [x, y])
 }
 
+const NAMED = 6
+
 function crossingFinding(set: OutlineSet, crossing: [number, number][]): Finding {
-  const [x, y] = [set.at[2 * crossing[0][0]], set.at[2 * crossing[0][0] + 1]]
-  return combineFinding('make-up-needed', { count: new Set(crossing.flat()).size, x, y }, [x, y])
+  const outlines = [...new Set(crossing.flat())]
+  const point = (k: number): XY => [set.at[2 * k], set.at[2 * k + 1]]
+  const names = outlines.slice(0, NAMED).map((k) => placeText({ x: point(k)[0], y: point(k)[1] }))
+  const places = outlines.length > NAMED ? `${names.join(', ')} and further` : names.join(', ')
+  const [x, y] = point(outlines[0])
+  return combineFinding('make-up-needed', { count: outlines.length, places, x, y }, [x, y])
 }
 
 function partsOf(set: OutlineSet, combined: Combined, { materials, steps }: MakeUp, region: Region): RegionAnswer['parts'] {

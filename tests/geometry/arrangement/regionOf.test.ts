@@ -120,6 +120,7 @@ test('outlines that cross have no default: an error asks for a make-up and gives
   const answer = combined([rectangle(0, 0, 10, 10), rectangle(5, 5, 10, 10)])
   expect(answer.region).toBeNull()
   expect(answer.findings.map(({ code, severity }) => [code, severity])).toEqual([['make-up-needed', 'error']])
+  expect(answer.findings[0].message).toContain('2 outlines cross one another, those at (0, 5), (10, 15)')
 })
 
 test('a round hole that touches the plate in one point is a hole with zero wall, 100 − 4π mm²', () => {
