@@ -26,14 +26,14 @@ export function unitFindings(drawing: Drawing, recipe: Recipe, section: Section 
 }
 
 /**
- * Without questions that a part or a make-up has answered: metal or void (else no metal would be taken), and what of the
- * sheet is the profile, where neither frame, title block nor another group is taken.
+ * Without questions that a part or a make-up has answered: metal or void, also where outlines cross (else there would be no
+ * metal), and what of the sheet is the profile, where neither frame, title block nor another group is taken.
  */
 export function withoutMootQuestions(findings: Finding[], outlines: OutlineSet, taken: number[]): Finding[] {
   if (taken.length === 0) return findings
   const { frames, titleBlocks, group } = outlines
   const takes = new Set(taken)
-  const moot = new Set(['face-metal-or-void'])
+  const moot = new Set(['face-metal-or-void', 'outlines-cross'])
   if (!frames.some((k) => takes.has(k))) moot.add('frame-found')
   if (!titleBlocks.flat().some((k) => takes.has(k))) moot.add('title-block-found')
   if (taken.every((k) => group[k] === group[taken[0]])) moot.add('groups-apart')
