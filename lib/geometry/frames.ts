@@ -1,5 +1,5 @@
 import { unionOfBoxes } from './bounds'
-import { LINE } from './edges'
+import { ARC, LINE } from './edges'
 import type { Loops } from './nest'
 import type { OutlineSet } from './outlineSet'
 
@@ -47,8 +47,8 @@ function tableOf(loops: Loops, cluster: number[]): number[] | null {
 
 /**
  * Looks for drawing frames and title blocks. A frame is a rectangle outside all others that touches nothing but title
- * blocks, holds every other outline, these fill less than half of it, and it holds a title block or outlines that hold
- * others, or has the size of a drawing sheet. A title block is at least four rectangles that
+ * blocks and holds every other outline, not as a tube its chamber, and holds a title block or outlines that hold others, or
+ * has the size of a drawing sheet or more than metal that solid ever has. A title block is at least four rectangles that
  * touch one another and fill a box like cells, or the `undecided` faces between a frame and lines that end on it.
  * Common practice, no source: they are only offered, never decided.
  */
@@ -110,18 +110,41 @@ function isFrame(
   mmPerUnit: number,
 ): boolean {
   const { count, bounds, area } = loops
-  let filled = 0
+  const inside: number[] = []
   let deepest = level
   for (let k = 0; k < count; k++) {
     if (apart[k]) continue
-    if (depth[k] === level + 1) filled += area[k]
+    if (depth[k] === level + 1) inside.push(k)
     deepest = Math.max(deepest, depth[k])
   }
-  if (deepest === level || filled > 0.5 * area[outer]) return false
-  if (deepest >= level + 2 || titled) return true
+  const filled = inside.reduce((sum, k) => sum + area[k], 0) / area[outer]
+  if (deepest === level || (!titled && isTube(loops, outer, inside))) return false
   const width = (bounds[4 * outer + 2] - bounds[4 * outer]) * mmPerUnit
   const height = (bounds[4 * outer + 3] - bounds[4 * outer + 1]) * mmPerUnit
-  return isSheet(Math.max(width, height), Math.min(width, height))
+  const [long, short] = [Math.max(width, height), Math.min(width, height)]
+  if (titled || isSheet(long, short)) return filled <= FULLEST_SHEET
+  const isLarge = short >= LARGEST_SOLID && inside.some((k) => !isRound(loops, k))
+  return (deepest >= level + 2 || isLarge) && filled <= FULLEST
+}
+
+/** A profile may fill a sheet; the chambers of a hollow section fill it more. */
+const FULLEST_SHEET = 0.8
+const FULLEST = 0.5
+/** Mostly solid metal this wide (mm) and with openings other than round is rather a sheet with a detail. */
+const LARGEST_SOLID = 150
+
+/** Whether one rectangle alone lies inside with the same wall on opposite sides. */
+function isTube(loops: Loops, outer: number, inside: number[]): boolean {
+  if (inside.length > 1 || !isRectangle(loops, inside[0])) return false
+  const [a, b] = [outer, inside[0]].map((k) => loops.bounds.subarray(4 * k, 4 * k + 4))
+  const size = Math.max(a[2] - a[0], a[3] - a[1])
+  const isEven = (low: number, high: number) => Math.abs(b[low] - a[low] - (a[high] - b[high])) <= 1e-6 * size
+  return isEven(0, 2) && isEven(1, 3)
+}
+
+const isRound = ({ edges, loopStart }: Loops, k: number): boolean => {
+  for (let i = loopStart[k]; i < loopStart[k + 1]; i++) if (edges.kind[i] !== ARC) return false
+  return true
 }
 
 /** A sheet of ISO 216 A4 to A0 less a margin of up to 20 mm a side. */

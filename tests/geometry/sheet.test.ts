@@ -58,6 +58,16 @@ test('a frame of 400 × 277 round two solid bars is known by the size of an A3 s
   expect(set.frames).toEqual([0])
 })
 
+test('a rectangle of 500 × 300 round one solid bar, of no sheet’s size, is offered too; round holes make it a plate', () => {
+  expect(new Drawn().rectangle(0, 0, 500, 300).rectangle(50, 50, 110, 90).outlines().frames).toEqual([0])
+  expect(new Drawn().rectangle(0, 0, 500, 300).circle(50, 50, 11).circle(450, 50, 11).outlines().frames).toEqual([])
+})
+
+test('an A4 frame round a profile that fills two thirds of it is offered; a tube of 280 × 200 is none', () => {
+  expect(new Drawn().rectangle(0, 0, 277, 190).rectangle(10, 10, 245, 160).outlines().frames).toEqual([0])
+  expect(new Drawn().rectangle(0, 0, 280, 200).rectangle(20, 40, 260, 160).outlines().frames).toEqual([])
+})
+
 test('a plate of 120 × 80 with four holes and a box section are no frames', () => {
   const plate = new Drawn().rectangle(0, 0, 120, 80).circle(15, 15, 4).circle(105, 15, 4).circle(15, 65, 4).circle(105, 65, 4)
   expect(plate.outlines().findings).toEqual([])
