@@ -1,0 +1,139 @@
+import { readFileSync } from 'node:fs'
+import path from 'node:path'
+import { expect, type Page, test } from '@playwright/test'
+import { facadeSheet } from '../upload/sheet'
+import { enter, fresh, openJob } from './door'
+
+const figures = (page: Page) => page.getByRole('list', { name: 'Figures as they stand' })
+const demo = (name: string) => path.resolve('fixtures/demo', name)
+const SHEET = { name: '<img src=x onerror=alert(3)>.dxf', mimeType: 'application/dxf', buffer: Buffer.from(facadeSheet()) }
+
+async function dropOnJob(page: Page, ...files: Parameters<ReturnType<Page['getByLabel']>['setInputFiles']>): Promise<void> {
+  await page.getByRole('link', { name: 'Drop drawings' }).first().click()
+  await page.getByLabel('DXF file').setInputFiles(...files)
+  await expect(figures(page)).toContainText('mm', { timeout: 20_000 })
+}
+
+async function confirm60(page: Page): Promise<void> {
+  await page.getByLabel('A dimension you know').selectOption({ label: 'drawn dimension 60' })
+  await page.getByRole('button', { name: 'Compare and confirm' }).click()
+  await expect(page.getByText('It agrees.')).toBeVisible()
+  await page.getByLabel('The finished profile').check()
+}
+
+async function open(page: Page, panel: string): Promise<void> {
+  await page.locator('summary').filter({ hasText: panel }).click()
+}
+
+test.beforeEach(async ({ page }) => {
+  page.on('dialog', () => {
+    throw new Error('a name from the file was run')
+  })
+  await enter(page)
+  await openJob(page, fresh('Harbour hall'))
+})
+
+test('a sheet of 20 profiles gives one by window, by block and by click, and two profiles with the same stored file', async ({
+  page,
+}) => {
+  await dropOnJob(page, SHEET)
+  await expect(page.getByText('220 details lie apart.').or(page.getByText('215 details lie apart.'))).toBeVisible()
+  await expect(page.getByText(SHEET.name, { exact: true })).toBeVisible()
+  await expect(page.getByText('<img src=x onerror=alert(1)>').first()).toBeVisible()
+
+  await page.getByLabel('Or take a block').selectOption('TUBE')
+  await expect(figures(page)).toContainText('444.00')
+  await page.getByRole('button', { name: 'Undo', exact: true }).click()
+  await expect(figures(page)).not.toContainText('444.00')
+
+  const board = page.getByRole('application')
+  await page.getByRole('button', { name: 'Window', exact: true }).click()
+  await board.scrollIntoViewIfNeeded()
+  const box = await board.boundingBox()
+  if (!box) throw new Error('no board')
+  // the lower left corner of the sheet: the first tube alone
+  await page.mouse.move(box.x + 0.03 * box.width, box.y + 0.97 * box.height)
+  await page.mouse.down()
+  await page.mouse.move(box.x + 0.1 * box.width, box.y + 0.8 * box.height)
+  await page.mouse.move(box.x + 0.165 * box.width, box.y + 0.7 * box.height)
+  await page.mouse.up()
+  await expect(figures(page)).toContainText('384.00')
+
+  await confirm60(page)
+  await page.getByLabel('Title of the profile').fill('First tube')
+  await page.getByRole('button', { name: 'Save revision' }).click()
+  await expect(page.getByText(/Revision A of P-\d+ is saved/)).toBeVisible({ timeout: 30_000 })
+  await page.getByRole('button', { name: /^Another profile from this sheet/ }).click()
+  await page.getByLabel('Take detail 3', { exact: true }).click()
+  await expect(figures(page)).toContainText('392.00')
+  await confirm60(page)
+  await page.getByLabel('Title of the profile').fill('Third tube')
+  await page.getByRole('button', { name: 'Save revision' }).click()
+  await expect(page.getByText('The same file is also in')).toBeVisible({ timeout: 30_000 })
+})
+
+test('a click on the board takes the detail under it, and a quarter turn makes it upright', async ({ page }) => {
+  await dropOnJob(page, demo('facade-sheet.dxf'))
+  await page.getByRole('button', { name: 'It is a frame: leave it out' }).click()
+  await expect(page.getByText('4 details lie apart.')).toBeVisible()
+  await page.getByLabel('Show detail 2', { exact: true }).click()
+  // what is shown stands in the middle of the board
+  await page.getByRole('application').click()
+  await expect(page.getByRole('columnheader', { name: 'Read in mm' }).locator('xpath=ancestor::table')).toContainText(
+    '60.00 × 118.0',
+  )
+  await page.getByRole('button', { name: '↶ 90°' }).click()
+  await expect(page.getByRole('columnheader', { name: 'Read in mm' }).locator('xpath=ancestor::table')).toContainText(
+    '118.0 × 60.00',
+  )
+})
+
+test('24 chords are taken as one arc of R 18 and the area grows by 1.45 mm²; declined they stay', async ({ page }) => {
+  await dropOnJob(page, demo('guide-rail.dxf'))
+  await expect(page.getByText(/24 chords; as an arc ΔA 1\.45/)).toBeVisible()
+  await page.getByRole('button', { name: 'Take as arc' }).last().click()
+  await expect(figures(page)).toContainText('1828.9')
+  await expect(page.getByText('An arc taken for chords')).toBeVisible()
+  await page.getByRole('button', { name: 'Undo', exact: true }).click()
+  await expect(figures(page)).toContainText('1827.5')
+  await page.getByRole('button', { name: 'Keep chords' }).click()
+  await expect(page.getByText(/24 chords; as an arc/)).toHaveCount(0)
+})
+
+test('layers and line types stand with counts, and a switch changes picture and figures at once', async ({ page }) => {
+  await dropOnJob(page, demo('facade-sheet.dxf'))
+  await open(page, 'Layers and line types')
+  await expect(page.getByLabel(/^PROFILE 6/)).toBeChecked()
+  await expect(page.getByText(/No outlines: 1 TEXT, 1 DIMENSION/).first()).toBeVisible()
+  const before = (await figures(page).textContent()) ?? ''
+  await page.getByLabel(/^SHEET 2/).uncheck()
+  await expect(figures(page)).not.toHaveText(before)
+  await expect(page.getByText('3 details lie apart.')).toBeVisible()
+})
+
+test('a pasted file is taken like a dropped one, and the team that has it already is told where', async ({ page }) => {
+  await dropOnJob(page, demo('hinge-leaf.dxf'))
+  await page.getByLabel('A dimension you know').selectOption('width')
+  const width = await page
+    .getByRole('application')
+    .getByText(/^\d+(\.\d+)? mm$/)
+    .first()
+    .textContent()
+  await page.getByLabel('Known to be').fill(width ?? '')
+  await page.getByRole('button', { name: 'Compare and confirm' }).click()
+  await page.getByLabel('The finished profile').check()
+  await page.getByRole('button', { name: 'Save revision' }).click()
+  await expect(page.getByText(/Revision A of P-\d+ is saved/)).toBeVisible({ timeout: 30_000 })
+  await page.reload()
+  await expect(page.getByText('Drop one or several DXF files here')).toBeVisible({ timeout: 20_000 })
+  await page.evaluate(
+    (text) => {
+      const clipboardData = new DataTransfer()
+      clipboardData.items.add(new File([text], 'pasted.dxf'))
+      document.dispatchEvent(new ClipboardEvent('paste', { clipboardData }))
+    },
+    readFileSync(demo('hinge-leaf.dxf'), 'utf8'),
+  )
+  await expect(figures(page)).toContainText('A212', { timeout: 20_000 })
+  await expect(page.getByText('The team has this file already:')).toBeVisible()
+})
