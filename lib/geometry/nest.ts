@@ -56,6 +56,8 @@ export function loopTester(
   }
 }
 
+const UNKNOWN = -1
+
 /**
  * Nesting depth of each loop: how many other loops hold its probe point (x y per loop), which must lie inside or on the
  * loop and on no other. Candidates come from an index of boxes; a loop can lie only in one of greater area, and one more
@@ -76,8 +78,7 @@ export function nest(
   for (let k = 0; k < loops.count; k++) index.add(b[4 * k], b[4 * k + 1], b[4 * k + 2], b[4 * k + 3])
   index.finish()
   const { area } = loops
-  const order = Uint32Array.from({ length: loops.count }, (_, k) => k).sort((p, q) => area[q] - area[p])
-  for (const k of order) {
+  for (let k = 0; k < loops.count; k++) {
     const x = probes[2 * k]
     const y = probes[2 * k + 1]
     let least = -1
@@ -86,14 +87,20 @@ export function nest(
       if (between && other !== k && inside(other, x, y)) least = other
       return false
     })
-    if (least < 0) continue
     parent[k] = least
-    if (!crossing[least]) depth[k] = depth[least] + 1
-    else
-      index.search(x, y, x, y, (other) => {
-        if (other !== k && area[other] > area[k] && inside(other, x, y)) depth[k]++
-        return false
-      })
+    depth[k] = least < 0 ? 0 : UNKNOWN
+    if (least < 0 || !crossing[least]) continue
+    depth[k] = 0
+    index.search(x, y, x, y, (other) => {
+      if (other !== k && area[other] > area[k] && inside(other, x, y)) depth[k]++
+      return false
+    })
+  }
+  for (let k = 0; k < loops.count; k++) {
+    let steps = 0
+    let known = k
+    for (; depth[known] === UNKNOWN; known = parent[known]) steps++
+    for (let at = k; at !== known; at = parent[at]) depth[at] = depth[known] + steps--
   }
   return { depth, parent }
 }

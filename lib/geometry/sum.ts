@@ -1,25 +1,24 @@
 /**
- * A running sum that carries its own rounding error (Neumaier's variant of Kahan's sum, from memory):
- * the result is as if added in twice the precision and rounded once, whatever the order of magnitudes.
+ * Running sums that carry their own rounding error (Neumaier's variant of Kahan's sum, from memory): each result is as if
+ * added in twice the precision and rounded once, whatever the order of magnitudes. Sum j has its total at 2j and what it
+ * lost at 2j + 1.
  */
-export interface Sum {
-  total: number
-  lost: number
+export type Sums = Float64Array
+
+export const newSums = (count: number): Sums => new Float64Array(2 * count)
+
+export function add(sums: Sums, j: number, value: number): void {
+  const before = sums[2 * j]
+  const total = before + value
+  sums[2 * j + 1] += Math.abs(before) >= Math.abs(value) ? before - total + value : value - total + before
+  sums[2 * j] = total
 }
 
-export const newSum = (): Sum => ({ total: 0, lost: 0 })
-
-export function add(sum: Sum, value: number): void {
-  const total = sum.total + value
-  sum.lost += Math.abs(sum.total) >= Math.abs(value) ? sum.total - total + value : value - total + sum.total
-  sum.total = total
-}
-
-export const sumOf = (sum: Sum): number => sum.total + sum.lost
+export const sumOf = (sums: Sums, j: number): number => sums[2 * j] + sums[2 * j + 1]
 
 /** Compensated sum of a list. */
 export function compensatedSum(values: ArrayLike<number>): number {
-  const sum = newSum()
-  for (let i = 0; i < values.length; i++) add(sum, values[i])
-  return sumOf(sum)
+  const sum = newSums(1)
+  for (let i = 0; i < values.length; i++) add(sum, 0, values[i])
+  return sumOf(sum, 0)
 }

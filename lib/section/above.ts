@@ -1,4 +1,4 @@
-import { add, newSum, type Sum, sumOf } from '../geometry/sum'
+import { add, newSums, type Sums, sumOf } from '../geometry/sum'
 import type { Bundles } from './bundles'
 import { addEdgeAbove, addLine, addMoments, part, segment, WIDTH } from './edgeAbove'
 import type { Frame } from './frame'
@@ -65,13 +65,13 @@ const whole = new Float64Array(6)
 /** Area, first moments and second moment of the metal above v = c, about the frame's origin; exact for every kind of edge. */
 export function above(bundles: Bundles, frame: Frame, c: number): Above {
   const { edges, count, start, closed, segments } = bundles
-  const sums = [newSum(), newSum(), newSum(), newSum(), newSum()]
-  const turnedLater = [newSum(), newSum(), newSum(), newSum(), newSum(), newSum()]
+  const sums = newSums(5)
+  const turnedLater = newSums(6)
   spanRuns(bundles, frame)
   for (let k = 0; k < count; k++) {
     if (tops[k] < c) continue
     if (bottoms[k] > c && closed[k]) {
-      for (let j = 0; j < 6; j++) add(turnedLater[j], segments[6 * k + j])
+      for (let j = 0; j < 6; j++) add(turnedLater, j, segments[6 * k + j])
       continue
     }
     part.fill(0)
@@ -79,13 +79,13 @@ export function above(bundles: Bundles, frame: Frame, c: number): Above {
       addChord(bundles, k, frame)
       addTurned(bundles, segments, 6 * k, frame)
     } else for (let i = start[k]; i < start[k + 1]; i++) addEdgeAbove(edges, i, frame, c)
-    for (let j = 0; j < 5; j++) add(sums[j], part[j])
+    for (let j = 0; j < 5; j++) add(sums, j, part[j])
   }
   part.fill(0)
-  for (let j = 0; j < 6; j++) whole[j] = sumOf(turnedLater[j])
+  for (let j = 0; j < 6; j++) whole[j] = sumOf(turnedLater, j)
   addTurned(bundles, whole, 0, frame)
-  for (let j = 0; j < 5; j++) add(sums[j], part[j])
-  const [area, u, v, vv, width] = sums.map(sumOf)
+  for (let j = 0; j < 5; j++) add(sums, j, part[j])
+  const [area, u, v, vv, width] = [0, 1, 2, 3, 4].map((j) => sumOf(sums, j))
   return { area, u, v, vv, width }
 }
 
@@ -96,23 +96,24 @@ export function above(bundles: Bundles, frame: Frame, c: number): Above {
 export function halfAreaHeight(bundles: Bundles, frame: Frame, minV: number, maxV: number): number {
   const { edges, count, start, closed, segments, moments } = bundles
   let active = Uint32Array.from({ length: count }, (_, k) => k)
-  const settled = newSum()
+  const settled = newSums(1)
   let low = minV
   let high = maxV
   let c = low < 0 && high > 0 ? 0 : 0.5 * (low + high)
-  const addWhole = (sum: Sum, k: number) => {
-    add(sum, segments[6 * k + AREA])
+  const addWhole = (sum: Sums, k: number) => {
+    add(sum, 0, segments[6 * k + AREA])
     if (closed[k]) return
     part.fill(0)
     addChord(bundles, k, frame)
-    add(sum, part[0])
+    add(sum, 0, part[0])
   }
   let step = maxV - minV
   spanRuns(bundles, frame)
   for (let tries = 0; tries < 200; tries++) {
-    const area = { ...settled }
+    const area = settled.slice()
     let width = 0
-    for (const k of active) {
+    for (let n = 0; n < active.length; n++) {
+      const k = active[n]
       if (tops[k] < c) continue
       if (bottoms[k] > c) {
         addWhole(area, k)
@@ -120,15 +121,16 @@ export function halfAreaHeight(bundles: Bundles, frame: Frame, minV: number, max
       }
       part.fill(0)
       for (let i = start[k]; i < start[k + 1]; i++) addEdgeAbove(edges, i, frame, c)
-      add(area, part[0])
+      add(area, 0, part[0])
       width += part[WIDTH]
     }
-    const excess = sumOf(area) - 0.5 * moments.area
+    const excess = sumOf(area, 0) - 0.5 * moments.area
     if (excess > 0) low = c
     else high = c
     if (Math.abs(excess) <= 2e-14 * moments.area || high - low <= 1e-15 * (maxV - minV)) break
     let kept = 0
-    for (const k of active) {
+    for (let n = 0; n < active.length; n++) {
+      const k = active[n]
       if (bottoms[k] > high) addWhole(settled, k)
       else if (tops[k] >= low) active[kept++] = k
     }

@@ -1,7 +1,7 @@
 import { ARC, BEZIER, ELLIPSE, LINE } from '../geometry/edges'
 import { jetAt, lengthOf, newJet } from '../geometry/evaluate'
 import type { Region } from '../geometry/region'
-import { add, newSum, sumOf } from '../geometry/sum'
+import { add, newSums, sumOf } from '../geometry/sum'
 
 /**
  * Integrals along the boundary, about (x, y): what a figure moves by when the boundary moves out by δ is δ times one of these.
@@ -24,8 +24,7 @@ const jet = newJet()
 
 /** Lengths compensated; the moments of arcs and splines by Simpson's rule (they serve bounds of uncertainty only). */
 export function boundaryOf({ edges, loopStart, hole }: Region, x: number, y: number): Boundary {
-  const outer = newSum()
-  const inner = newSum()
+  const lengths = newSums(2)
   let xx = 0
   let yy = 0
   let xy = 0
@@ -35,7 +34,6 @@ export function boundaryOf({ edges, loopStart, hole }: Region, x: number, y: num
   let hasRational = false
   const e = edges.ends
   for (let loop = 0; loop < hole.length; loop++) {
-    const sum = hole[loop] ? inner : outer
     let lastX = 0
     let lastY = 0
     for (let i = loopStart[loop]; i < loopStart[loop + 1]; i++) {
@@ -63,7 +61,7 @@ export function boundaryOf({ edges, loopStart, hole }: Region, x: number, y: num
         lastX = dx / length
         lastY = dy / length
       }
-      add(sum, length)
+      add(lengths, hole[loop], length)
       const sixth = length / 6
       xx += sixth * (x0 * x0 + 4 * mx * mx + x1 * x1)
       yy += sixth * (y0 * y0 + 4 * my * my + y1 * y1)
@@ -71,5 +69,5 @@ export function boundaryOf({ edges, loopStart, hole }: Region, x: number, y: num
     }
     turning += 2
   }
-  return { outer: sumOf(outer), inner: sumOf(inner), xx, yy, xy, turning, hasEllipse, hasBezier, hasRational }
+  return { outer: sumOf(lengths, 0), inner: sumOf(lengths, 1), xx, yy, xy, turning, hasEllipse, hasBezier, hasRational }
 }

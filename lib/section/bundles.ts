@@ -1,7 +1,7 @@
 import { edgeBounds } from '../geometry/bounds'
 import { type EdgeTable, LINE } from '../geometry/edges'
 import type { Region } from '../geometry/region'
-import { add, newSum, sumOf } from '../geometry/sum'
+import { add, newSums, sumOf } from '../geometry/sum'
 import { frameAt } from './frame'
 import { AREA, addShifted, lineMoments, U, UU, UV, V, VV } from './momentArray'
 import { type Moments, runMoments } from './moments'
@@ -109,7 +109,7 @@ function fillSegments(bundles: Bundles): void {
   const { edges, count, start, x, y, segments } = bundles
   const { ends } = edges
   const frame = frameAt(x, y)
-  const sums = Array.from({ length: 6 }, newSum)
+  const sums = newSums(6)
   for (let k = 0; k < count; k++) {
     runMoments(edges, start[k], start[k + 1], frame, fan)
     const first = 4 * start[k]
@@ -118,11 +118,11 @@ function fillSegments(bundles: Bundles): void {
     const y0 = ends[first + 1]
     lineMoments(x0 - x, y0 - y, ends[last] - x0, ends[last + 1] - y0, chord)
     for (let j = 0; j < 6; j++) {
-      add(sums[j], fan[j])
+      add(sums, j, fan[j])
       segments[6 * k + j] = fan[j] - chord[j]
     }
   }
-  const [area, u, v, uu, vv, uv] = [AREA, U, V, UU, VV, UV].map((j) => sumOf(sums[j]))
+  const [area, u, v, uu, vv, uv] = [AREA, U, V, UU, VV, UV].map((j) => sumOf(sums, j))
   bundles.moments = { area, u, v, uu, vv, uv }
 }
 

@@ -1,5 +1,5 @@
 import { type EdgeTable, LINE } from '../geometry/edges'
-import { add, newSum, sumOf } from '../geometry/sum'
+import { add, newSums, sumOf } from '../geometry/sum'
 import { edgeMoments } from './edgeMoments'
 import type { Frame } from './frame'
 import { AREA, U, UU, UV, V, VV } from './momentArray'
@@ -17,6 +17,7 @@ export interface Moments {
 const BLOCK = 64
 const one = new Float64Array(6)
 const block = new Float64Array(6)
+const sums = newSums(6)
 
 /**
  * Moments of the fans between the frame's origin and edges from … to − 1, into `out`. Lines as in `lineMoments`, written out here
@@ -80,15 +81,17 @@ export function momentsOf(edges: EdgeTable, from: number, to: number, frame: Fra
     runMoments(edges, from, to, frame, block)
     return { area: block[AREA], u: block[U], v: block[V], uu: block[UU], vv: block[VV], uv: block[UV] }
   }
-  const [a, u, v, uu, vv, uv] = Array.from({ length: 6 }, newSum)
+  sums.fill(0)
   for (let i = from; i < to; i += BLOCK) {
     runMoments(edges, i, Math.min(to, i + BLOCK), frame, block)
-    add(a, block[AREA])
-    add(u, block[U])
-    add(v, block[V])
-    add(uu, block[UU])
-    add(vv, block[VV])
-    add(uv, block[UV])
+    for (let j = 0; j < 6; j++) add(sums, j, block[j])
   }
-  return { area: sumOf(a), u: sumOf(u), v: sumOf(v), uu: sumOf(uu), vv: sumOf(vv), uv: sumOf(uv) }
+  return {
+    area: sumOf(sums, AREA),
+    u: sumOf(sums, U),
+    v: sumOf(sums, V),
+    uu: sumOf(sums, UU),
+    vv: sumOf(sums, VV),
+    uv: sumOf(sums, UV),
+  }
 }
