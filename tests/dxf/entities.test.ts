@@ -162,6 +162,12 @@ describe('ELLIPSE', () => {
     expect(codesOf(drawing)).toEqual(['ellipse-ratio'])
   })
 
+  it.each([6.2832, 6.28319, 6.28318531])('a full turn written as %d, rounded beyond 2π, is a full ellipse', (end) => {
+    const drawing = read(drawn(ellipse([0, 0, 12, 0, 0.5, 0, end])))
+    expect(drawing.entities.closed[0]).toBe(1)
+    expect(edgesOf(drawing)).toEqual(only(ellipse([0, 0, 12, 0, 0.5, 0, 2 * Math.PI])))
+  })
+
   it('a ratio of exactly 1 is a circular arc', () => {
     expect(only(ellipse([0, 0, 0, 2, 1, 0, Math.PI]))).toMatchObject([
       { kind: ARC, radius: 2, start: Math.PI / 2, sweep: Math.PI },

@@ -23,11 +23,15 @@ export function readCircle(reading: Reading) {
 
 /** Angles and parameters closer than this (degrees or rad) are one: they are written with so many digits. */
 const SAME_ANGLE = 1e-9
+/** Share of a turn by which rounding may take a full one beyond itself: 2π is written 6.2832. No arc is written so. */
+const BEYOND_FULL = 1e-4
 
 /** Sweep from start to end counter-clockwise, in (0, turn]; 0 where they are the same angle. `turn` is 360 or 2π. */
 export function sweepFrom(start: number, end: number, turn: number): number {
   const turns = Math.round((end - start) / turn)
-  if (Math.abs(end - start - turns * turn) <= SAME_ANGLE) return turns === 0 ? 0 : turn
+  const beyond = end - start - turns * turn
+  if (Math.abs(beyond) <= SAME_ANGLE) return turns === 0 ? 0 : turn
+  if (turns > 0 && beyond > 0 && beyond <= BEYOND_FULL * turn) return turn
   const sweep = (end - start) % turn
   return sweep < 0 ? sweep + turn : sweep
 }
