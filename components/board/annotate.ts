@@ -1,3 +1,4 @@
+import { totalPlusMinus } from '@/components/sheet/plusMinus'
 import type { Section } from '@/lib/section/types'
 import { angleArc, circleWithDiameter } from './angleArc'
 import { type Annotations, emptyAnnotations, merge } from './annotation'
@@ -19,7 +20,8 @@ export interface Shown {
 export interface Writing {
   names: AxisNames
   length: (mm: number) => string
-  angle: (degrees: number) => string
+  /** with no digit that ± leaves meaningless */
+  angle: (degrees: number, plusMinus?: number) => string
 }
 
 const AXES: AxisId[] = ['x', 'y', 'axis1', 'axis2']
@@ -63,7 +65,13 @@ export function annotate(section: Section | null, frame: Frame, shown: Shown, { 
     ...dimensions,
     ...(shown.plastic ? plasticXY(section, frame, names) : []),
     shown.axes && theta !== null
-      ? angleArc(frame.view, centroid, theta, angleRadius(frame.viewport), angle(theta))
+      ? angleArc(
+          frame.view,
+          centroid,
+          theta,
+          angleRadius(frame.viewport),
+          angle(theta, totalPlusMinus(section.origin.theta?.plusMinus)),
+        )
       : emptyAnnotations(),
     shown.circle
       ? circleWithDiameter(frame.view, circle, circle.radius, `Ø ${length(2 * circle.radius)}`, 'circle')

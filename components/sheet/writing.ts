@@ -21,6 +21,6 @@ export function writingOf(display: TeamSettings): Writing {
       const { text, unit } = format(mm, 'length', display)
       return `${withoutZeros(text)} ${unitWords(unit)}`
     },
-    angle: (degrees) => `${withoutZeros(format(degrees, 'angle', display).text)}°`,
+    angle: (degrees, plusMinus) => `${withoutZeros(format(degrees, 'angle', display, plusMinus).text)}°`,
   }
 }

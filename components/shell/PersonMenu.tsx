@@ -69,7 +69,7 @@ export function PersonMenu({ theme: first }: { theme: Theme }) {
             {initials}
           </span>
         }
-        name={`${me.name}, ${me.team.name}`}
+        name={`${me.name}, ${me.team.name} (${initials})`}
         items={items}
         className="max-md:ml-auto"
       />

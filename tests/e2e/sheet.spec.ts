@@ -1,12 +1,31 @@
 import { readFileSync } from 'node:fs'
 import path from 'node:path'
 import { expect, type Page, test } from '@playwright/test'
+import { drawn, line } from '../support/dxf'
 import { facadeSheet } from '../upload/sheet'
 import { enter, fresh, openJob } from './door'
 
 const figures = (page: Page) => page.getByRole('list', { name: 'Figures as they stand' })
 const demo = (name: string) => path.resolve('fixtures/demo', name)
 const SHEET = { name: '<img src=x onerror=alert(3)>.dxf', mimeType: 'application/dxf', buffer: Buffer.from(facadeSheet()) }
+
+/** 100 × 50 mm of lines with a partition at x = 40. */
+const PARTITIONED = [
+  [0, 0, 40, 0],
+  [40, 0, 100, 0],
+  [100, 0, 100, 50],
+  [100, 50, 40, 50],
+  [40, 50, 0, 50],
+  [0, 50, 0, 0],
+  [40, 0, 40, 50],
+] as const
+const square = (x: number, y: number, side: number) =>
+  [
+    line(x, y, x + side, y),
+    line(x + side, y, x + side, y + side),
+    line(x + side, y + side, x, y + side),
+    line(x, y + side, x, y),
+  ].join('')
 
 async function dropOnJob(page: Page, ...files: Parameters<ReturnType<Page['getByLabel']>['setInputFiles']>): Promise<void> {
   await page.getByRole('link', { name: 'Drop drawings' }).first().click()
@@ -136,4 +155,41 @@ test('a pasted file is taken like a dropped one, and the team that has it alread
   )
   await expect(figures(page)).toContainText('A212', { timeout: 20_000 })
   await expect(page.getByText('The team has this file already:')).toBeVisible()
+})
+
+test('“metal or void?” is answered on the picture: the chamber is void, the rest of 100 × 50 mm is metal, A 3000 mm²', async ({
+  page,
+}) => {
+  const buffer = Buffer.from(drawn(PARTITIONED.map(([x0, y0, x1, y1]) => line(x0, y0, x1, y1)).join('')))
+  await page.getByRole('link', { name: 'Drop drawings' }).first().click()
+  await page.getByLabel('DXF file').setInputFiles({ name: 'partition.dxf', mimeType: 'application/dxf', buffer })
+  await expect(page.getByText('1 to be solved')).toBeVisible()
+  const rings = page
+    .getByRole('application')
+    .locator('circle')
+    .filter({ has: page.locator('title') })
+  for (const [place, answer] of [
+    ['(15, 25)', 'It is void'],
+    ['(70, 30)', 'It is metal'],
+  ] as const) {
+    const box = await rings.filter({ hasText: place }).boundingBox()
+    if (!box) throw new Error(`no ring at ${place}`)
+    await page.mouse.click(box.x + box.width / 2, box.y + box.height / 2)
+    const asked = page.getByRole('region', { name: 'Board' }).getByRole('status')
+    await expect(asked).toContainText(`${place}: metal or void?`)
+    await asked.getByRole('button', { name: answer }).click()
+    await expect(asked).toHaveCount(0)
+  }
+  await expect(figures(page)).toContainText('3000')
+})
+
+test('a drawing of 100,000 lines shows what is done to it, is cancelled, and goes on when asked', async ({ page }) => {
+  const lines = Array.from({ length: 25_000 }, (_, i) => [(i % 250) * 30, Math.floor(i / 250) * 30] as const)
+  const buffer = Buffer.from(drawn(lines.map(([x, y]) => square(x, y, 20)).join('')))
+  await page.getByRole('link', { name: 'Drop drawings' }).first().click()
+  await page.getByLabel('DXF file').setInputFiles({ name: 'large.dxf', mimeType: 'application/dxf', buffer })
+  await page.getByRole('button', { name: 'Cancel' }).click({ timeout: 20_000 })
+  await expect(page.getByText('Cancelled. What you chose is kept.')).toBeVisible()
+  await page.getByRole('button', { name: 'Go on' }).click()
+  await expect(figures(page)).toContainText('10\u2009000\u2009000', { timeout: 60_000 })
 })
