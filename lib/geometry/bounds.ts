@@ -82,6 +82,13 @@ export function boundsOfEdges(edges: EdgeTable): Float64Array {
   return boxes
 }
 
+/** Bounds of every loop, four numbers each, from those of its edges; loop k is edges loopStart[k] … loopStart[k + 1] − 1. */
+export function boundsOfLoops(edgeBoxes: Float64Array, loopStart: ArrayLike<number>): Float64Array {
+  const bounds = new Float64Array(4 * (loopStart.length - 1))
+  for (let k = 0; k + 1 < loopStart.length; k++) bounds.set(unionOfBoxes(edgeBoxes, loopStart[k], loopStart[k + 1]), 4 * k)
+  return bounds
+}
+
 /** The box round boxes from … to − 1; [∞, ∞, −∞, −∞] for none. */
 export function unionOfBoxes(boxes: Float64Array, from: number, to: number): [number, number, number, number] {
   let minX = Number.POSITIVE_INFINITY
@@ -89,10 +96,10 @@ export function unionOfBoxes(boxes: Float64Array, from: number, to: number): [nu
   let maxX = Number.NEGATIVE_INFINITY
   let maxY = Number.NEGATIVE_INFINITY
   for (let j = 4 * from; j < 4 * to; j += 4) {
-    minX = Math.min(minX, boxes[j])
-    minY = Math.min(minY, boxes[j + 1])
-    maxX = Math.max(maxX, boxes[j + 2])
-    maxY = Math.max(maxY, boxes[j + 3])
+    if (boxes[j] < minX) minX = boxes[j]
+    if (boxes[j + 1] < minY) minY = boxes[j + 1]
+    if (boxes[j + 2] > maxX) maxX = boxes[j + 2]
+    if (boxes[j + 3] > maxY) maxY = boxes[j + 3]
   }
   return [minX, minY, maxX, maxY]
 }

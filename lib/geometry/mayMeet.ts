@@ -95,7 +95,7 @@ export function mayMeetAgain(edges: EdgeTable, i: number, j: number, x: number, 
     const [ux, uy] = away(edges, i, x, y)
     const k = edges.shape[j]
     const t = (-2 * ((x - s[k]) * ux + (y - s[k + 1]) * uy)) / (ux * ux + uy * uy)
-    return t * Math.hypot(ux, uy) > tolerance && t <= 1 && inSweep(s, k, x + t * ux, y + t * uy)
+    return t * Math.sqrt(ux * ux + uy * uy) > tolerance && t <= 1 && inSweep(s, k, x + t * ux, y + t * uy)
   }
   if (a !== ARC || b !== ARC) return true
   const k = edges.shape[i]

@@ -13,7 +13,7 @@ export function namesOf({ edges, loopStart, count }: Loops, touched: Uint8Array)
     let best = -1
     let score = -1
     for (let i = loopStart[k]; i < loopStart[k + 1]; i++) {
-      const chord = Math.hypot(e[4 * i + 2] - e[4 * i], e[4 * i + 3] - e[4 * i + 1])
+      const chord = Math.sqrt((e[4 * i + 2] - e[4 * i]) ** 2 + (e[4 * i + 3] - e[4 * i + 1]) ** 2)
       const own = touched[i] ? -1 : chord
       if (best >= 0 && own < score * (1 - 1e-9)) continue
       // off the middle where the edge meets others, for the middle is where circles are often tangent

@@ -22,9 +22,10 @@ function nearerEnd(edges: EdgeTable, i: number, x: number, y: number): Nearest {
 }
 
 function onLine(edges: EdgeTable, i: number, x: number, y: number): Nearest {
-  const [ax, ay, bx, by] = edges.ends.subarray(4 * i, 4 * i + 4)
-  const dx = bx - ax
-  const dy = by - ay
+  const ax = edges.ends[4 * i]
+  const ay = edges.ends[4 * i + 1]
+  const dx = edges.ends[4 * i + 2] - ax
+  const dy = edges.ends[4 * i + 3] - ay
   const t = ((x - ax) * dx + (y - ay) * dy) / (dx * dx + dy * dy)
   if (!(t > 0 && t < 1)) return nearerEnd(edges, i, x, y)
   const px = ax + t * dx

@@ -1,5 +1,5 @@
 import { facesOf } from './arrangement/faces'
-import { boundsOfEdges, unionOfBoxes } from './bounds'
+import { boundsOfEdges, boundsOfLoops } from './bounds'
 import { type Crossings, crossingsOf } from './crossings'
 import { loopArea } from './edgeArea'
 import type { EdgeTable } from './edges'
@@ -47,12 +47,8 @@ export function crossesItself(edges: EdgeTable, from: number, to: number, snap: 
 export function measured(edges: EdgeTable, loopStart: Uint32Array, boxes: Float64Array): Loops {
   const count = loopStart.length - 1
   const area = new Float64Array(count)
-  const bounds = new Float64Array(4 * count)
-  for (let k = 0; k < count; k++) {
-    area[k] = loopArea(edges, loopStart[k], loopStart[k + 1])
-    bounds.set(unionOfBoxes(boxes, loopStart[k], loopStart[k + 1]), 4 * k)
-  }
-  return { edges, loopStart, count, area, bounds }
+  for (let k = 0; k < count; k++) area[k] = loopArea(edges, loopStart[k], loopStart[k + 1])
+  return { edges, loopStart, count, area, bounds: boundsOfLoops(boxes, loopStart) }
 }
 
 /** Connected sets of loops that meet, each ascending. */
@@ -107,7 +103,8 @@ export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, u
   const probes = new Float64Array(2 * loops.count)
   const source = new Uint32Array(loops.count)
   for (let k = 0; k < loops.count; k++) {
-    probes.set(edges.ends.subarray(4 * loopStart[k], 4 * loopStart[k] + 2), 2 * k)
+    probes[2 * k] = edges.ends[4 * loopStart[k]]
+    probes[2 * k + 1] = edges.ends[4 * loopStart[k] + 1]
     source[k] = edges.source[loopStart[k]]
   }
   for (const k of clusters.flat()) {

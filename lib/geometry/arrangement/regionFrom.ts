@@ -1,5 +1,5 @@
 import Flatbush from 'flatbush'
-import { boundsOfEdges, unionOfBoxes } from '../bounds'
+import { boundsOfEdges, boundsOfLoops } from '../bounds'
 import { jetAt, lengthOf, newJet } from '../evaluate'
 import { loopTester } from '../nest'
 import type { Region } from '../region'
@@ -18,8 +18,7 @@ export function regionFrom({ edges, loopStart: start, area: signed }: Loops): Re
   }
   if (pieces > 0 && pieces < count) {
     const edgeBoxes = boundsOfEdges(edges)
-    const bounds = new Float64Array(4 * count)
-    for (let k = 0; k < count; k++) bounds.set(unionOfBoxes(edgeBoxes, start[k], start[k + 1]), 4 * k)
+    const bounds = boundsOfLoops(edgeBoxes, start)
     const area = Float64Array.from(signed, Math.abs)
     const inside = loopTester({ edges, loopStart, count, area, bounds }, edgeBoxes)
     const outer: number[] = []
@@ -51,9 +50,9 @@ function longestEdge(e: Float64Array, from: number, to: number): number {
   let best = from
   let longest = -1
   for (let i = from; i < to; i++) {
-    const d = Math.hypot(e[4 * i + 2] - e[4 * i], e[4 * i + 3] - e[4 * i + 1])
-    if (d > longest) {
-      longest = d
+    const square = (e[4 * i + 2] - e[4 * i]) ** 2 + (e[4 * i + 3] - e[4 * i + 1]) ** 2
+    if (square > longest) {
+      longest = square
       best = i
     }
   }
