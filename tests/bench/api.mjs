@@ -1,0 +1,59 @@
+// How fast the API reads a section through the session check, as a ratio to an empty route handler of the same build.
+//
+//   node tests/bench/api.mjs [--seconds N] [--rounds N]
+//
+// The empty handler is the one that Next itself puts behind OPTIONS of the same route: it walks the same way through the
+// server and does nothing. All are loaded in turn, so that a shared machine slows each alike.
+import { execFileSync } from 'node:child_process'
+import { readFileSync } from 'node:fs'
+import path from 'node:path'
+import { parseArgs } from 'node:util'
+import autocannon from 'autocannon'
+import { fixture, median, report, startProduct } from './product.mjs'
+
+const { values: options } = parseArgs({
+  options: { seconds: { type: 'string', default: '4' }, rounds: { type: 'string', default: '3' } },
+})
+const CONNECTIONS = 8
+
+/** Requests a second of one load; anything but the awaited status is no measurement. */
+async function rate(request, status) {
+  const result = await autocannon({ connections: CONNECTIONS, duration: Number(options.seconds), ...request })
+  const wrong = result.requests.total - (result.statusCodeStats?.[status]?.count ?? 0)
+  if (wrong > CONNECTIONS || result.errors > 0) throw new Error(`${request.url}: ${wrong} answers were not ${status}`)
+  return result.requests.average
+}
+
+function limit() {
+  const args = [path.join(import.meta.dirname, 'http-limit.mjs'), '--load', options.seconds, String(CONNECTIONS)]
+  return JSON.parse(execFileSync(process.execPath, args, { encoding: 'utf8' })).requestsPerSecond
+}
+
+const product = await startProduct()
+try {
+  const { id } = await product.addProfile('Angle, turned')
+  const { revision } = await product.save(id, 'p05.dxf', readFileSync(fixture('cases/p05.dxf')))
+  const url = `${product.url}/api/v1/revisions/${revision.id}/section`
+  const headers = { cookie: product.cookie }
+  const loads = {
+    empty: () => rate({ url, method: 'OPTIONS', headers }, '204'),
+    section: () => rate({ url, headers }, '200'),
+    limit,
+  }
+  const rates = Object.fromEntries(Object.keys(loads).map((name) => [name, []]))
+  await loads.section()
+  for (let round = 0; round < Number(options.rounds); round++) {
+    const names = Object.keys(loads)
+    for (let k = 0; k < names.length; k++) {
+      const name = names[(round + k) % names.length]
+      rates[name].push(await loads[name]())
+    }
+  }
+  const [empty, section, bare] = ['empty', 'section', 'limit'].map((name) => median(rates[name]))
+  console.log(`\nAPI, ${CONNECTIONS} connections, median of ${options.rounds} rounds of ${options.seconds} s`)
+  console.log(`empty route handler ${empty.toFixed(0)}/s, section ${section.toFixed(0)}/s, bare node:http ${bare.toFixed(0)}/s`)
+  report(section / empty >= 0.4, `section read at 0.4 of an empty route handler: ${(section / empty).toFixed(3)}`)
+  console.log(`         section read beside bare node:http: ${(section / bare).toFixed(3)}`)
+} finally {
+  await product.stop()
+}
