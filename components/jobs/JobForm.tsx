@@ -4,9 +4,13 @@ import { BothVersions } from '@/components/ui/BothVersions'
 import { Button } from '@/components/ui/Button'
 import { Field } from '@/components/ui/Field'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
+import { useCurrent } from '@/components/ui/useCurrent'
 import { useForm } from '@/components/ui/useForm'
-import { Job } from '@/lib/api/schemas/job'
+import type { Choice } from '@/lib/api/client'
+import type { Job } from '@/lib/api/schemas/job'
 import { changeJob, openJob } from './data'
+
+const choice: Choice<Job> = ({ Job }) => Job
 
 /** Opens a job or, with `job`, changes it. */
 export function JobForm({ job, onDone }: { job?: Job; onDone: (job: Job) => void }) {
@@ -15,7 +19,7 @@ export function JobForm({ job, onDone }: { job?: Job; onDone: (job: Job) => void
     title: job?.title ?? '',
     client: job?.client ?? '',
   })
-  const stale = problem?.code === 'stale' ? Job.safeParse(problem.current).data : undefined
+  const stale = useCurrent(problem, choice)
   const take = (theirs: Job, change: boolean) => {
     setSeen(theirs)
     setProblem(null)

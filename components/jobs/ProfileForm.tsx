@@ -6,11 +6,15 @@ import { BothVersions } from '@/components/ui/BothVersions'
 import { Button } from '@/components/ui/Button'
 import { Field, Select } from '@/components/ui/Field'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
+import { useCurrent } from '@/components/ui/useCurrent'
 import { useForm } from '@/components/ui/useForm'
 import { keys } from '@/lib/api/keys'
-import { Profile } from '@/lib/api/schemas/profile'
+import type { Choice } from '@/lib/api/client'
+import type { Profile } from '@/lib/api/schemas/profile'
 import { addProfile, changeProfile, useJobs } from './data'
 import { ALL_JOBS } from './lists'
+
+const choice: Choice<Profile> = ({ Profile }) => Profile
 
 const valuesOf = (profile: Profile) => ({
   jobId: profile.job.id,
@@ -37,7 +41,7 @@ export function ProfileForm({
   const { form, values, set, text, submit, busy, problem, setProblem } = useForm(
     profile ? valuesOf(profile) : { jobId, title: '', materialId: '', ownerId: '', drawingNumber: '' },
   )
-  const stale = problem?.code === 'stale' ? Profile.safeParse(problem.current).data : undefined
+  const stale = useCurrent(problem, choice)
   const take = (theirs: Profile, change: boolean) => {
     setSeen(theirs)
     setProblem(null)

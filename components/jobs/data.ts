@@ -1,31 +1,44 @@
 'use client'
 import { useEffect, useRef } from 'react'
 import useSWR from 'swr'
-import { z } from 'zod'
 import { getJson, refresh, sendJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-import { page } from '@/lib/api/schemas/common'
-import { Job, type JobChange, type JobFields } from '@/lib/api/schemas/job'
-import { OpenIntake } from '@/lib/api/schemas/revision'
-import { Profile, type ProfileChange, type ProfileFields } from '@/lib/api/schemas/profile'
+import type { JobChange, JobFields } from '@/lib/api/schemas/job'
+import type { OpenIntake } from '@/lib/api/schemas/revision'
+import type { ProfileChange, ProfileFields } from '@/lib/api/schemas/profile'
 
 export const JOBS = keys.jobs()
 export const PROFILES = keys.profiles()
-const Jobs = page(Job)
-const Profiles = page(Profile)
 
-export const useJobs = (path: string) => useSWR(path, getJson(Jobs), { keepPreviousData: true })
-export const useJob = (id: string) => useSWR(keys.job(id), getJson(Job))
-export const useProfiles = (path: string) => useSWR(path, getJson(Profiles), { keepPreviousData: true })
+export const useJobs = (path: string) =>
+  useSWR(
+    path,
+    getJson(({ Jobs }) => Jobs),
+    { keepPreviousData: true },
+  )
+export const useJob = (id: string) =>
+  useSWR(
+    keys.job(id),
+    getJson(({ Job }) => Job),
+  )
+export const useProfiles = (path: string) =>
+  useSWR(
+    path,
+    getJson(({ Profiles }) => Profiles),
+    { keepPreviousData: true },
+  )
 
-const Intakes = z.object({ items: z.array(OpenIntake) })
 const POLL = 2000
 
 /** One's own uploads that the server still computes; asked again while there are any, and the lists with the last one's end. */
 export function useIntakes(may: boolean): OpenIntake[] {
-  const { data } = useSWR(may ? keys.intakes : null, getJson(Intakes), {
-    refreshInterval: (latest) => (latest && latest.items.length > 0 ? POLL : 0),
-  })
+  const { data } = useSWR(
+    may ? keys.intakes : null,
+    getJson(({ Intakes }) => Intakes),
+    {
+      refreshInterval: (latest) => (latest && latest.items.length > 0 ? POLL : 0),
+    },
+  )
   const items = data?.items ?? []
   const before = useRef(0)
   useEffect(() => {
@@ -52,8 +65,18 @@ async function everything<T>(
     asking.set('cursor', next)
   }
 }
-export const allJobs = (query: URLSearchParams) => everything(JOBS, query, getJson(Jobs))
-export const allProfiles = (query: URLSearchParams) => everything(PROFILES, query, getJson(Profiles))
+export const allJobs = (query: URLSearchParams) =>
+  everything(
+    JOBS,
+    query,
+    getJson(({ Jobs }) => Jobs),
+  )
+export const allProfiles = (query: URLSearchParams) =>
+  everything(
+    PROFILES,
+    query,
+    getJson(({ Profiles }) => Profiles),
+  )
 
 interface Seen {
   id: string
@@ -66,14 +89,15 @@ async function then<T>(written: Promise<T>): Promise<T> {
   await lists()
   return row
 }
-export const openJob = (fields: JobFields) => then(sendJson('POST', JOBS, Job, { body: fields }))
+export const openJob = (fields: JobFields) => then(sendJson('POST', JOBS, ({ Job }) => Job, { body: fields }))
 export const changeJob = ({ id, version }: Seen, change: JobChange) =>
-  then(sendJson('PATCH', keys.job(id), Job, { body: change, version }))
-export const binJob = ({ id, version }: Seen) => then(sendJson('DELETE', keys.job(id), Job, { version }))
-export const restoreJob = (id: string) => then(sendJson('POST', keys.restoreJob(id), Job))
+  then(sendJson('PATCH', keys.job(id), ({ Job }) => Job, { body: change, version }))
+export const binJob = ({ id, version }: Seen) => then(sendJson('DELETE', keys.job(id), ({ Job }) => Job, { version }))
+export const restoreJob = (id: string) => then(sendJson('POST', keys.restoreJob(id), ({ Job }) => Job))
 
-export const addProfile = (fields: ProfileFields) => then(sendJson('POST', PROFILES, Profile, { body: fields }))
+export const addProfile = (fields: ProfileFields) => then(sendJson('POST', PROFILES, ({ Profile }) => Profile, { body: fields }))
 export const changeProfile = ({ id, version }: Seen, change: ProfileChange) =>
-  then(sendJson('PATCH', keys.profile(id), Profile, { body: change, version }))
-export const binProfile = ({ id, version }: Seen) => then(sendJson('DELETE', keys.profile(id), Profile, { version }))
-export const restoreProfile = (id: string) => then(sendJson('POST', keys.restoreProfile(id), Profile))
+  then(sendJson('PATCH', keys.profile(id), ({ Profile }) => Profile, { body: change, version }))
+export const binProfile = ({ id, version }: Seen) =>
+  then(sendJson('DELETE', keys.profile(id), ({ Profile }) => Profile, { version }))
+export const restoreProfile = (id: string) => then(sendJson('POST', keys.restoreProfile(id), ({ Profile }) => Profile))

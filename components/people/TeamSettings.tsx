@@ -7,9 +7,13 @@ import { Check, Choices } from '@/components/ui/Check'
 import { Field, Select } from '@/components/ui/Field'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import { toast } from '@/components/ui/toastStore'
+import { useCurrent } from '@/components/ui/useCurrent'
 import { useForm } from '@/components/ui/useForm'
-import { Team } from '@/lib/api/schemas/people'
+import type { Choice } from '@/lib/api/client'
+import type { Team } from '@/lib/api/schemas/people'
 import { changeTeam } from './data'
+
+const choice: Choice<Team> = ({ Team }) => Team
 
 const UNITS = [
   { value: 'mm', label: 'mm, mm², mm⁴' },
@@ -52,7 +56,7 @@ export function TeamSettings() {
     symbols: team.settings.symbols,
     axes: team.settings.axes,
   })
-  const current = problem?.code === 'stale' ? Team.safeParse(problem.current).data : undefined
+  const current = useCurrent(problem, choice)
   const save = submit(async ({ name, digits, ...settings }) => {
     setSeen(await changeTeam(seen, { name, settings: { ...settings, digits: Number(digits) } }))
     router.refresh()

@@ -1,19 +1,15 @@
-import { z } from 'zod'
 import { changeMe } from '@/components/people/data'
-import { getJson, request } from '@/lib/api/client'
+import { getJson, parsed } from '@/lib/api/client'
 import { ERRORS, type ErrorCode } from '@/lib/api/errors'
 import { keys } from '@/lib/api/keys'
-import { Me } from '@/lib/api/schemas/people'
-
-const Csrf = z.object({ csrfToken: z.string() })
-const Answer = z.object({ url: z.string() })
 
 /** next-auth's own routes, asked directly: its client would cost every page 11 kB. */
 async function ask(action: 'callback/credentials' | 'signout', fields: Record<string, string> = {}): Promise<URL> {
-  const { csrfToken } = Csrf.parse(await (await request('/api/auth/csrf')).json())
+  const { csrfToken } = await getJson(({ Csrf }) => Csrf)('/api/auth/csrf')
   const body = new URLSearchParams({ ...fields, csrfToken, json: 'true', callbackUrl: window.location.origin })
   const response = await fetch(`/api/auth/${action}`, { method: 'POST', body })
-  return new URL(Answer.parse(await response.json()).url, window.location.origin)
+  const { url } = await parsed(({ SignedIn }) => SignedIn, await response.json())
+  return new URL(url, window.location.origin)
 }
 
 const isCode = (text: string): text is ErrorCode => text in ERRORS
@@ -32,6 +28,6 @@ export async function signOut(): Promise<void> {
 /** Dates are shown in the zone stored with the person: the browser's, at the first sign-in. */
 export async function adoptZone(): Promise<void> {
   const zone = Intl.DateTimeFormat().resolvedOptions().timeZone
-  const me = await getJson(Me)(keys.me)
+  const me = await getJson(({ Me }) => Me)(keys.me)
   if (me.zone === 'UTC' && zone && zone !== 'UTC') await changeMe({ zone })
 }

@@ -2,25 +2,33 @@
 import { useMemo } from 'react'
 import useSWR from 'swr'
 import useSWRImmutable from 'swr/immutable'
-import { z } from 'zod'
 import { getBytes, getJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-import { page } from '@/lib/api/schemas/common'
-import { Event } from '@/lib/api/schemas/event'
-import { Profile } from '@/lib/api/schemas/profile'
-import { Revision, RevisionSummary } from '@/lib/api/schemas/revision'
 import { unpackRegion } from '@/lib/geometry/pack'
 import type { Region } from '@/lib/geometry/region'
 
-const Revisions = z.object({ items: z.array(RevisionSummary) })
-const Events = page(Event)
-
 export const eventsOf = (profileId: string) => keys.events({ subjectId: profileId, limit: 50 })
 
-export const useProfile = (id: string) => useSWR(keys.profile(id), getJson(Profile))
-export const useRevisions = (profileId: string) => useSWR(keys.revisions(profileId), getJson(Revisions))
-export const useRevision = (id: string | null) => useSWR(id && keys.revision(id), getJson(Revision))
-export const useEvents = (profileId: string) => useSWR(eventsOf(profileId), getJson(Events))
+export const useProfile = (id: string) =>
+  useSWR(
+    keys.profile(id),
+    getJson(({ Profile }) => Profile),
+  )
+export const useRevisions = (profileId: string) =>
+  useSWR(
+    keys.revisions(profileId),
+    getJson(({ Revisions }) => Revisions),
+  )
+export const useRevision = (id: string | null) =>
+  useSWR(
+    id && keys.revision(id),
+    getJson(({ Revision }) => Revision),
+  )
+export const useEvents = (profileId: string) =>
+  useSWR(
+    eventsOf(profileId),
+    getJson(({ Events }) => Events),
+  )
 
 const getRegion = async (path: string): Promise<Region> => unpackRegion(new Uint8Array(await getBytes(path)))
 

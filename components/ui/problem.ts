@@ -1,15 +1,4 @@
-import { z } from 'zod'
-import { Finding } from '@/lib/api/schemas/section'
-
-const Shape = z.object({
-  code: z.string().catch('internal'),
-  title: z.string().catch('Something failed.'),
-  detail: z.string().optional().catch(undefined),
-  requestId: z.string().optional().catch(undefined),
-  issues: z.array(z.object({ path: z.string(), message: z.string() })).catch([]),
-  findings: z.array(Finding).catch([]),
-  current: z.unknown(),
-})
+import { isProblem, type ProblemError } from '@/lib/api/client'
 
 /** What went wrong, as a person reads it. */
 export interface Problem {
@@ -18,15 +7,14 @@ export interface Problem {
   requestId?: string
   /** what is wrong with each field of the form, by its name */
   fields: Record<string, string>
-  findings: z.infer<typeof Finding>[]
+  findings: ProblemError['problem']['findings']
   /** the row as it stands now, where somebody changed it meanwhile */
   current: unknown
 }
 
 /** Any caught error as a problem; a failed connection says so in words. */
 export function problemOf(error: unknown): Problem {
-  const document = typeof error === 'object' && error !== null && 'problem' in error ? error.problem : null
-  if (document === null) {
+  if (!isProblem(error)) {
     const offline = error instanceof TypeError
     const sentence = offline
       ? 'The server did not answer. What you typed is kept; try again when the connection is back.'
@@ -35,7 +23,7 @@ export function problemOf(error: unknown): Problem {
         : 'Something failed.'
     return { code: offline ? 'offline' : 'internal', sentence, fields: {}, findings: [], current: undefined }
   }
-  const { code, title, detail, requestId, issues, findings, current } = Shape.parse(document)
+  const { code, title, detail, requestId, issues, findings, current } = error.problem
   const fields: Record<string, string> = {}
   for (const { path, message } of issues) fields[path] ??= message
   return { code, sentence: detail ?? title, requestId, fields, findings, current }

@@ -1,14 +1,11 @@
-import { z } from 'zod'
 import { newIdempotencyKey, sendJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-import { Revision, type RevisionFields } from '@/lib/api/schemas/revision'
+import type { RevisionFields } from '@/lib/api/schemas/revision'
 import type { Recipe } from '@/lib/geometry/recipe'
 import { FIGURES } from '@/lib/section/figures'
 import type { Section } from '@/lib/section/types'
 import { type Choices, type FlowState, isConfirmed } from './flow/flow'
 import { compare } from './flow/size'
-
-const Saved = z.object({ revision: Revision })
 
 /** The figures as the browser showed them: the server refuses to save where its own differ. */
 export const shownFigures = (section: Section): Record<string, number | null> =>
@@ -46,7 +43,11 @@ export function uploader() {
       body.set('fileSha256', sha256)
       body.set('fileName', file.name)
     } else body.set('file', file)
-    const { revision } = await sendJson('POST', keys.revisions(profileId), Saved, { body, idempotencyKey: last.key, signal })
+    const { revision } = await sendJson('POST', keys.revisions(profileId), ({ Saved }) => Saved, {
+      body,
+      idempotencyKey: last.key,
+      signal,
+    })
     return revision
   }
 }

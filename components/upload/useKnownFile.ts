@@ -1,10 +1,9 @@
 'use client'
 import useSWR from 'swr'
-import { z } from 'zod'
+import type { z } from 'zod'
+import type { Uses } from '@/lib/api/answers'
 import { getJson } from '@/lib/api/client'
 import { keys } from '@/lib/api/keys'
-
-const Uses = z.object({ uses: z.array(z.object({ profileId: z.string(), number: z.string(), letter: z.string() })) })
 
 async function hashOf(file: File): Promise<string> {
   const digest = await crypto.subtle.digest('SHA-256', await file.arrayBuffer())
@@ -15,7 +14,7 @@ async function hashOf(file: File): Promise<string> {
 export function useKnownFile(file: File): z.infer<typeof Uses>['uses'] {
   const able = typeof crypto !== 'undefined' && 'subtle' in crypto
   const { data } = useSWR(able ? ['known file', file.name, file.size, file.lastModified] : null, async () =>
-    getJson(Uses)(keys.files(await hashOf(file))),
+    getJson((answers) => answers.Uses)(keys.files(await hashOf(file))),
   )
   return data?.uses ?? []
 }

@@ -1,26 +1,40 @@
 import { mutate } from 'swr'
 import type { z } from 'zod'
+import type * as Answers from './answers'
 import { ERRORS } from './errors'
-import { Problem } from './schemas/common'
+
+/** Which of the answers is awaited. */
+export type Choice<T> = (answers: typeof Answers) => z.ZodType<T>
+
+/** An answer is parsed, not cast. The schemas come with the first answer, so that no page's first load carries them. */
+export const parsed = async <T>(choice: Choice<T>, answer: unknown): Promise<T> => choice(await import('./answers')).parse(answer)
+
+type Refusal = z.infer<typeof Answers.Refusal>
 
 /** A refusal of the server; `problem` is its problem document, by which it is told from other errors. */
 export class ProblemError extends Error {
-  constructor(readonly problem: Problem) {
+  constructor(readonly problem: Refusal) {
     super(problem.detail ?? problem.title)
   }
 }
 
 async function refusalOf(response: Response): Promise<ProblemError> {
-  const parsed = Problem.safeParse(await response.json().catch(() => null))
-  if (parsed.success) return new ProblemError(parsed.data)
-  return new ProblemError({
+  const unread: Refusal = {
     type: 'about:blank',
     title: ERRORS.internal.title,
     status: response.status,
     code: 'internal',
     requestId: response.headers.get('x-request-id') ?? '',
-  })
+    issues: [],
+    findings: [],
+    current: undefined,
+  }
+  const document: unknown = await response.json().catch(() => null)
+  return new ProblemError(await parsed(({ Refusal }) => Refusal, document).catch(() => unread))
 }
+
+/** Told by its `problem`: a class is another one after a hot reload. */
+export const isProblem = (error: unknown): error is ProblemError => error instanceof Error && 'problem' in error
 
 /** `fetch` that throws a ProblemError for a refusal and fetch's own TypeError where the server does not answer. */
 export async function request(path: string, init?: RequestInit): Promise<Response> {
@@ -29,11 +43,11 @@ export async function request(path: string, init?: RequestInit): Promise<Respons
   return response
 }
 
-/** A fetcher for SWR: the answer is parsed, not cast. The key is the API path. */
+/** A fetcher for SWR; the key is the API path. */
 export const getJson =
-  <T>(schema: z.ZodType<T>) =>
+  <T>(choice: Choice<T>) =>
   async (path: string): Promise<T> =>
-    schema.parse(await (await request(path)).json())
+    parsed(choice, await (await request(path)).json())
 
 export const getBytes = async (path: string): Promise<ArrayBuffer> => (await request(path)).arrayBuffer()
 
@@ -51,7 +65,7 @@ interface Options {
 export async function sendJson<T>(
   method: 'POST' | 'PATCH' | 'DELETE',
   path: string,
-  schema: z.ZodType<T>,
+  choice: Choice<T>,
   { body, version, idempotencyKey, signal }: Options = {},
 ): Promise<T> {
   const headers = new Headers()
@@ -61,7 +75,7 @@ export async function sendJson<T>(
   if (idempotencyKey) headers.set('idempotency-key', idempotencyKey)
   const sent = multipart ? body : body === undefined ? undefined : JSON.stringify(body)
   const response = await request(path, { method, headers, body: sent, signal })
-  return schema.parse(response.status === 204 ? undefined : await response.json())
+  return parsed(choice, response.status === 204 ? undefined : await response.json())
 }
 
 /** Reads again everything whose key begins so, after a change. */
