@@ -3,6 +3,7 @@ import { spawnSync } from 'node:child_process'
 import { createHash } from 'node:crypto'
 import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
+import { pack } from './packed.mjs'
 
 const root = path.resolve(import.meta.dirname, '..')
 const at = (...parts) => path.join(root, ...parts)
@@ -118,7 +119,7 @@ function findBrowser() {
   debian('The browser tests need Chromium.', ['chromium', 'fonts-liberation'])
 }
 
-const SOURCES = ['app', 'components', 'db', 'lib', 'public', 'scripts/build-worker.mjs']
+const SOURCES = ['app', 'components', 'db', 'lib', 'public', 'scripts/build-worker.mjs', 'scripts/packed.mjs']
 const ROOT_SOURCES = /^(package(-lock)?\.json|tsconfig\.json|(next|postcss|tailwind)\.config\.\w+|proxy\.ts|instrumentation\.ts)$/
 
 function filesUnder(place) {
@@ -154,6 +155,7 @@ async function build() {
   ) {
     throw new Refusal('The pages could not be built; the lines above say why.')
   }
+  pack(at(dist))
   writeFileSync(at(dist, '.setup'), stamp)
 }
 

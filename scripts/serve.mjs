@@ -2,6 +2,7 @@
 import { existsSync } from 'node:fs'
 import http from 'node:http'
 import path from 'node:path'
+import { packedFiles } from './packed.mjs'
 
 const HELP = `usage: npm start            (or: node scripts/serve.mjs, after node scripts/bootstrap.mjs build)
 
@@ -43,9 +44,10 @@ function setAddress(request) {
 }
 
 let handle = (_request, response) => response.writeHead(503, { 'retry-after': '1' }).end()
+const sendPacked = packedFiles(path.join(root, dist))
 const server = http.createServer((request, response) => {
   setAddress(request)
-  handle(request, response)
+  if (!sendPacked(request, response)) handle(request, response)
 })
 server.on('error', (error) => {
   if (error.code === 'EADDRINUSE')
