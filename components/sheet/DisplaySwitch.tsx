@@ -34,7 +34,6 @@ export function DisplaySwitch({ display, onChange }: { display: TeamSettings; on
     ...AXES.map(([axes, label]) => ({ label, checked: display.axes === axes, onChoose: () => onChange({ ...display, axes }) })),
   ]
   const words = `${display.lengthUnit} · ${display.digits} digits · ${display.symbols === 'en' ? 'EN' : 'US'}`
-  return (
-    <Menu label={<span className="text-small text-soft">{words} ▾</span>} name="Units, symbols and axis names" items={items} />
-  )
+  const label = <span className="text-small text-soft">{words} ▾</span>
+  return <Menu label={label} name={`Units, symbols and axis names: ${words}`} items={items} />
 }
