@@ -54,6 +54,12 @@ test('pointing at a modulus draws its fibre with the distance, and leaving takes
 
 test('by keys alone the board moves, zooms, fits and measures', async ({ page }) => {
   await board(page).focus()
+  // the picture comes with the page; its keys work once the page is alive
+  await expect(async () => {
+    await page.keyboard.press('m')
+    await expect(page.getByRole('button', { name: 'Measure' })).toHaveAttribute('aria-pressed', 'true', { timeout: 500 })
+  }).toPass()
+  await page.keyboard.press('Escape')
   const metal = board(page).locator('clipPath path')
   const fitted = await metal.getAttribute('transform')
   await page.keyboard.press('ArrowRight')
