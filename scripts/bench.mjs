@@ -9,15 +9,16 @@ import { ensureBuilt } from './build-worker.mjs'
 const USAGE = `usage: npm run bench -- [options]
 
 Runs the product, the peer (ezdxf and Shapely) and the limit (C++) in turn on the drawings of
-fixtures/cases and on generated ones, checks every result and prints medians and ratios.
+fixtures/cases and on generated ones, checks every result and prints medians and ratios; then what
+people wait for, on the built server: reads of the API, saving, dropping, board, pages.
 
+  --parts LIST     engine,api,board,pages (default all)
   --quick          3 rounds, four drawings of fixtures/cases, 1k and 10k entities
   --runs N         rounds (default 5)
   --sizes LIST     entities of the generated drawings (default 1k,10k,100k,1M)
   --kinds LIST     lines,lwpolyline (default both)
   --no-cases       generated drawings only
   --no-peer        product and limit only
-  --http           the built server's rate of JSON reads and the time of a save, instead of drawings
   --help           print this`
 
 const { values: options } = parseArgs({
@@ -28,7 +29,7 @@ const { values: options } = parseArgs({
     kinds: { type: 'string', default: 'lines,lwpolyline' },
     'no-cases': { type: 'boolean', default: false },
     'no-peer': { type: 'boolean', default: false },
-    http: { type: 'boolean', default: false },
+    parts: { type: 'string', default: 'engine,api,board,pages' },
     help: { type: 'boolean', default: false },
   },
 })
@@ -37,15 +38,10 @@ if (options.help) {
   process.exit(0)
 }
 
-if (options.http) {
-  const { benchHttp } = await import('./bench-http.mjs')
-  await benchHttp({ seconds: options.quick ? 2 : 5, connections: 8, rounds: Number(options.runs ?? 3) })
-  process.exit(0)
-}
-
 const root = path.resolve(import.meta.dirname, '..')
 const bench = path.join(root, 'tests', 'bench')
 const work = path.join(tmpdir(), 'sectionwright-bench')
+const parts = options.parts.split(',')
 const runs = Number(options.runs ?? (options.quick ? 3 : 5))
 const sizes = (options.sizes ?? (options.quick ? '1k,10k' : '1k,10k,100k,1M')).split(',')
 const PYTHON = existsSync('/usr/bin/python3') ? '/usr/bin/python3' : 'python3'
@@ -258,17 +254,31 @@ function judge(rows) {
   return wrong.length === 0
 }
 
-mkdirSync(work, { recursive: true })
-await ensureBuilt(['section.bench'])
-const available = tools()
-const drawings = [
-  ...(options['no-cases'] ? [] : cases()),
-  ...(available.python ? sizes.flatMap((size) => options.kinds.split(',').map((kind) => generated(kind, size))) : []),
-]
-const rows = []
-for (const drawing of drawings) {
-  process.stderr.write(`${drawing.name} (${(statSync(drawing.file).size / 1024 ** 2).toPrecision(3)} MiB)\n`)
-  rows.push(measure(drawing, available))
+async function benchEngine() {
+  mkdirSync(work, { recursive: true })
+  await ensureBuilt(['section.bench'])
+  const available = tools()
+  const drawings = [
+    ...(options['no-cases'] ? [] : cases()),
+    ...(available.python ? sizes.flatMap((size) => options.kinds.split(',').map((kind) => generated(kind, size))) : []),
+  ]
+  const rows = []
+  for (const drawing of drawings) {
+    process.stderr.write(`${drawing.name} (${(statSync(drawing.file).size / 1024 ** 2).toPrecision(3)} MiB)\n`)
+    rows.push(measure(drawing, available))
+  }
+  print(rows)
+  return judge(rows)
 }
-print(rows)
-process.exitCode = judge(rows) ? 0 : 1
+
+/** What is measured on the built server, each by a script of its own. */
+const SERVER_PARTS = { api: ['--rounds', String(runs)], board: [], pages: ['--runs', String(runs)] }
+
+let right = true
+if (parts.includes('engine')) right = await benchEngine()
+for (const [name, args] of Object.entries(SERVER_PARTS)) {
+  if (!parts.includes(name)) continue
+  const { status } = spawnSync(process.execPath, [path.join(bench, `${name}.mjs`), ...args], { cwd: root, stdio: 'inherit' })
+  right &&= status === 0
+}
+process.exitCode = right ? 0 : 1

@@ -16,17 +16,28 @@ const { values: options } = parseArgs({
 })
 const CONNECTIONS = 8
 
-/** Requests a second of one load; anything but the awaited status is no measurement. */
+/** CPU ms that a process has used so far; NaN where there is no /proc. */
+function cpuOf(pid) {
+  try {
+    const fields = readFileSync(`/proc/${pid}/stat`, 'utf8').split(') ')[1].split(' ')
+    return 10 * (Number(fields[11]) + Number(fields[12]))
+  } catch {
+    return Number.NaN
+  }
+}
+
+/** Requests a second of one load, and the server's CPU ms for each; anything but the awaited status is no measurement. */
 async function rate(request, status) {
+  const before = cpuOf(product.pid)
   const result = await autocannon({ connections: CONNECTIONS, duration: Number(options.seconds), ...request })
   const wrong = result.requests.total - (result.statusCodeStats?.[status]?.count ?? 0)
   if (wrong > CONNECTIONS || result.errors > 0) throw new Error(`${request.url}: ${wrong} answers were not ${status}`)
-  return result.requests.average
+  return { perSecond: result.requests.average, cpu: (cpuOf(product.pid) - before) / result.requests.total }
 }
 
 function limit() {
   const args = [path.join(import.meta.dirname, 'http-limit.mjs'), '--load', options.seconds, String(CONNECTIONS)]
-  return JSON.parse(execFileSync(process.execPath, args, { encoding: 'utf8' })).requestsPerSecond
+  return { perSecond: JSON.parse(execFileSync(process.execPath, args, { encoding: 'utf8' })).requestsPerSecond }
 }
 
 const product = await startProduct()
@@ -49,10 +60,16 @@ try {
       rates[name].push(await loads[name]())
     }
   }
-  const [empty, section, bare] = ['empty', 'section', 'limit'].map((name) => median(rates[name]))
+  const [empty, section, bare] = ['empty', 'section', 'limit'].map((name) =>
+    median(rates[name].map(({ perSecond }) => perSecond)),
+  )
+  const [emptyCpu, sectionCpu] = ['empty', 'section'].map((name) => median(rates[name].map(({ cpu }) => cpu)))
   console.log(`\nAPI, ${CONNECTIONS} connections, median of ${options.rounds} rounds of ${options.seconds} s`)
   console.log(`empty route handler ${empty.toFixed(0)}/s, section ${section.toFixed(0)}/s, bare node:http ${bare.toFixed(0)}/s`)
   report(section / empty >= 0.4, `section read at 0.4 of an empty route handler: ${(section / empty).toFixed(3)}`)
+  console.log(
+    `         by the server's CPU time, ${emptyCpu.toFixed(2)} and ${sectionCpu.toFixed(2)} ms: ${(emptyCpu / sectionCpu).toFixed(3)}`,
+  )
   console.log(`         section read beside bare node:http: ${(section / bare).toFixed(3)}`)
 } finally {
   await product.stop()

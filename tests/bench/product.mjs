@@ -2,7 +2,7 @@
 import { spawn } from 'node:child_process'
 import { existsSync, mkdtempSync, rmSync } from 'node:fs'
 import { createServer } from 'node:net'
-import { tmpdir } from 'node:os'
+import { loadavg, tmpdir } from 'node:os'
 import path from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { chromium } from '@playwright/test'
@@ -30,6 +30,7 @@ export const freePort = () =>
   })
 
 export async function startProduct() {
+  console.log(`\nload of this machine ${loadavg()[0].toFixed(1)}; times of the wall clock count only where it is quiet`)
   const dataDir = mkdtempSync(path.join(tmpdir(), 'sectionwright-bench-server-'))
   const port = await freePort()
   const url = `http://localhost:${port}`
@@ -81,7 +82,7 @@ export async function startProduct() {
     if (answer.status !== 201) throw new Error(`saving ${name}: ${answer.status} ${text.slice(0, 500)}`)
     return { revision: JSON.parse(text).revision, ms }
   }
-  return { url, cookie, stop, addProfile, save }
+  return { url, pid: server.pid, cookie, stop, addProfile, save }
 }
 
 const BROWSERS = [process.env.CHROMIUM ?? '', '/usr/bin/chromium', '/usr/bin/chromium-browser', '/usr/bin/google-chrome']
