@@ -27,7 +27,7 @@ export function joinGaps(ends: Ends, tolerance: number, isLong: (edge: number) =
   const joins: Joins = { pairs: [], merges: [], ambiguous: [] }
   const dangling: number[] = []
   for (let end = 0; end < ends.count; end++) if (ends.degree[ends.vertex[end]] === 1) dangling.push(end)
-  if (dangling.length === 0) return joins
+  if (dangling.length === 0 || !(tolerance > 0)) return joins
   const x = (end: number) => ends.x[ends.vertex[end]]
   const y = (end: number) => ends.y[ends.vertex[end]]
   const near = neighbours(dangling, x, y, tolerance, isLong)

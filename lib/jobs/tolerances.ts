@@ -10,8 +10,9 @@ const DUPLICATE = 1e-6
 /** The four tolerances in drawing units for the edges taken. */
 export function tolerancesOf({ edges, lastDigit }: Drawing, take: Uint32Array, recipe: Recipe): Tolerances {
   const size = sizeOf(edges, take)
-  const chaining = recipe.tolerance / mmPerUnit(recipe)
   const snap = SNAP * size
+  // ends within rounding are one whatever the recipe says
+  const chaining = Math.max(snap, recipe.tolerance / mmPerUnit(recipe))
   return { lastDigit, chaining, duplicate: Math.max(snap, Math.min(chaining, Math.max(2 * lastDigit, DUPLICATE * size))), snap }
 }
 

@@ -79,6 +79,14 @@ describe('drawing and recipe to section', () => {
     expect(turned.outlines).toEqual(upright.outlines)
   })
 
+  it.each([0, 1e-15])('a tolerance of %d mm joins what rounding joins, and leaves a gap of 0.004 mm open', (tolerance) => {
+    const gapped = entities(line(0, 0, 60, 0) + line(60, 0, 60, 40) + line(60, 40, 0, 40) + line(0, 40, 0, 0.004))
+    const run = (bytes: Uint8Array) =>
+      sectionTask(readTask(bytes), source('p01.dxf'), { ...DEFAULT_RECIPE, tolerance }, {}).answer
+    expect(run(entities(rectangle(0, 0, 60, 40))).section?.area).toBe(2400)
+    expect(run(gapped).findings.map(({ code }) => code)).toContain('chain-open')
+  })
+
   it('lists 2,000 of 2,100 outlines and counts them all', () => {
     const drawing = readTask(entities(circles(2100)))
     const { answer } = sectionTask(drawing, source('p01.dxf'), DEFAULT_RECIPE, {})
@@ -113,7 +121,12 @@ describe('drawing and recipe to section', () => {
         {},
       ).answer
       const gap = findings.find(({ code }) => code === 'gap-closed')
-      return { params: gap?.params, message: gap?.message, dIx: 0.125 * (0.25 - (section?.centroid.y ?? 0)) ** 2, dIy: 0.125 * (59.75 - 30) ** 2 }
+      return {
+        params: gap?.params,
+        message: gap?.message,
+        dIx: 0.125 * (0.25 - (section?.centroid.y ?? 0)) ** 2,
+        dIy: 0.125 * (59.75 - 30) ** 2,
+      }
     }
     const outer = gapIn(cutCorner(0, 0, 60, 40))
     expect(outer.params?.area).toBeWithin(-0.125, { relative: 1e-12 })
