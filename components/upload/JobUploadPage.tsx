@@ -53,6 +53,7 @@ export function JobUploadPage({ job }: { job: Job }) {
               {opened.has(i) && (
                 <UploadFlow
                   file={file}
+                  active={i === at}
                   first={{ kind: 'new', jobId: job.id, title: titleOf(file.name), materialId: null }}
                   materials={materials}
                   onOther={() => setFiles([])}

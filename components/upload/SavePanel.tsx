@@ -5,7 +5,7 @@ import { Notice } from '@/components/ui/Notice'
 import { ProblemNotice } from '@/components/ui/ProblemNotice'
 import type { Problem } from '@/components/ui/problem'
 import type { Material } from '@/lib/api/schemas/people'
-import { type Choices, type FlowAction, type FlowState, isConfirmed } from './flow/flow'
+import type { Choices, FlowAction, FlowState } from './flow/flow'
 import type { Target } from './target'
 
 /** The end of the flow: what goes beside the figures, what is still missing, and the one main action. */
@@ -14,7 +14,7 @@ export function SavePanel({
   choices,
   target,
   materials,
-  ready,
+  missing,
   saving,
   problem,
   dispatch,
@@ -26,8 +26,8 @@ export function SavePanel({
   choices: Choices
   target: Target
   materials: readonly Material[]
-  /** the figures in view belong to the recipe as it stands */
-  ready: boolean
+  /** what must come first, in words */
+  missing: readonly string[]
   saving: boolean
   problem: Problem | null
   dispatch: (action: FlowAction) => void
@@ -35,13 +35,6 @@ export function SavePanel({
   onSave: () => void
   onCancel: () => void
 }) {
-  const missing = [
-    !ready && 'the drawing gives a section',
-    !isConfirmed(choices) &&
-      (choices.claim === null ? 'a known dimension is confirmed' : choices.finished === null && 'it is said what is drawn'),
-    ready && choices.claim !== null && choices.finished !== null && !isConfirmed(choices) && 'the known dimension agrees',
-    target.kind === 'new' && target.title.trim() === '' && 'the profile has a title',
-  ].filter((word): word is string => typeof word === 'string')
   return (
     <section aria-label="Save" className="grid gap-3 border-t border-hair pt-3">
       {target.kind === 'new' && (
@@ -98,9 +91,12 @@ export function SavePanel({
           <Button look="main" shortcut="Control+S" title="Save the revision" disabled={missing.length > 0} onClick={onSave}>
             Save revision
           </Button>
-          {missing.length > 0 && <p className="text-small text-soft">Once {missing.join(' and ')}.</p>}
+          {missing.length > 0 && <p className="text-small text-soft">Once {listed(missing)}.</p>}
         </div>
       )}
     </section>
   )
 }
+
+const listed = (words: readonly string[]) =>
+  words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words[words.length - 1]}`

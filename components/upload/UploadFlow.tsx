@@ -18,6 +18,7 @@ import { mmPerUnit, type XY } from '@/lib/geometry/recipe'
 import { Asked } from './Asked'
 import { FileLine } from './FileLine'
 import { detailAt, detailsOf, partOf } from './flow/groups'
+import { missingOf } from './flow/missing'
 import { LiveFigures } from './LiveFigures'
 import { Panels } from './Panels'
 import { Progress } from './Progress'
@@ -36,6 +37,7 @@ export function UploadFlow({
   materials,
   onOther,
   onSaved,
+  active = true,
 }: {
   file: File
   first: Target
@@ -43,6 +45,8 @@ export function UploadFlow({
   /** another file instead */
   onOther: () => void
   onSaved?: () => void
+  /** it is the one in view: keys are meant for it */
+  active?: boolean
 }) {
   const upload = useUpload(file, first, materials)
   const { target, setTarget, state, choices, dispatch, preview, ready, saving, problem, saved } = upload
@@ -57,14 +61,15 @@ export function UploadFlow({
   const model = useMemo(() => result && previewModel(result), [result])
   const details = useMemo(() => (result ? detailsOf(result, choices.frames) : []), [result, choices.frames])
 
+  const missing = missingOf(choices, target, ready)
   const save = useCallback(async () => {
-    await upload.save()
-    onSaved?.()
+    if (await upload.save()) onSaved?.()
   }, [upload.save, onSaved])
   useFlowKeys({
     undo: useCallback(() => dispatch({ type: 'undo' }), [dispatch]),
     redo: useCallback(() => dispatch({ type: 'redo' }), [dispatch]),
-    save: ready && !saving ? save : null,
+    save: missing.length === 0 && !saving && !saved ? save : null,
+    active,
   })
 
   useLeaving(state.history.past.length > 0 && !saved)
@@ -151,7 +156,7 @@ export function UploadFlow({
           <Saved revision={saved.revision} number={saved.number} further={left} onFurther={further} />
         ) : (
           <SavePanel
-            {...{ state, choices, target, materials, ready, saving, problem, dispatch }}
+            {...{ state, choices, target, materials, missing, saving, problem, dispatch }}
             onTitle={(title) => target.kind === 'new' && setTarget({ ...target, title })}
             onSave={save}
             onCancel={upload.cancelSave}

@@ -41,9 +41,10 @@ export function useUpload(file: File, first: Target, materials: readonly Materia
   const [saved, setSaved] = useState<Kept | null>(null)
   const ready = stage === null && result?.answer.section !== null && result !== null
 
-  const save = useCallback(async () => {
+  /** true where it was saved */
+  const save = useCallback(async (): Promise<boolean> => {
     const section = result?.answer.section
-    if (!section) return
+    if (!section) return false
     const controller = new AbortController()
     running.current = controller
     setSaving(true)
@@ -63,8 +64,10 @@ export function useUpload(file: File, first: Target, materials: readonly Materia
       )
       setSaved({ revision, number: profile.number })
       await refresh(keys.profiles())
+      return true
     } catch (error) {
       if (!isAbort(error)) setProblem(problemOf(error))
+      return false
     } finally {
       setSaving(false)
     }

@@ -193,3 +193,24 @@ test('a drawing of 100,000 lines shows what is done to it, is cancelled, and goe
   await page.getByRole('button', { name: 'Go on' }).click()
   await expect(figures(page)).toContainText('10\u2009000\u2009000', { timeout: 60_000 })
 })
+
+test('Ctrl+S saves nothing before the size is confirmed, and then only the drawing in view', async ({ page }) => {
+  await dropOnJob(page, [demo('mullion-60x118.dxf'), demo('cover-cap.dxf')])
+  const saves: string[] = []
+  page.on('request', (request) => request.method() === 'POST' && saves.push(request.url()))
+  await page.keyboard.press('Control+s')
+  await page.getByLabel('A dimension you know').selectOption('width')
+  await page.getByLabel('Known to be').fill('60')
+  await page.getByRole('button', { name: 'Compare and confirm' }).click()
+  await page.getByLabel('The finished profile').check()
+  await page.getByRole('button', { name: 'cover-cap.dxf' }).click()
+  await expect(page.getByRole('application').last()).toBeVisible({ timeout: 20_000 })
+  await page.keyboard.press('Control+s')
+  await page.getByRole('button', { name: 'mullion-60x118.dxf' }).click()
+  expect(saves).toEqual([])
+  await page.keyboard.press('Control+s')
+  await expect(page.getByText(/Revision A of P-\d+ is saved/)).toBeVisible({ timeout: 30_000 })
+  const count = saves.length
+  await page.keyboard.press('Control+s')
+  expect(saves).toHaveLength(count)
+})

@@ -1,5 +1,6 @@
 import { expect, test } from 'vitest'
 import { choicesOf, type FlowAction, flow, startFlow } from '@/components/upload/flow/flow'
+import { missingOf } from '@/components/upload/flow/missing'
 import { stepsOf } from '@/components/upload/flow/makeUp'
 import { compare, cures } from '@/components/upload/flow/size'
 import type { OutlineView } from '@/lib/section/types'
@@ -113,4 +114,21 @@ test('120 mm known against 12 drawn is explained by centimetres or a scale of 1:
     { kind: 'unit', unit: 'cm' },
     { kind: 'scale', scale: 10 },
   ])
+})
+
+test('nothing may be saved before a dimension agrees, it is said what is drawn, and a new profile has a title', () => {
+  const target = (title: string) => ({ kind: 'new', jobId: 'j', title, materialId: null }) as const
+  const claim = (drawn: number): FlowAction => ({
+    type: 'claim',
+    claim: { by: 'typed', what: 'overall width', value: 60, drawn },
+  })
+  const finished: FlowAction = { type: 'finished', finished: 'finished' }
+  expect(missingOf(choicesOf(startFlow()), target(''), false)).toEqual([
+    'the drawing gives a section',
+    'a known dimension is confirmed',
+    'it is said what is drawn',
+    'the profile has a title',
+  ])
+  expect(missingOf(choicesOf(after(claim(61), finished)), target('T'), true)).toEqual(['the known dimension agrees'])
+  expect(missingOf(choicesOf(after(claim(60), finished)), target('T'), true)).toEqual([])
 })
