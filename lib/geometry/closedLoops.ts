@@ -1,7 +1,7 @@
 import { chain } from './chain'
 import { chainsOnLoops } from './chainsOnLoops'
 import { mergeDuplicates } from './duplicates'
-import { type EdgeTable, emptyTable, pushCopy } from './edges'
+import { type EdgeTable, emptyTable, pushCopy, reserve, shapeLength } from './edges'
 import { emitLoop } from './emitLoop'
 import type { Finding } from './finding'
 import { geometryFinding } from './findings'
@@ -84,10 +84,12 @@ export function closedLoops(edges: EdgeTable, take: Uint32Array, tolerances: Tol
 
 /** Appends the entities that were drawn closed. */
 function addClosed(to: EdgeTable, loopStart: number[], edges: EdgeTable, rows: Uint32Array, start: number[]): void {
+  let shapes = 0
+  for (let r = 0; r < rows.length; r++) shapes += shapeLength(edges, rows[r])
+  reserve(to, rows.length, shapes)
+  const steps = rows.map((row) => 2 * row)
   for (let k = 0; k + 1 < start.length; k++) {
-    const steps = new Int32Array(start[k + 1] - start[k])
-    for (let s = 0; s < steps.length; s++) steps[s] = 2 * rows[start[k] + s]
-    emitLoop(to, edges, steps, steps.length)
+    emitLoop(to, edges, steps.subarray(start[k], start[k + 1]), start[k + 1] - start[k])
     loopStart.push(to.count)
   }
 }

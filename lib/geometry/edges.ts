@@ -88,8 +88,10 @@ export function emptyTable(edges = 64, shapes = 256): EdgeTable {
 }
 
 function roomForEdge(table: EdgeTable): void {
-  if (table.count < table.kind.length) return
-  const size = Math.max(64, 2 * table.kind.length)
+  if (table.count === table.kind.length) resize(table, Math.max(64, 2 * table.count))
+}
+
+function resize(table: EdgeTable, size: number): void {
   const grow = <T extends Uint8Array | Uint32Array | Float64Array>(to: T, from: T): T => {
     to.set(from)
     return to
@@ -100,13 +102,21 @@ function roomForEdge(table: EdgeTable): void {
   table.source = grow(new Uint32Array(size), table.source)
 }
 
+function resizeShapes(table: EdgeTable, size: number): void {
+  const shapes = new Float64Array(size)
+  shapes.set(table.shapes)
+  table.shapes = shapes
+}
+
+/** Makes room for that many edges and carrier numbers more, where they are known beforehand. */
+export function reserve(table: EdgeTable, edges: number, shapes: number): void {
+  if (table.count + edges > table.kind.length) resize(table, table.count + edges)
+  if (table.shapesUsed + shapes > table.shapes.length) resizeShapes(table, table.shapesUsed + shapes)
+}
+
 function roomForShape(table: EdgeTable, numbers: number): number {
   const at = table.shapesUsed
-  if (at + numbers > table.shapes.length) {
-    const shapes = new Float64Array(Math.max(256, 2 * table.shapes.length, at + numbers))
-    shapes.set(table.shapes)
-    table.shapes = shapes
-  }
+  if (at + numbers > table.shapes.length) resizeShapes(table, Math.max(256, 2 * table.shapes.length, at + numbers))
   table.shapesUsed = at + numbers
   return at
 }

@@ -36,7 +36,7 @@ export function emitChain(to: EdgeTable, from: EdgeTable, steps: ArrayLike<numbe
  * Appends a closed walk as a counter-clockwise loop that begins with its first step's edge. Its area, negative where the
  * walk had to be turned round.
  */
-export function emitLoop(to: EdgeTable, from: EdgeTable, steps: Int32Array, count: number): number {
+export function emitLoop(to: EdgeTable, from: EdgeTable, steps: ArrayLike<number>, count: number): number {
   const first = to.count
   const shapes = to.shapesUsed
   emitChain(to, from, steps, count)

@@ -32,7 +32,8 @@ export function groupOutlines(
     return root
   }
   const unite = (a: number, b: number) => {
-    const [p, q] = [find(a), find(b)]
+    const p = find(a)
+    const q = find(b)
     leader[Math.max(p, q)] = Math.min(p, q)
   }
   const outer: number[] = []
@@ -47,23 +48,20 @@ export function groupOutlines(
   const groups: OutlineGroup[] = []
   for (let k = 0; k < count; k++) {
     const root = find(k)
-    const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
-    const known = number.get(root)
+    let known = number.get(root)
     if (known === undefined) {
-      group[k] = groups.length
-      number.set(root, groups.length)
-      groups.push({ minX, minY, maxX, maxY, outlines: 1 })
-      continue
+      known = groups.length
+      number.set(root, known)
+      const nothing = { minX: Number.POSITIVE_INFINITY, minY: Number.POSITIVE_INFINITY }
+      groups.push({ ...nothing, maxX: Number.NEGATIVE_INFINITY, maxY: Number.NEGATIVE_INFINITY, outlines: 0 })
     }
-    const g = groups[known]
     group[k] = known
-    groups[known] = {
-      minX: Math.min(g.minX, minX),
-      minY: Math.min(g.minY, minY),
-      maxX: Math.max(g.maxX, maxX),
-      maxY: Math.max(g.maxY, maxY),
-      outlines: g.outlines + 1,
-    }
+    const own = groups[known]
+    own.minX = Math.min(own.minX, bounds[4 * k])
+    own.minY = Math.min(own.minY, bounds[4 * k + 1])
+    own.maxX = Math.max(own.maxX, bounds[4 * k + 2])
+    own.maxY = Math.max(own.maxY, bounds[4 * k + 3])
+    own.outlines++
   }
   return { group, groups }
 }
@@ -77,8 +75,8 @@ function uniteNear(bounds: Float64Array, outer: number[], unite: (a: number, b: 
   for (const k of outer) {
     const own = side(k)
     const reach = APART * own
-    const [minX, minY, maxX, maxY] = bounds.subarray(4 * k, 4 * k + 4)
-    index.search(minX - reach, minY - reach, maxX + reach, maxY + reach, (n) => {
+    const b = 4 * k
+    index.search(bounds[b] - reach, bounds[b + 1] - reach, bounds[b + 2] + reach, bounds[b + 3] + reach, (n) => {
       if (side(outer[n]) >= own && outer[n] !== k) unite(k, outer[n])
       return false
     })

@@ -9,22 +9,28 @@ import type { PieceSpan } from './plasticGap'
 const loopMoments = ({ edges, loopStart }: Region, loop: number, frame: Frame): Moments =>
   momentsOf(edges, loopStart[loop], loopStart[loop + 1], frame)
 
-const FIELDS = ['area', 'u', 'v', 'uu', 'vv', 'uv'] as const
-
 /** Moments of every piece in `frame`. */
 export function piecesMoments(region: Region, frame: Frame): Moments[] {
   const pieces = Array.from({ length: region.pieces }, (): Moments => ({ area: 0, u: 0, v: 0, uu: 0, vv: 0, uv: 0 }))
   for (let loop = 0; loop < region.piece.length; loop++) {
     const part = loopMoments(region, loop, frame)
     const piece = pieces[region.piece[loop]]
-    for (const field of FIELDS) piece[field] += part[field]
+    piece.area += part.area
+    piece.u += part.u
+    piece.v += part.v
+    piece.uu += part.uu
+    piece.vv += part.vv
+    piece.uv += part.uv
   }
   return pieces
 }
 
-/** Sums over the pieces of their second moments about their own centroids, without Steiner terms; `frame` along x and y. */
-export function ownMoments(region: Region, frame: Frame): { ix: number; iy: number; ixy: number } {
-  const centres = piecesMoments(region, frame).map(({ area, u, v }) => ({
+/**
+ * Sums over the pieces of their second moments about their own centroids, without Steiner terms; `frame` along x and y, `pieces`
+ * as of `piecesMoments` in it.
+ */
+export function ownMoments(region: Region, frame: Frame, pieces: readonly Moments[]): { ix: number; iy: number; ixy: number } {
+  const centres = pieces.map(({ area, u, v }) => ({
     ...frame,
     x: frame.x + u / area,
     y: frame.y + v / area,
@@ -40,8 +46,8 @@ export function ownMoments(region: Region, frame: Frame): { ix: number; iy: numb
 }
 
 /** What every piece spans along v of `frame`. */
-export function pieceSpans(region: Region, bundles: Bundles, frame: Frame, areas: readonly number[]): PieceSpan[] {
-  const spans = areas.map((area): PieceSpan => ({ min: Number.POSITIVE_INFINITY, max: Number.NEGATIVE_INFINITY, area }))
+export function pieceSpans(region: Region, bundles: Bundles, frame: Frame, pieces: readonly Moments[]): PieceSpan[] {
+  const spans = pieces.map(({ area }): PieceSpan => ({ min: Number.POSITIVE_INFINITY, max: Number.NEGATIVE_INFINITY, area }))
   for (let loop = 0; loop < region.piece.length; loop++) {
     if (region.hole[loop]) continue
     const { minV, maxV } = extremesOf(bundles, frame, bundles.loopRun[loop], bundles.loopRun[loop + 1])

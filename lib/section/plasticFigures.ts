@@ -6,9 +6,9 @@ import { type Extremes, extremesOf } from './extremes'
 import type { Response } from './figures/figure'
 import { BENDING_AXES } from './figures/spread'
 import { SECTION_FINDINGS } from './findings'
-import { frameAt } from './frame'
 import type { Causes } from './origins'
-import { isCrossed, piecesMoments, pieceSpans } from './pieces'
+import type { Moments } from './moments'
+import { isCrossed, pieceSpans } from './pieces'
 import { plasticBending } from './plastic'
 import { plasticGap } from './plasticGap'
 import type { Section } from './types'
@@ -28,13 +28,18 @@ const over = (a: number | null, b: number | null): number | null => (a === null 
 /** A piece that reaches this many roots of the area's tolerance (of the whole height) past the line leaves no gap there. */
 const NEAR_GAP = 30
 
-/** Plastic figures about x, y and, unless every axis is principal, about axes 1 and 2. */
-export function plasticFigures(region: Region, bundles: Bundles, theta: number | null, causes: Causes): PlasticFigures {
+/** Plastic figures about x, y and, unless every axis is principal, about axes 1 and 2; `pieces`: moments of each where there are several. */
+export function plasticFigures(
+  region: Region,
+  bundles: Bundles,
+  pieces: readonly Moments[],
+  theta: number | null,
+  causes: Causes,
+): PlasticFigures {
   const plastic: Section['plastic'] = { x: 0, y: 0, axis1: null, axis2: null, at: { x: 0, y: 0, axis1: null, axis2: null } }
   const widths: Response['widths'] = { x: 0, y: 0, axis1: 0, axis2: 0 }
   const across = { x: 0, y: 0 }
   const findings: Finding[] = []
-  let areas: number[] | undefined
   const tolerance = Math.max(1e-9, (causes.digits?.area ?? 0) / bundles.moments.area)
   for (const axis of BENDING_AXES) {
     if (theta === null && (axis === 'axis1' || axis === 'axis2')) continue
@@ -47,8 +52,7 @@ export function plasticFigures(region: Region, bundles: Bundles, theta: number |
     if (axis === 'x' || axis === 'y') across[axis] = bending.across
     const margin = NEAR_GAP * Math.sqrt(tolerance) * (extremes.maxV - extremes.minV)
     if (region.pieces === 1 || isCrossed(region, turned, bending.offset, margin)) continue
-    areas ??= piecesMoments(region, frameAt(bundles.x, bundles.y)).map((piece) => piece.area)
-    const gap = plasticGap(pieceSpans(region, bundles, turned, areas), tolerance)
+    const gap = plasticGap(pieceSpans(region, bundles, turned, pieces), tolerance)
     if (!gap) continue
     const [from, to] = gap
     plastic.at[axis] = 0.5 * (from + to)

@@ -9,7 +9,7 @@ import { SECTION_FINDINGS } from './findings'
 import { type Frame, frameAt } from './frame'
 import { freeBending, plasticVector } from './freeBending'
 import { type Causes, originsOf } from './origins'
-import { ownMoments } from './pieces'
+import { ownMoments, piecesMoments } from './pieces'
 import { plasticFigures } from './plasticFigures'
 import { type Principal, principalOf } from './principal'
 import { torsionFigures } from './torsionFigures'
@@ -62,7 +62,8 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
   const causes = causesOf(region, inputs, boundary, frame)
   const principal = principalOf(edges, frame, { ix, iy, ixy }, causes)
   if (!(ix > 0 && iy > 0 && principal.i2 > 0 && area > causes.numerics.area)) return nothing('too-thin')
-  const { plastic, shape, widths, across, findings } = plasticFigures(region, bundles, principal.theta, causes)
+  const pieces = region.pieces > 1 ? piecesMoments(region, frame) : []
+  const { plastic, shape, widths, across, findings } = plasticFigures(region, bundles, pieces, principal.theta, causes)
   const elastic = elasticOf(bundles, principal, ix, iy)
   const degrees = (radians: number) => (radians * 180) / Math.PI
   const vectorAt = plasticVector(bundles)
@@ -100,7 +101,7 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
       restrainedMxForY: 0 - across.y,
     },
     circle,
-    ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame) } : {}),
+    ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame, pieces) } : {}),
     origin: {},
   }
   const torsion = torsionFigures(region)

@@ -48,7 +48,7 @@ export function combine(set: OutlineSet, makeUp: MakeUp, tangles: Tangle[], nest
 
 /** The loops round all faces for which `is` holds, and the places where a boundary did not close (a fault). */
 export function loopsWhere(set: OutlineSet, { whole, tangled }: Combined, is: (f: Filling) => boolean) {
-  const loops = noLoops()
+  const loops = noLoops(set.edges.count, set.edges.shapesUsed)
   const faults: [number, number][] = []
   for (const { outline, inside, outside } of whole) {
     const side = Number(is(inside)) - Number(is(outside))

@@ -12,7 +12,11 @@ export interface Loops {
   area: number[]
 }
 
-export const noLoops = (): Loops => ({ edges: emptyTable(), loopStart: [0], area: [] })
+export const noLoops = (edges?: number, shapes?: number): Loops => ({
+  edges: emptyTable(edges, shapes),
+  loopStart: [0],
+  area: [],
+})
 
 /**
  * Joins the sub-edges that `side` keeps (1: metal on its left, −1: on its right, 0: not kept) into loops

@@ -33,7 +33,9 @@ export function makeUpOf(steps: Step[], materials: (string | null)[]): MakeUp {
   const commons: number[] = []
   const taken = steps.filter(({ does }) => does !== 'out')
   taken.forEach(({ outline, does }, n) => {
-    stepsOf.set(outline, [...(stepsOf.get(outline) ?? []), n])
+    const own = stepsOf.get(outline)
+    if (own) own.push(n)
+    else stepsOf.set(outline, [n])
     if (does === 'common') commons.push(n)
   })
   return { steps: taken, materials, stepsOf, commons }
