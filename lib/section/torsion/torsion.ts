@@ -88,6 +88,8 @@ interface Solution {
 }
 
 function solveOn(region: Region, mesh: Mesh, unknowns: Unknowns): Solution | null {
+  // a piece too small or thin for its numbers has no element
+  if (unknowns.count < 2) return null
   const { stiffness, area, twist } = assemble(region, mesh, unknowns)
   const { to, count, holes } = stressUnknowns(region, mesh, unknowns)
   const side = new Float64Array(count)
