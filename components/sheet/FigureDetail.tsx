@@ -1,7 +1,7 @@
 'use client'
 import { UnitText } from '@/components/ui/UnitText'
 import type { TeamSettings } from '@/lib/api/schemas/people'
-import type { Figure } from '@/lib/section/figures/figure'
+import type { Bounds, Figure } from '@/lib/section/figures/figure'
 import type { Origin } from '@/lib/section/types'
 import { format, forScreen, plain } from '@/lib/units/format'
 import { unitOf } from '@/lib/units/units'
@@ -12,16 +12,19 @@ import { contributions, totalPlusMinus } from './plusMinus'
 export function FigureDetail({
   figure,
   value,
+  bounds,
   origin,
   display,
 }: {
   figure: Figure
   value: number
+  bounds?: Bounds
   origin: Origin | undefined
   display: TeamSettings
 }) {
   const causes = contributions(origin?.plusMinus)
   const small = { ...display, digits: 2 }
+  const edge = (at: number) => format(at, figure.dimension, { ...display, digits: Math.max(6, display.digits) }).text
   const { parts } = unitOf(figure.dimension, display.lengthUnit)
   const digits = plain(value, figure.dimension, display)
   return (
@@ -34,9 +37,14 @@ export function FigureDetail({
       </p>
       {origin?.kind === 'element' && (
         <p>
-          {origin.estimate
-            ? 'An estimate by finite elements; its ± is the change between the last two meshes.'
-            : 'By finite elements: the true value lies within the ±, which are bounds from both sides.'}
+          {origin.estimate && 'An estimate by finite elements; its ± is the change between the last two meshes.'}
+          {bounds && (
+            <>
+              By finite elements, from both sides: it lies between{' '}
+              <span className="whitespace-nowrap font-mono text-ink">{edge(bounds.lower)}</span> and{' '}
+              <span className="whitespace-nowrap font-mono text-ink">{edge(bounds.upper)}</span> for the region as drawn.
+            </>
+          )}
         </p>
       )}
       {causes.length === 0 ? (

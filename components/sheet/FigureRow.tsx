@@ -6,7 +6,7 @@ import { classes } from '@/components/ui/classes'
 import { toast } from '@/components/ui/toastStore'
 import { UnitText } from '@/components/ui/UnitText'
 import type { TeamSettings } from '@/lib/api/schemas/people'
-import type { Figure } from '@/lib/section/figures/figure'
+import type { Bounds, Figure } from '@/lib/section/figures/figure'
 import { figureSymbol, figureWord } from '@/lib/section/naming'
 import type { Origin } from '@/lib/section/types'
 import { format, plain } from '@/lib/units/format'
@@ -19,13 +19,15 @@ import { SymbolText } from './SymbolText'
 interface Props {
   figure: Figure
   value: number
+  /** between which it lies for certain */
+  bounds?: Bounds
   origin: Origin | undefined
   display: TeamSettings
   hover: HoverStore
 }
 
 /** One figure: symbol, word, value, unit, origin. Pointing at it draws it on the board; pressing it shows its ± and all its digits. */
-export function FigureRow({ figure, value, origin, display, hover }: Props) {
+export function FigureRow({ figure, value, bounds, origin, display, hover }: Props) {
   const [open, setOpen] = useState(false)
   const id = useId()
   const { key } = figure
@@ -74,13 +76,13 @@ export function FigureRow({ figure, value, origin, display, hover }: Props) {
           <UnitText unit={unit} />
         </td>
         <td className="w-4 text-right align-baseline">
-          <OriginMark kind={kind} />
+          <OriginMark kind={kind} estimate={origin?.estimate} />
         </td>
       </tr>
       {open && (
         <tr id={id}>
           <td colSpan={4} className="pb-2">
-            <FigureDetail figure={figure} value={value} origin={origin} display={display} />
+            <FigureDetail figure={figure} value={value} bounds={bounds} origin={origin} display={display} />
           </td>
         </tr>
       )}

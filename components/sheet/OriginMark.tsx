@@ -3,7 +3,7 @@ import type { OriginKind } from '@/lib/section/types'
 const WORDS: Record<OriginKind, string> = {
   exact: 'exact: closed form on every edge',
   iterated: 'iterated until rounding stops it',
-  element: 'bracketed by finite elements',
+  element: 'by finite elements, between bounds',
 }
 const SHAPES: Record<OriginKind, string> = {
   exact: 'bg-soft border-[1.5px]',
@@ -11,23 +11,17 @@ const SHAPES: Record<OriginKind, string> = {
   element: 'border-x-[1.5px]',
 }
 
-/** How a figure was found: square exact, ring iterated, two bars bracketed; with its word. */
-export function OriginMark({ kind }: { kind: OriginKind }) {
-  return (
-    <span
-      role="img"
-      aria-label={WORDS[kind]}
-      title={WORDS[kind]}
-      className={`inline-block size-2.5 border-soft ${SHAPES[kind]}`}
-    />
-  )
+/** How a figure was found: square exact, ring iterated, two bars by finite elements; with its word. */
+export function OriginMark({ kind, estimate = false }: { kind: OriginKind; estimate?: boolean }) {
+  const word = estimate ? 'an estimate by finite elements' : WORDS[kind]
+  return <span role="img" aria-label={word} title={word} className={`inline-block size-2.5 border-soft ${SHAPES[kind]}`} />
 }
 
 export function OriginLegend() {
   const words: [OriginKind, string][] = [
     ['exact', 'exact'],
     ['iterated', 'iterated'],
-    ['element', 'bracketed'],
+    ['element', 'by finite elements'],
   ]
   return (
     <ul className="flex flex-wrap gap-x-5 text-tiny text-soft" aria-label="How figures were found">

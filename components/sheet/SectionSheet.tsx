@@ -2,7 +2,7 @@
 import { memo } from 'react'
 import type { HoverStore } from '@/components/board/hover'
 import type { TeamSettings } from '@/lib/api/schemas/people'
-import type { Figure, FigureGroup } from '@/lib/section/figures/figure'
+import type { Bounds, Figure, FigureGroup } from '@/lib/section/figures/figure'
 import { FIGURES } from '@/lib/section/figures/index'
 import { axisNames } from '@/lib/section/naming'
 import type { Section } from '@/lib/section/types'
@@ -31,12 +31,13 @@ const GROUPS: { group: FigureGroup; title: (names: Names) => string; fold?: Fold
 interface Row {
   figure: Figure
   value: number
+  bounds?: Bounds
 }
 
 function rowsOf(section: Section, group: FigureGroup): Row[] {
   return FIGURES.filter((figure) => figure.group === group).flatMap((figure) => {
     const value = figure.value(section)
-    return value === null || value === undefined ? [] : [{ figure, value }]
+    return value === null || value === undefined ? [] : [{ figure, value, bounds: figure.bounds?.(section) }]
   })
 }
 
@@ -49,11 +50,12 @@ interface Props {
 /** Every figure of the section, from the one table of figures, in groups. */
 export const SectionSheet = memo(function SectionSheet({ section, display, hover }: Props) {
   const names = axisNames(display.axes)
-  const row = ({ figure, value }: Row) => (
+  const row = ({ figure, value, bounds }: Row) => (
     <FigureRow
       key={figure.key}
       figure={figure}
       value={value}
+      bounds={bounds}
       origin={section.origin[figure.key]}
       display={display}
       hover={hover}

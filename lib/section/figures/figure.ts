@@ -64,6 +64,12 @@ export interface Response {
 }
 
 /** One row of the table of figures. Sheet, CSV, JSON and schema walk this table. */
+/** A figure lies between these for certain; its own unit. */
+export interface Bounds {
+  lower: number
+  upper: number
+}
+
 export interface Figure {
   /** dotted path of the value in `Section`, also the key in `origin` */
   key: string
@@ -76,6 +82,7 @@ export interface Figure {
   iteratedOn?: readonly IteratedOn[]
   shows: Shows
   value: (section: Section) => number | null | undefined
+  bounds?: (section: Section) => Bounds | undefined
   /** first-order bound of what a change does to the figure, in its own unit; absent for counts */
   spread?: (section: Section, change: Change, response: Response) => number
 }

@@ -11,6 +11,7 @@ export const torsion: Figure[] = [
     origin: 'element',
     shows: 'region',
     value: (section) => section.j?.value,
+    bounds: (section) => section.j,
   },
   {
     key: 'shearCentre.x',
