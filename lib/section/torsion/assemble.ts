@@ -94,25 +94,31 @@ export function assemble(region: Region, mesh: Mesh, unknowns: Unknowns): System
  * (a hole's rim moves as a whole).
  */
 export function tied(a: SparseMatrix, to: Int32Array, n: number): SparseMatrix {
-  const rows: Map<number, number>[] = Array.from({ length: n }, () => new Map())
-  for (let i = 0; i < a.n; i++) {
-    if (to[i] < 0) continue
-    const row = rows[to[i]]
-    for (let p = a.start[i]; p < a.start[i + 1]; p++) {
-      const j = to[a.column[p]]
-      if (j >= 0) row.set(j, (row.get(j) ?? 0) + a.value[p])
-    }
-  }
+  // the old rows of each new one, in their order
+  const first = new Int32Array(n + 1)
+  for (let i = 0; i < a.n; i++) if (to[i] >= 0) first[to[i] + 1]++
+  for (let k = 0; k < n; k++) first[k + 1] += first[k]
+  const fill = first.slice()
+  const rows = new Int32Array(first[n])
+  for (let i = 0; i < a.n; i++) if (to[i] >= 0) rows[fill[to[i]]++] = i
   const start = new Int32Array(n + 1)
-  for (let i = 0; i < n; i++) start[i + 1] = start[i] + rows[i].size
-  const column = new Int32Array(start[n])
-  const value = new Float64Array(start[n])
-  rows.forEach((row, i) => {
-    let p = start[i]
-    for (const [j, v] of row) {
-      column[p] = j
-      value[p++] = v
-    }
-  })
-  return { n, start, column, value }
+  const column = new Int32Array(a.column.length)
+  const value = new Float64Array(a.column.length)
+  const place = new Int32Array(n).fill(-1)
+  let used = 0
+  for (let k = 0; k < n; k++) {
+    start[k] = used
+    for (let r = first[k]; r < first[k + 1]; r++)
+      for (let p = a.start[rows[r]]; p < a.start[rows[r] + 1]; p++) {
+        const j = to[a.column[p]]
+        if (j < 0) continue
+        if (place[j] < start[k]) {
+          place[j] = used
+          column[used++] = j
+        }
+        value[place[j]] += a.value[p]
+      }
+  }
+  start[n] = used
+  return { n, start, column: column.slice(0, used), value: value.slice(0, used) }
 }
