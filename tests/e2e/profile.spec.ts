@@ -83,6 +83,25 @@ test('an axis typed through the centroid at θ gives I1 again', async ({ page })
   await expect(own.getByRole('row', { name: 'about the axis' })).toContainText('1\u2009063\u2009000')
 })
 
+test('an axis dragged by its ring turns, and its figures follow', async ({ page }) => {
+  await page.getByRole('button', { name: 'Place it at the centroid' }).click()
+  const own = page.getByRole('region', { name: 'About an axis of your own' })
+  await expect(own.getByRole('row', { name: 'about the axis' })).toContainText('692\u2009780')
+  await board(page).scrollIntoViewIfNeeded()
+  const [square, ring] = await Promise.all(
+    ['rect', 'circle'].map((shape) => board(page).locator(`${shape}.stroke-accent`).boundingBox()),
+  )
+  if (!square || !ring) throw new Error('no axis on the board')
+  const middle = (box: typeof ring) => ({ x: box.x + box.width / 2, y: box.y + box.height / 2 })
+  const [centre, from] = [middle(square), middle(ring)]
+  await page.mouse.move(from.x, from.y)
+  await page.mouse.down()
+  await page.mouse.move(centre.x, centre.y - 90, { steps: 5 })
+  await page.mouse.up()
+  expect(Number(await page.getByLabel('turned by').inputValue())).toBeCloseTo(90, 0)
+  await expect(own.getByRole('row', { name: 'about the axis' })).not.toContainText('692\u2009780')
+})
+
 test('the shares about x come in words and as bars', async ({ page }) => {
   const strip = page.getByRole('region', { name: 'Which metal makes it' })
   await strip.getByRole('button').first().click()
