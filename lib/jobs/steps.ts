@@ -12,6 +12,7 @@ import type { Section } from '../section/types'
 import type { UsedMaterial } from './answer'
 import { taskFinding } from './findings'
 import { massesOf } from './masses'
+import { asAnswered } from './narrow'
 import { tolerancesOf } from './tolerances'
 
 /** Which parts of a recipe each step depends on; a step whose key stays the same is not done again. */
@@ -40,11 +41,12 @@ export function chainStep(drawing: Drawing, recipe: Recipe): Chained {
 
 /** Outlines to net metal, drawing units, before the turn. */
 export function combineStep({ drawing, selection, outlines, tolerances }: Chained, recipe: Recipe): RegionAnswer {
-  if (outlines.count > 0) return regionOf(outlines, recipe, tolerances, mmPerUnit(recipe))
+  const scale = mmPerUnit(recipe)
+  if (outlines.count > 0) return asAnswered(regionOf(outlines, recipe, tolerances, scale), tolerances, scale)
   // an error before this one says why there is nothing
   const isExplained = [drawing, selection, outlines].some((step) => step.findings.some(({ severity }) => severity === 'error'))
   const findings = isExplained ? [] : [taskFinding('outlines-none', { open: outlines.openStart.length - 1 })]
-  return { region: null, parts: [], roles: [], steps: [], findings, repairs: [] }
+  return { region: null, parts: [], roles: [], steps: [], findings, narrow: [], answered: 0, repairs: [] }
 }
 
 export interface Figures {

@@ -11,6 +11,7 @@ import type { SectionAnswer } from '../section/types'
 import { answerOf, type Source, type UsedMaterial } from './answer'
 import { withGapMoments } from './gapMoments'
 import { memo } from './memo'
+import { withConstants } from './narrow'
 import type { Role, Stage } from './previewProtocol'
 import { unitFindings, withoutFarFaults, withoutMootQuestions } from './sayings'
 import { chainStep, combineStep, figuresStep, keysOf, NO_FIGURES } from './steps'
@@ -48,6 +49,7 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
   const chained = memo(chainStep)
   const combined = memo(combineStep)
   const figured = memo(figuresStep)
+  const told = memo(withConstants)
   return {
     drawing,
     run(recipe, materials, onStage = () => {}) {
@@ -62,11 +64,12 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
       const before = [drawing.findings, selection.findings, ofOutlines, combine.findings].flat()
       onStage('figures')
       const figures = before.some(isError) ? NO_FIGURES : figured(keys.figures, drawing, combine, recipe, materials)
+      const narrow = told(keys.figures, combine, chain.tolerances, mmPerUnit(recipe), figures.section?.j?.value)
       const findings = [
         ...drawing.findings,
         ...selection.findings,
         ...withGapMoments(ofOutlines, combine.repairs, figures.repairs, figures.section),
-        ...combine.findings,
+        ...combine.findings.map((finding) => narrow.get(finding) ?? finding),
         ...figures.findings,
         ...unitFindings(drawing, recipe, figures.section),
       ]
@@ -81,7 +84,11 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
         outlines,
         roles: combine.roles,
         region: section && figures.region,
-        combination: section && { outlines, steps: stepsAsked(combine), area: section.area / mmPerUnit(recipe) ** 2 },
+        combination: section && {
+          outlines,
+          steps: stepsAsked(combine),
+          area: section.area / mmPerUnit(recipe) ** 2 - combine.answered,
+        },
       }
     },
   }

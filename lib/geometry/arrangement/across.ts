@@ -1,6 +1,7 @@
 import { type EdgeTable, LINE } from '../edges'
 import { jetAt, lengthOf, newJet } from '../evaluate'
 import { nearestOn } from '../nearest'
+import type { XY } from '../recipe'
 
 /** What lies between two edges that run opposite to each other, with metal on the left of both. */
 export type Between = 'void' | 'metal'
@@ -8,35 +9,40 @@ export type Between = 'void' | 'metal'
 export interface Across {
   gap: number
   length: number
-  at: [number, number]
+  at: XY
+  /** what lies between and a little more on either side, so that nothing is left there once it is added or cut */
+  patch: XY[]
 }
 
 const SAMPLES = [1 / 6, 0.5, 5 / 6]
 const GOLDEN = (Math.sqrt(5) - 1) / 2
 const NARROWINGS = 40
-const HALVINGS = 30
+const HALVINGS = 40
+/** sides of a patch along a curve */
+const PIECES = 24
 
-const here = newJet()
-const there = newJet()
+const jet = newJet()
+const jetThere = newJet()
 
 interface Facing {
   distance: number
-  at: [number, number]
+  here: XY
+  there: XY
   isFacing: boolean
 }
 
 /** From the point t of `edge`, what lies across on `other`. */
 function look(edges: EdgeTable, edge: number, t: number, other: number, limit: number, between: Between): Facing {
-  const { x, y, dx, dy } = jetAt(edges, edge, t, here)
+  const { x, y, dx, dy } = jetAt(edges, edge, t, jet)
   const near = nearestOn(edges, other, x, y)
-  const at: [number, number] = [(x + near.x) / 2, (y + near.y) / 2]
+  const ends = { distance: near.distance, here: [x, y] as XY, there: [near.x, near.y] as XY }
   const isNear = near.distance < limit && near.t > 0 && near.t < 1
-  if (!isNear) return { distance: near.distance, at, isFacing: false }
+  if (!isNear) return { ...ends, isFacing: false }
   const left = dx * (near.y - y) - dy * (near.x - x)
-  jetAt(edges, other, near.t, there)
-  const dot = dx * there.dx + dy * there.dy
-  const isOpposite = dot < -0.9 * Math.hypot(dx, dy) * Math.hypot(there.dx, there.dy)
-  return { distance: near.distance, at, isFacing: isOpposite && (between === 'void' ? left < 0 : left > 0) }
+  jetAt(edges, other, near.t, jetThere)
+  const dot = dx * jetThere.dx + dy * jetThere.dy
+  const isOpposite = dot < -0.9 * Math.hypot(dx, dy) * Math.hypot(jetThere.dx, jetThere.dy)
+  return { ...ends, isFacing: isOpposite && (between === 'void' ? left < 0 : left > 0) }
 }
 
 /** How near two edges come to one another within the limit, and over what length of the shorter one; null where they do not. */
@@ -63,7 +69,14 @@ export function across(edges: EdgeTable, i: number, j: number, limit: number, be
   }
   if (!best.isFacing) return null
   const [first, last] = [reach(from, best.t, 0), reach(from, best.t, 1)]
-  return { gap: best.distance, length: (last - first) * length, at: from((first + last) / 2).at }
+  const reached = (last - first) * length
+  const middle = from((first + last) / 2)
+  return {
+    gap: best.distance,
+    length: reached,
+    at: [(middle.here[0] + middle.there[0]) / 2, (middle.here[1] + middle.there[1]) / 2],
+    patch: patchOf(from, first, last, Math.min(0.25, best.distance / reached), bothLines ? 1 : PIECES),
+  }
 }
 
 function nearestBetween(from: (t: number) => Facing, low: number, high: number): number {
@@ -97,4 +110,23 @@ function reach(from: (t: number) => Facing, t: number, end: 0 | 1): number {
     else outside = middle
   }
   return inside
+}
+
+/**
+ * Rows across from first to last: those at the ends as they are, so that nothing stands out at a mouth; those between
+ * reach as much beyond the edges as these are apart.
+ */
+function patchOf(from: (t: number) => Facing, first: number, last: number, inset: number, pieces: number): XY[] {
+  const near: XY[] = []
+  const far: XY[] = []
+  const row = (share: number, beyond: number) => {
+    const { here, there } = from(first + (last - first) * share)
+    const [dx, dy] = [beyond * (there[0] - here[0]), beyond * (there[1] - here[1])]
+    near.push([here[0] - dx, here[1] - dy])
+    far.unshift([there[0] + dx, there[1] + dy])
+  }
+  row(0, 0)
+  for (let n = 0; n <= pieces; n++) row(inset + ((1 - 2 * inset) * n) / pieces, 1)
+  row(1, 0)
+  return [...near, ...far]
 }

@@ -3,6 +3,9 @@ import { type Finding, type FindingParams, type FindingRow, makeFinding, placeTe
 const shortNumber = (value: number) => String(Number(value.toPrecision(4)))
 const text = (value: FindingParams[string]) => (typeof value === 'number' ? shortNumber(value) : String(value))
 const place = placeText
+/** The torsion constant as it is, and the other way, where they are known. */
+const constants = ({ j, jOther }: FindingParams, other: string, consequence: string) =>
+  j === undefined ? `; ${other}, ${consequence}.` : `, with J = ${text(j)} mm⁴; ${other}, J = ${text(jOther)} mm⁴.`
 
 /** What combining outlines can report. Lengths in the sentences are mm, places drawing units. */
 export const COMBINE_FINDINGS = {
@@ -69,17 +72,27 @@ export const COMBINE_FINDINGS = {
   slit: {
     severity: 'warning',
     say: (p) =>
-      `A slit only ${text(p.gap)} mm wide runs ${text(p.length)} mm at ${place(p)}. It is kept open; closed, torsion would be far greater. Open or closed: a person must know.`,
+      `A slit only ${text(p.gap)} mm wide runs ${text(p.length)} mm at ${place(p)}. It is kept open${constants(p, 'closed', 'torsion would be far greater')} Open or closed: a person must know.`,
+  },
+  'wall-answered': {
+    severity: 'note',
+    say: (p) =>
+      `The metal only ${text(p.width)} mm thick over ${text(p.length)} mm at ${place(p)} is ${text(p.is)} by a person's answer.`,
+  },
+  'narrow-changed': {
+    severity: 'note',
+    say: (p) =>
+      `By a person's answer ${text(p.area)} mm² of metal were ${p.does === 'add' ? 'added in gaps' : 'cut where walls were too thin'}.`,
   },
   'wall-thin': {
     severity: 'warning',
     say: (p) =>
-      `The metal is only ${text(p.width)} mm thick over ${text(p.length)} mm at ${place(p)}. It is kept as drawn; without it, torsion may be far smaller. Is it meant, or should the outlines touch or part there?`,
+      `The metal is only ${text(p.width)} mm thick over ${text(p.length)} mm at ${place(p)}. It is kept as drawn${constants(p, 'without it', 'torsion may be far smaller')} Is it meant, or should the outlines touch or part there?`,
   },
   gap: {
     severity: 'warning',
     say: (p) =>
-      `Two pieces lie only ${text(p.gap)} mm apart over ${text(p.length)} mm at ${place(p)}: bonded, in contact, or void? They are taken as apart.`,
+      `Two pieces lie only ${text(p.gap)} mm apart over ${text(p.length)} mm at ${place(p)}: bonded, in contact, or void? They are taken as apart${constants(p, 'bonded', 'they would act as one')}`,
   },
   'gap-answered': {
     severity: 'note',

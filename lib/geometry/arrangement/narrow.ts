@@ -4,7 +4,7 @@ import type { Finding } from '../finding'
 import type { Tolerances } from '../outlineSet'
 import type { Bond } from '../recipe'
 import type { Region } from '../region'
-import { facingGaps, thinWalls } from './facing'
+import { facingGaps, type Narrow, thinWalls } from './facing'
 import { combineFinding } from './findings'
 import { perimeterOf } from './regionFrom'
 
@@ -18,11 +18,12 @@ export function narrowPlaces(
   bonds: Bond[],
   tolerances: Tolerances,
   mmPerUnit: number,
-): Finding[] {
+): { findings: Finding[]; narrow: Narrow[] } {
   const { findings, thin } = slivers(region, area, tolerances.duplicate, mmPerUnit)
   const limit = NARROW / mmPerUnit
   const gaps = facingGaps(region, thin, area, bonds, limit, mmPerUnit)
-  return [...findings, ...gaps, ...thinWalls(region, thin, limit, mmPerUnit)]
+  const narrow = [...gaps, ...thinWalls(region, thin, bonds, limit, mmPerUnit)]
+  return { findings: [...findings, ...narrow.map(({ finding }) => finding)], narrow }
 }
 
 function slivers(region: Region, area: number[], duplicate: number, mmPerUnit: number) {

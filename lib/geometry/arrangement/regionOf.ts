@@ -6,6 +6,7 @@ import type { Region, Repair } from '../region'
 import { MOST_CROSSINGS } from './arrange'
 import { type Combined, combine, loopsWhere } from './combine'
 import { defaultSteps } from './defaultSteps'
+import type { Narrow } from './facing'
 import { combineFinding } from './findings'
 import { distanceTo, type MakeUp, makeUpOf, type Step, statedSteps } from './makeUp'
 import { narrowPlaces } from './narrow'
@@ -30,6 +31,10 @@ export interface RegionAnswer {
   /** the outlines that take part, in the order of the make-up */
   steps: { outline: number; does: Does; material: string | null }[]
   findings: Finding[]
+  /** slits, gaps and walls of a few µm: what a person has to decide */
+  narrow: Narrow[]
+  /** area that answers about these have added to what the make-up gives */
+  answered: number
   /** repairs of the outlines that take part; area as it counts in the region */
   repairs: Repair[]
 }
@@ -59,6 +64,8 @@ export function regionOf(
     roles: rolesOf(set.count, named?.steps ?? []),
     steps: [],
     findings: [...findings, finding],
+    narrow: [],
+    answered: 0,
     repairs: [],
   })
   if (!used.includes(1)) return failed(combineFinding('no-outlines', {}))
@@ -90,13 +97,15 @@ export function regionOf(
   if (!named) findings.push(...abutting(combined, mmPerUnit))
   findings.push(...overlaps(set, combined, materials, bonds, mmPerUnit))
   const narrow = narrowPlaces(region, loops.area, bonds, tolerances, mmPerUnit)
-  findings.push(...narrow, ...thinOverlaps(combined, tolerances.duplicate, narrow, mmPerUnit))
+  findings.push(...narrow.findings, ...thinOverlaps(combined, tolerances.duplicate, narrow.findings, mmPerUnit))
   return {
     region,
     parts: partsOf(set, combined, plan, region),
     roles: rolesOf(set.count, steps),
     steps: plan.steps.map(({ outline, does, material }) => ({ outline, does, material: materials[material] ?? null })),
     findings,
+    narrow: narrow.narrow,
+    answered: 0,
     repairs: repairsOf(set, plan),
   }
 }
