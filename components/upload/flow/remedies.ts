@@ -44,7 +44,15 @@ export function remediesOf({ code, params, at }: Finding, result: PreviewResult)
         ['contact', 'In contact'],
       ])
     case 'slit':
-      return answers([['void', 'It is open']])
+      return answers([
+        ['void', 'It is open'],
+        ['metal', 'It is closed'],
+      ])
+    case 'wall-thin':
+      return answers([
+        ['metal', 'It is metal'],
+        ['void', 'It is open'],
+      ])
     case 'chain-open':
       return typeof params.gap === 'number' && params.gap > 0 && params.gap < 5
         ? [set(`Close gaps up to ${toleranceFor(params.gap)} mm`, { tolerance: toleranceFor(params.gap) })]
