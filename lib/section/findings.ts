@@ -41,7 +41,7 @@ export const SECTION_FINDINGS = {
   'torsion-not-sought': {
     severity: 'note',
     say: ({ edges, pieces }) =>
-      `Torsion and shear figures are not given for a section this large (${edges} edges in ${pieces} pieces; at most 1,500 edges ` +
+      `Torsion and shear figures are not given for a section this large (edges: ${edges}, pieces: ${pieces}; at most 1,500 edges ` +
       'in 4 pieces). Take a part of the drawing to have them.',
   },
   'torsion-not-found': {

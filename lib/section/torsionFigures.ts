@@ -9,6 +9,8 @@ import type { Origin, Section } from './types'
 const MOST_EDGES = 1500
 const MOST_PIECES = 4
 const MOST_UNKNOWNS = 20_000
+/** Bounds further apart than this say nothing that a person could use. */
+const LEAST_SHARE = 0.9
 
 export interface TorsionFigures {
   figures: Pick<Section, 'j' | 'shearCentre' | 'iw' | 'shearArea'>
@@ -33,7 +35,7 @@ export function torsionFigures(region: Region): TorsionFigures {
   const parts: Torsion[] = []
   for (const piece of pieceRegions(region)) {
     const part = torsionOf(piece, { unknowns: MOST_UNKNOWNS })
-    if (!part) return none('torsion-not-found', region)
+    if (!part || part.lower < LEAST_SHARE * part.upper) return none('torsion-not-found', region)
     parts.push(part)
   }
   const lower = parts.reduce((sum, part) => sum + part.lower, 0)

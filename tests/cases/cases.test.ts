@@ -43,18 +43,24 @@ describe('torsion and warping of the drawings that hold a reference', () => {
   const held = all.flatMap((reference) =>
     reference.torsion_mm ? [[reference.file, reference, reference.torsion_mm] as const] : [],
   )
-  it.each(held)('%s: J between bounds a 500th apart, shear centre and Iw within a hundredth', (_, reference, { j, shearCentre, iw }) => {
-    const { section } = compute(reference).answer
-    if (!section?.j || !section.shearCentre || section.iw === undefined) throw new Error('no torsion')
-    expect(section.j.lower).toBeLessThanOrEqual(j.value * (1 + j.accept_rel))
-    expect(section.j.upper).toBeGreaterThanOrEqual(j.value * (1 - j.accept_rel))
-    expect(section.j.upper / section.j.lower - 1).toBeLessThan(0.002)
-    const near = 0.01 * section.circle.radius + shearCentre.accept_abs
-    expect(section.shearCentre.x).toBeWithin(shearCentre.x, { absolute: near })
-    expect(section.shearCentre.y).toBeWithin(shearCentre.y, { absolute: near })
-    // a closed tube of circles does not warp: what is left is measured by the metal's own size
-    expect(section.iw).toBeWithin(iw.value, { relative: 0.01 + (iw.accept_rel ?? 0), absolute: 1e-4 * section.ip * section.area })
-  })
+  it.each(held)(
+    '%s: J between bounds a 500th apart, shear centre and Iw within a hundredth',
+    (_, reference, { j, shearCentre, iw }) => {
+      const { section } = compute(reference).answer
+      if (!section?.j || !section.shearCentre || section.iw === undefined) throw new Error('no torsion')
+      expect(section.j.lower).toBeLessThanOrEqual(j.value * (1 + j.accept_rel))
+      expect(section.j.upper).toBeGreaterThanOrEqual(j.value * (1 - j.accept_rel))
+      expect(section.j.upper / section.j.lower - 1).toBeLessThan(0.002)
+      const near = 0.01 * section.circle.radius + shearCentre.accept_abs
+      expect(section.shearCentre.x).toBeWithin(shearCentre.x, { absolute: near })
+      expect(section.shearCentre.y).toBeWithin(shearCentre.y, { absolute: near })
+      // a closed tube of circles does not warp: what is left is measured by the metal's own size
+      expect(section.iw).toBeWithin(iw.value, {
+        relative: 0.01 + (iw.accept_rel ?? 0),
+        absolute: 1e-4 * section.ip * section.area,
+      })
+    },
+  )
 })
 
 describe('what the drawings must be told about', () => {

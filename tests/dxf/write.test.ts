@@ -56,6 +56,12 @@ describe('the clean region as DXF', () => {
       const gotNumbers = new Map(numbersOf(got))
       for (const [key, value] of numbersOf(wanted)) {
         if (/theta|angle/i.test(key)) continue
+        if (/^\.(j|shearCentre|iw|shearArea)\b/.test(key)) {
+          // another last bit can make another mesh: element figures come back within their own ±
+          const own = wanted.origin[key.slice(1).replace(/^j\..*/, 'j')]?.plusMinus?.numerics ?? 0
+          expect(gotNumbers.get(key), key).toBeWithin(value, { absolute: 2 * own + 1e-12 * wanted.ip * wanted.area })
+          continue
+        }
         const scale = powers.find((power) => power >= Math.abs(value)) ?? Math.abs(value)
         expect(gotNumbers.get(key), key).toBeWithin(value, {
           absolute: (/plastic/i.test(key) ? 1e-10 : 1e-12) * Math.max(scale, radius),

@@ -58,10 +58,12 @@ function sharpVertices(boundary: Boundary, points: Points): Set<number> {
 /**
  * Refines until every piece of the boundary is a side, no vertex lies in the circle over a piece, and no
  * triangle of the metal has an angle under 25° but at sharp corners (Ruppert, J. Algorithms 18 (1995) 548–585,
- * in rounds: each triangulates all points afresh, splits pieces, else adds circumcentres). Deterministic.
+ * in rounds: each triangulates all points afresh, splits pieces, else adds circumcentres). Deterministic. Null where more
+ * than `mostPoints` would be needed: slivers.
  */
-export function meshOf(work: Workpiece): Mesh {
+export function meshOf(work: Workpiece, mostPoints: number): Mesh | null {
   for (let round = 0; ; round++) {
+    if (work.points.x.length > mostPoints) return null
     const triangulation = triangulate(work)
     const last = round >= ROUNDS
     const splits = piecesToSplit(work, triangulation)

@@ -40,7 +40,9 @@ export function torsionOf(region: Region, { bracket = 0.002, unknowns: cap = 70_
   const work = workpieceOf(local, size)
   let best: Torsion | null = null
   for (let meshes = 1; meshes <= 16; meshes++) {
-    const mesh = meshOf(work)
+    // a second-order mesh has about four unknowns a vertex
+    const mesh = meshOf(work, cap / 4)
+    if (!mesh) return best
     const unknowns = unknownsOf(mesh)
     const solution = solveOn(local, mesh, unknowns)
     if (!solution) return best
