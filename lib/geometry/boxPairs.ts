@@ -43,7 +43,9 @@ function hilbertOrder(boxes: Float64Array, count: number): Uint32Array {
     keys[i] = hilbert(x, y) * slots + i
   }
   keys.sort()
-  return Uint32Array.from(keys, (key) => key % slots)
+  const order = new Uint32Array(count)
+  for (let i = 0; i < count; i++) order[i] = keys[i] - slots * Math.floor(keys[i] / slots)
+  return order
 }
 
 const near = (boxes: Float64Array, i: number, j: number, reach: number): boolean =>

@@ -9,6 +9,7 @@ import type { Finding } from './finding'
 import { geometryFinding } from './findings'
 import { sheetParts } from './frames'
 import { groupOutlines } from './groups'
+import type { Loops } from './nest'
 import { netOutlines } from './netOutlines'
 import type { OutlineSet, Tolerances } from './outlineSet'
 import type { ArcRun, Bond } from './recipe'
@@ -35,7 +36,7 @@ export function outlinesOf(edges: EdgeTable, take: Uint32Array, tolerances: Tole
   const findings = [...closed.findings, ...nets.findings]
   const sound = withoutEmpty(closed.edges, Uint32Array.from(closed.loopStart), nets.undecided, tolerances, findings)
   const arcs = takeArcs(sound, options.arcs, tolerances, mmPerUnit, findings)
-  const related = relate(arcs.edges, arcs.loopStart, tolerances.snap, sound.undecided)
+  const related = relate(arcs.edges, arcs.loopStart, tolerances.snap, sound.undecided, arcs.boxes, arcs.loops)
   return {
     ...completed(related, tolerances, mmPerUnit, findings),
     openEdges: closed.openEdges,
@@ -48,6 +49,9 @@ interface Kept {
   edges: EdgeTable
   loopStart: Uint32Array
   undecided: Uint8Array
+  /** bounds of edges and measures of loops, where they are as measured */
+  boxes?: Float64Array
+  loops?: Loops
 }
 
 /** Leaves out loops without area and loops that lie on an earlier one. */
@@ -58,12 +62,14 @@ function withoutEmpty(
   tolerances: Tolerances,
   findings: Finding[],
 ): Kept {
-  const loops = measured(edges, loopStart, boundsOfEdges(edges))
+  const boxes = boundsOfEdges(edges)
+  const loops = measured(edges, loopStart, boxes)
   const place = (k: number): [number, number] => [edges.ends[4 * loopStart[k]], edges.ends[4 * loopStart[k] + 1]]
   const doubled = coincidentLoops(loops, tolerances.duplicate)
   const empty = loops.area.map((area, k) => {
-    const [minX, minY, maxX, maxY] = loops.bounds.subarray(4 * k, 4 * k + 4)
-    return area <= tolerances.snap * (maxX - minX + maxY - minY) ? 1 : 0
+    const b = 4 * k
+    const size = loops.bounds[b + 2] - loops.bounds[b] + loops.bounds[b + 3] - loops.bounds[b + 1]
+    return area <= tolerances.snap * size ? 1 : 0
   })
   const first = doubled.indexOf(1)
   const count = doubled.reduce((sum, one) => sum + one, 0)
@@ -76,24 +82,30 @@ function withoutEmpty(
     findings.push(withoutArea(edges, loopStart[k], loopStart[k + 1], tolerances.snap))
   }
   const keep = (k: number) => !doubled[k] && !empty[k]
-  if (count === 0 && !empty.includes(1)) return { edges, loopStart, undecided }
+  if (count === 0 && !empty.includes(1)) return { edges, loopStart, undecided, boxes, loops }
   return { ...selectLoops(edges, loopStart, keep), undecided: undecided.filter((_, k) => keep(k)) }
 }
 
-function takeArcs({ edges, loopStart }: Kept, runs: ArcRun[], tolerances: Tolerances, mmPerUnit: number, findings: Finding[]) {
-  if (runs.length === 0) return { edges, loopStart }
-  const taken = acceptArcs(edges, loopStart, runs, tolerances.chaining)
+function takeArcs(
+  kept: Kept,
+  runs: ArcRun[],
+  tolerances: Tolerances,
+  mmPerUnit: number,
+  findings: Finding[],
+): Pick<Kept, 'edges' | 'loopStart' | 'boxes' | 'loops'> {
+  if (runs.length === 0) return kept
+  const taken = acceptArcs(kept.edges, kept.loopStart, runs, tolerances.chaining)
   if (taken.taken > 0)
     findings.push(geometryFinding('arcs-from-chords', { count: taken.taken, area: taken.area * mmPerUnit ** 2 }))
   for (const { through } of taken.missing)
     findings.push(geometryFinding('arc-run-not-found', { x: through[0], y: through[1] }, through))
-  return taken
+  return { edges: taken.edges, loopStart: taken.loopStart }
 }
 
 type Completed = Omit<OutlineSet, 'openEdges' | 'openStart' | 'repairs'>
 
 /** Adds what a person is to be asked or told of the outlines: groups, sheet parts, runs of chords. */
-export function completed(related: Related, tolerances: Tolerances, mmPerUnit: number, before: Finding[]): Completed {
+function completed(related: Related, tolerances: Tolerances, mmPerUnit: number, before: Finding[]): Completed {
   const findings = [...before, ...related.findings]
   const { count, bounds, at } = related
   const { frames, titleBlocks } = sheetParts(related, related, mmPerUnit)

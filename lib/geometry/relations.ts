@@ -94,9 +94,14 @@ function contactFindings({ contacts, selfMeeting, tooMany }: Crossings, crossing
  * Names, nesting and meetings of loops. Loops that cross others or themselves, and those in `undecided`, have depth −1:
  * nesting says nothing of them; they still hold what lies inside.
  */
-export function relate(edges: EdgeTable, loopStart: Uint32Array, snap: number, undecided: Uint8Array): Related {
-  const boxes = boundsOfEdges(edges)
-  const loops = measured(edges, loopStart, boxes)
+export function relate(
+  edges: EdgeTable,
+  loopStart: Uint32Array,
+  snap: number,
+  undecided: Uint8Array,
+  boxes = boundsOfEdges(edges),
+  loops = measured(edges, loopStart, boxes),
+): Related {
   const inside = loopTester(loops, boxes)
   const crossings = crossingsOf(loops, boxes, snap, inside)
   const clusters = clustersOf(loops.count, crossings)

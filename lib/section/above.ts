@@ -95,7 +95,8 @@ export function above(bundles: Bundles, frame: Frame, c: number): Above {
  */
 export function halfAreaHeight(bundles: Bundles, frame: Frame, minV: number, maxV: number): number {
   const { edges, count, start, closed, segments, moments } = bundles
-  let active = Uint32Array.from({ length: count }, (_, k) => k)
+  let active = new Uint32Array(count)
+  for (let k = 0; k < count; k++) active[k] = k
   const settled = newSums(1)
   let low = minV
   let high = maxV
