@@ -134,10 +134,6 @@ export const GEOMETRY_FINDINGS = {
     severity: 'warning',
     say: (p) => `The run of chords accepted as an arc at ${place(p)} is not in the drawing; ignored. Look at it again.`,
   },
-  'part-not-found': {
-    severity: 'error',
-    say: (p) => `No outline lies at ${place(p)}, where the part was picked. Pick it again.`,
-  },
 } satisfies Record<string, FindingRow>
 
 export type GeometryCode = keyof typeof GEOMETRY_FINDINGS

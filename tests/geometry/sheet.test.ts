@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest'
-import { pickOutlines } from '@/lib/geometry/pickOutlines'
-import { codesOf, Drawn, TOLERANCES } from './drawn'
+import { nearestOutlines } from '@/lib/geometry/nearestOutlines'
+import { codesOf, Drawn } from './drawn'
 
 /** a box section of 40 × 20 × 2 with its lower left corner at x, y */
 const box = (drawn: Drawn, x: number, y: number) => drawn.rectangle(x, y, x + 40, y + 20).rectangle(x + 2, y + 2, x + 38, y + 18)
@@ -97,49 +97,16 @@ test('an I of three plates that touch is no title block', () => {
   expect([...set.depth]).toEqual([0, 0, 0])
 })
 
-test('picking one box section by a point on each of its outlines takes 2 outlines with depths 0 and 1, out of a frame', () => {
-  const set = sheet(6).rectangle(0, 0, 600, 400).outlines()
-  expect([...set.depth.subarray(0, 2)]).toEqual([1, 2])
-  const part = pickOutlines(
-    set,
-    [
-      [140, 20],
-      [140, 22],
-    ],
-    TOLERANCES,
-    1,
-  )
-  expect([...part.area]).toEqual([800, 576])
-  expect([...part.depth]).toEqual([0, 1])
-  expect(part.findings).toEqual([])
-})
-
 test('every outline of a sheet is picked by its own name', () => {
   const set = sheet(20).outlines()
   for (let k = 0; k < set.count; k++) {
-    const part = pickOutlines(set, [[set.at[2 * k], set.at[2 * k + 1]]], TOLERANCES, 1)
-    expect([part.count, part.area[0], ...part.bounds]).toEqual([1, set.area[k], ...set.bounds.subarray(4 * k, 4 * k + 4)])
+    expect([...nearestOutlines(set, [[set.at[2 * k], set.at[2 * k + 1]]])]).toEqual([k])
   }
-})
-
-test('a part picked where no outline is says so', () => {
-  const part = pickOutlines(sheet(1).outlines(), [[500, 500]], TOLERANCES, 1)
-  expect(part.count).toBe(0)
-  expect(codesOf(part)).toEqual(['part-not-found'])
-})
-
-test('findings and open chains elsewhere on the sheet are not those of the part', () => {
-  const set = sheet(2).line(500, 500, 600, 500).line(600, 500, 600, 510).outlines()
-  expect(codesOf(set)).toContain('chain-open')
-  const part = pickOutlines(set, [[40, 20]], TOLERANCES, 1)
-  expect(part.findings).toEqual([])
-  expect(part.openStart).toEqual(Uint32Array.of(0))
 })
 
 test('outlines that share a side are named on a side of their own', () => {
   const set = new Drawn().rectangle(0, 0, 10, 40).rectangle(10, 0, 14, 40).outlines()
   for (const k of [0, 1]) {
-    const part = pickOutlines(set, [[set.at[2 * k], set.at[2 * k + 1]]], TOLERANCES, 1)
-    expect(part.area[0]).toBe(set.area[k])
+    expect([...nearestOutlines(set, [[set.at[2 * k], set.at[2 * k + 1]]])]).toEqual([k])
   }
 })

@@ -24,6 +24,11 @@ export const COMBINE_FINDINGS = {
     say: (p) =>
       `The part names an outline by the point ${place(p)}, but the nearest one is ${text(p.distance)} mm away. Check that it is the one that is meant.`,
   },
+  'part-not-found': {
+    severity: 'error',
+    say: (p) =>
+      `No outline lies at ${place(p)}, where the part was picked: the nearest one is ${text(p.distance)} mm away. Pick it again.`,
+  },
   'faces-undecided': {
     severity: 'error',
     say: (p) =>

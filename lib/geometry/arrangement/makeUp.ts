@@ -1,6 +1,6 @@
 import { nearestOn } from '../nearest'
 import type { OutlineSet } from '../outlineSet'
-import { nearestOutlines } from '../pickOutlines'
+import { nearestOutlines } from '../nearestOutlines'
 import type { Does, MakeUpStep, XY } from '../recipe'
 
 /** One step of the make-up with its outline found. */

@@ -1,6 +1,6 @@
 import { type Finding, placeText } from '../finding'
 import type { OutlineSet, Tolerances } from '../outlineSet'
-import { nearestOutlines } from '../pickOutlines'
+import { nearestOutlines } from '../nearestOutlines'
 import type { Bond, Does, MakeUpStep, XY } from '../recipe'
 import type { Region, Repair } from '../region'
 import { MOST_CROSSINGS } from './arrange'
@@ -136,11 +136,20 @@ function pointsOff(makeUp: MakeUpStep[], off: number[], { chaining }: Tolerances
   )
 }
 
+/** Share of the nearest outline's size beyond which a point of the part names nothing. */
+const FARTHEST = 0.05
+
 function partOff(set: OutlineSet, part: XY[], { chaining }: Tolerances, mmPerUnit: number): Finding[] {
   const outlines = nearestOutlines(set, part)
   return part.flatMap(([x, y], n) => {
-    const off = outlines[n] < 0 ? 0 : distanceTo(set, outlines[n], [x, y])
-    return off > 10 * chaining ? [combineFinding('part-point-off', { x, y, distance: off * mmPerUnit }, [x, y], off)] : []
+    const k = outlines[n]
+    const off = k < 0 ? 0 : distanceTo(set, k, [x, y])
+    if (off <= 10 * chaining) return []
+    const { bounds } = set
+    const size = Math.max(bounds[4 * k + 2] - bounds[4 * k], bounds[4 * k + 3] - bounds[4 * k + 1])
+    // a point on each outline is asked for; one this far away means no outline at all, and a figure would be a guess
+    const code = off > FARTHEST * size ? 'part-not-found' : 'part-point-off'
+    return [combineFinding(code, { x, y, distance: off * mmPerUnit }, [x, y], off)]
   })
 }
 

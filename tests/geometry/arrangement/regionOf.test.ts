@@ -264,6 +264,12 @@ test('a make-up point far from every outline is a warning with its distance', ()
   expect(answer.findings.map(({ code, params }) => [code, params.distance])).toEqual([['make-up-point-off', 5]])
 })
 
+test('a part point 490 mm from the nearest outline is an error: no figure is guessed from it', () => {
+  const answer = combined([rectangle(0, 0, 10, 10)], { part: [[500, 5]] })
+  const found = answer.findings.map(({ code, severity, params }) => [code, severity, params.distance])
+  expect(found).toContainEqual(['part-not-found', 'error', 490])
+})
+
 test('a make-up that cuts everything away is an error, not an empty region', () => {
   const answer = combined([rectangle(0, 0, 10, 10), rectangle(-1, -1, 20, 20)], {
     makeUp: [step(0, 5, 'add'), step(-1, 5, 'cut')],
