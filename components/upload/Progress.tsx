@@ -8,6 +8,7 @@ const STAGES: { stage: Stage; word: string }[] = [
   { stage: 'chain', word: 'Joining edges into outlines' },
   { stage: 'combine', word: 'Combining outlines' },
   { stage: 'figures', word: 'Computing figures' },
+  { stage: 'torsion', word: 'Bounding the torsion constant' },
 ]
 
 /** What the worker does at the moment; long work can be cancelled and taken up again. */

@@ -5,6 +5,7 @@ import type { PreviewReply, PreviewRequest, PreviewResult, Stage } from './previ
 export type { DrawingView, PreviewResult, Role, Stage } from './previewProtocol'
 
 export interface PreviewHandlers {
+  /** twice for a recipe: all figures but those of finite elements, then with them */
   onResult: (result: PreviewResult, seq: number) => void
   onProgress: (stage: Stage) => void
   /** the worker itself failed: an error of the product, never of the drawing */
@@ -28,7 +29,10 @@ export function openPreview(file: File, { onResult, onProgress, onFailure }: Pre
     if (data.seq !== seq) return
     if (data.stage === 'done') onResult(data.result, data.seq)
     else if (data.stage === 'failed') onFailure(data.result.message)
-    else onProgress(data.stage)
+    else {
+      if (data.result) onResult(data.result, data.seq)
+      onProgress(data.stage)
+    }
   }
 
   function started(): Worker {

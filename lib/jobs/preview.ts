@@ -2,7 +2,7 @@ import type { EdgeTable } from '../geometry/edges'
 import type { Recipe } from '../geometry/recipe'
 import type { UsedMaterial } from './answer'
 import type { DrawingView, PreviewResult, Stage } from './previewProtocol'
-import type { SectionTask, TaskResult } from './tasks'
+import type { Extent, SectionTask, TaskResult } from './tasks'
 
 /** What the page is sent: the task keeps its own tables, so copies cut to length go out. */
 export function previewOf(
@@ -10,8 +10,9 @@ export function previewOf(
   recipe: Recipe,
   materials: Record<string, UsedMaterial>,
   onStage: (stage: Stage) => void,
+  extent: Extent = 'all',
 ): PreviewResult {
-  const { answer, drawing, tallies, outlines, roles, region } = task.run(recipe, materials, onStage)
+  const { answer, drawing, tallies, outlines, roles, region } = task.run(recipe, materials, onStage, extent)
   const { edges, openEdges, ...columns } = outlines
   return {
     answer,

@@ -24,12 +24,37 @@ async function work(): Promise<void> {
   wanted = null
   if (!request || !file) return
   const { seq, recipe, materials } = request
-  try {
-    task ??= await opened(seq, file)
-    const result = previewOf(task, recipe, materials, (stage) => send({ seq, stage, result: null }))
+  const isDone = await guarded(seq, async (from) => {
+    task ??= await opened(seq, from)
+    const result = previewOf(
+      task,
+      recipe,
+      materials,
+      (stage) => stage !== 'torsion' && send({ seq, stage, result: null }),
+      'first',
+    )
+    send({ seq, stage: 'torsion', result }, buffersOf(result))
+  })
+  // a timer lets a newer recipe come before the slow part
+  if (isDone) setTimeout(() => !wanted && finish(request))
+}
+
+/** The same answer with torsion and shear figures. */
+async function finish({ seq, recipe, materials }: RecipeRequest): Promise<void> {
+  await guarded(seq, async () => {
+    if (!task) return
+    const result = previewOf(task, recipe, materials, () => {})
     send({ seq, stage: 'done', result }, buffersOf(result))
+  })
+}
+
+async function guarded(seq: number, run: (from: { blob: Blob; name: string }) => Promise<void>): Promise<boolean> {
+  try {
+    if (file) await run(file)
+    return true
   } catch (error) {
     send({ seq, stage: 'failed', result: { message: error instanceof Error ? error.message : String(error) } })
+    return false
   }
 }
 

@@ -7,7 +7,7 @@ import type { SectionAnswer } from '../section/types'
 import type { UsedMaterial } from './answer'
 
 /** The steps of a task, in order. */
-export type Stage = 'read' | 'chain' | 'combine' | 'figures'
+export type Stage = 'read' | 'chain' | 'combine' | 'figures' | 'torsion'
 
 /** The drawing without its long columns, with counts for the lists a person chooses from. */
 export interface DrawingView extends Omit<Drawing, 'edges' | 'entities' | 'remarks'> {
@@ -44,8 +44,9 @@ export type PreviewRequest =
   | { kind: 'open'; file: Blob; name: string }
   | { kind: 'recipe'; seq: number; recipe: Recipe; materials: Record<string, UsedMaterial> }
 
-/** From worker to page. A stage without result says that it begins. */
+/** From worker to page. A stage without result says that it begins; torsion begins with all other figures in hand. */
 export type PreviewReply =
-  | { seq: number; stage: Stage; result: null }
+  | { seq: number; stage: Exclude<Stage, 'torsion'>; result: null }
+  | { seq: number; stage: 'torsion'; result: PreviewResult }
   | { seq: number; stage: 'done'; result: PreviewResult }
   | { seq: number; stage: 'failed'; result: { message: string } }

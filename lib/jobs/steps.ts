@@ -7,7 +7,7 @@ import type { OutlineSet, Tolerances } from '../geometry/outlineSet'
 import { mmPerUnit, type Recipe } from '../geometry/recipe'
 import type { Region, Repair } from '../geometry/region'
 import { cosSin, transformRegion } from '../geometry/transform'
-import { sectionOf } from '../section/section'
+import { edgeFigures, withTorsion } from '../section/section'
 import type { Section } from '../section/types'
 import type { UsedMaterial } from './answer'
 import { taskFinding } from './findings'
@@ -74,8 +74,14 @@ export function figuresStep(
   const { masses, findings } = massesOf(combined.parts, recipe.material, materials, placed)
   const repairs = placedRepairs(combined.repairs, scale, recipe.turn)
   const inputs = { lastDigit: drawing.lastDigit * scale, repairs, ...masses }
-  const result = sectionOf(region, inputs)
+  const result = edgeFigures(region, inputs)
   return { section: result.section, region, findings: [...findings, ...result.findings], repairs }
+}
+
+/** Torsion and shear figures, which take longer than all before, added to the others. */
+export function torsionStep(figures: Figures): Figures {
+  const { section, region, findings } = figures
+  return section && region ? { ...figures, ...withTorsion(section, region, findings) } : figures
 }
 
 function placedRepairs(repairs: Repair[], scale: number, turn: number): Repair[] {

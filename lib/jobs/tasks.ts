@@ -14,7 +14,7 @@ import { memo } from './memo'
 import { withConstants } from './narrow'
 import type { Role, Stage } from './previewProtocol'
 import { unitFindings, withoutFarFaults, withoutMootQuestions } from './sayings'
-import { chainStep, combineStep, figuresStep, keysOf, NO_FIGURES } from './steps'
+import { chainStep, combineStep, figuresStep, keysOf, NO_FIGURES, torsionStep } from './steps'
 
 export interface TaskResult {
   answer: SectionAnswer
@@ -30,12 +30,14 @@ export interface TaskResult {
   combination: Combination | null
 }
 
+export type Extent = 'first' | 'all'
 type Materials = Record<string, UsedMaterial>
 
 /** One drawing, answered for one recipe after another; only what a change of the recipe touches is done again. */
 export interface SectionTask {
   drawing: Drawing
-  run: (recipe: Recipe, materials: Materials, onStage?: (stage: Stage) => void) => TaskResult
+  /** `extent` 'first' leaves out what finite elements give, so that a person sees all else at once */
+  run: (recipe: Recipe, materials: Materials, onStage?: (stage: Stage) => void, extent?: Extent) => TaskResult
 }
 
 /** Bytes to drawing. */
@@ -49,10 +51,11 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
   const chained = memo(chainStep)
   const combined = memo(combineStep)
   const figured = memo(figuresStep)
+  const twisted = memo(torsionStep)
   const told = memo(withConstants)
   return {
     drawing,
-    run(recipe, materials, onStage = () => {}) {
+    run(recipe, materials, onStage = () => {}, extent = 'all') {
       const keys = keysOf(recipe, materials)
       onStage('chain')
       const chain = chained(keys.chain, drawing, recipe)
@@ -63,7 +66,8 @@ export function createTask(drawing: Drawing, source: Source): SectionTask {
       const ofOutlines = withoutFarFaults(withoutMootQuestions(outlines.findings, outlines, taken), outlines, taken)
       const before = [drawing.findings, selection.findings, ofOutlines, combine.findings].flat()
       onStage('figures')
-      const figures = before.some(isError) ? NO_FIGURES : figured(keys.figures, drawing, combine, recipe, materials)
+      const first = before.some(isError) ? NO_FIGURES : figured(keys.figures, drawing, combine, recipe, materials)
+      const figures = extent === 'all' && first.section ? twisted(keys.figures, first) : first
       const narrow = told(keys.figures, combine, chain.tolerances, mmPerUnit(recipe), figures.section?.j?.value)
       const findings = [
         ...drawing.findings,

@@ -42,11 +42,23 @@ function massOf(area: number, { density, parts }: SectionInputs): number | undef
   }, 0)
 }
 
+/** Every figure of a region: those of `edgeFigures`, then torsion and shear by finite elements. */
+export function sectionOf(region: Region, inputs: SectionInputs): SectionResult {
+  const first = edgeFigures(region, inputs)
+  return first.section ? withTorsion(first.section, region, first.findings) : first
+}
+
+/** A section from edge integrals with torsion and shear figures added, as far as they can be had. */
+export function withTorsion(section: Section, region: Region, before: readonly Finding[]): SectionResult {
+  const { figures, origin, findings } = torsionFigures(region)
+  return { section: { ...section, ...figures, origin: { ...section.origin, ...origin } }, findings: [...before, ...findings] }
+}
+
 /**
- * All figures of a region (mm, turned upright) by exact integrals along its edges. Signs and axes as in `Section`; a region
+ * The figures of a region (mm, turned upright) that exact integrals along its edges give. Signs and axes as in `Section`; a region
  * without metal, or with less than rounding can tell, gives no section but a finding.
  */
-export function sectionOf(region: Region, inputs: SectionInputs): SectionResult {
+export function edgeFigures(region: Region, inputs: SectionInputs): SectionResult {
   const { edges } = region
   if (edges.count === 0) return nothing('no-metal')
   const bundles = bundlesOf(region)
@@ -104,10 +116,8 @@ export function sectionOf(region: Region, inputs: SectionInputs): SectionResult 
     ...(region.pieces > 1 ? { withoutSteiner: ownMoments(region, frame, pieces) } : {}),
     origin: {},
   }
-  const torsion = torsionFigures(region)
-  Object.assign(section, torsion.figures)
-  section.origin = { ...originsOf(section, boundary, causes, { widths, circle: leverage }), ...torsion.origin }
-  return { section, findings: [...sayings(section), ...findings, ...torsion.findings] }
+  section.origin = originsOf(section, boundary, causes, { widths, circle: leverage })
+  return { section, findings: [...sayings(section), ...findings] }
 }
 
 const nothing = (code: 'no-metal' | 'too-thin'): SectionResult => ({
