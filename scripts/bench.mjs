@@ -89,7 +89,8 @@ function generated(kind, size) {
     expected,
     accept: 1e-9,
     args: [],
-    rounds: large ? 5 : 25,
+    // small drawings take many rounds until the compiler has done its work
+    rounds: Math.round(Math.min(300, Math.max(large ? 5 : 15, 600_000 / entities))),
     peer: !large,
     limit: true,
   }
