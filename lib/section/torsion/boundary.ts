@@ -31,9 +31,9 @@ export function pointOn(region: Region, edge: number, t: number): { x: number; y
 }
 
 /** Greatest turning of one piece, rad: keeps the blended maps of its triangles one to one. */
-const TURN = Math.PI / 6
+const TURN = Math.PI / 4
 
-/** Pieces of every loop: edges split so that none turns more than 30° nor is longer than `longest`. */
+/** Pieces of every loop: edges split so that none turns more than 45° nor is longer than `longest`. */
 export function boundaryOf(region: Region, points: Points, longest: number): Boundary {
   const known = new Map<string, number>()
   // loops that touch share the vertex, or the triangulation would see two in one place

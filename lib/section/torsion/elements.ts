@@ -63,7 +63,7 @@ const STRAIGHT = [
   [a, 1 - 2 * a, a, w],
   [1 - 2 * a, a, a, w],
 ])
-const GAUSS = 7
+const GAUSS = 5
 
 const jet = newJet()
 

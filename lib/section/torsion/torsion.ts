@@ -197,36 +197,35 @@ interface Fields {
 
 /** Both energies, and where they differ. */
 function bounds(region: Region, mesh: Mesh, { dof }: Unknowns, { phi, omega, load }: Fields): Omit<Solution, 'warping'> {
-  const error = new Float64Array(mesh.corner.length / 3)
-  let upper = 0
+  const count = mesh.corner.length / 3
+  // ∫|τφ|², ∫|τω|² and ∫τφ·τω of each triangle: the stress function's best scale is known only at the end
+  const [stress, strain, both] = [new Float64Array(count), new Float64Array(count), new Float64Array(count)]
   const [p, w] = [new Float64Array(6), new Float64Array(6)]
-  // the stress function at its best scale: 2∫φ / ∫|∇φ|²
-  let energy = 0
-  const each = (visit: (t: number, weight: number, sx: number, sy: number, tx: number, ty: number) => void) =>
-    eachTriangle(region, mesh, (t, { n, x, y, weight, shape }) => {
+  eachTriangle(region, mesh, (t, { n, x, y, weight, shape }) => {
+    for (let i = 0; i < 6; i++) {
+      p[i] = phi(dof[6 * t + i])
+      w[i] = omega(dof[6 * t + i])
+    }
+    for (let q = 0; q < n; q++) {
+      let px = 0
+      let py = 0
+      let wx = -y[q]
+      let wy = x[q]
       for (let i = 0; i < 6; i++) {
-        p[i] = phi(dof[6 * t + i])
-        w[i] = omega(dof[6 * t + i])
+        const k = 18 * q + 3 * i
+        px += p[i] * shape[k + 1]
+        py += p[i] * shape[k + 2]
+        wx += w[i] * shape[k + 1]
+        wy += w[i] * shape[k + 2]
       }
-      for (let q = 0; q < n; q++) {
-        let [px, py, wx, wy] = [0, 0, 0, 0]
-        for (let i = 0; i < 6; i++) {
-          const k = 18 * q + 3 * i
-          px += p[i] * shape[k + 1]
-          py += p[i] * shape[k + 2]
-          wx += w[i] * shape[k + 1]
-          wy += w[i] * shape[k + 2]
-        }
-        visit(t, weight[q], py, -px, wx - y[q], wy + x[q])
-      }
-    })
-  each((_, weight, sx, sy, tx, ty) => {
-    energy += weight * (sx * sx + sy * sy)
-    upper += weight * (tx * tx + ty * ty)
+      stress[t] += weight[q] * (px * px + py * py)
+      strain[t] += weight[q] * (wx * wx + wy * wy)
+      both[t] += weight[q] * (py * wx - px * wy)
+    }
   })
-  const scale = load / energy
-  each((t, weight, sx, sy, tx, ty) => {
-    error[t] += weight * ((scale * sx - tx) ** 2 + (scale * sy - ty) ** 2)
-  })
-  return { lower: (load * load) / energy, upper, error }
+  const total = (values: Float64Array) => values.reduce((sum, value) => sum + value, 0)
+  const scale = load / total(stress)
+  // the sum of the squares, and what rounding could take below zero
+  const error = stress.map((s, t) => Math.max(0, scale * scale * s - 2 * scale * both[t] + strain[t]))
+  return { lower: scale * load, upper: total(strain), error }
 }
