@@ -20,10 +20,13 @@ export function usePreview(file: File, recipe: Recipe, materials: Record<string,
   const [seen, setSeen] = useState<Seen>(NOTHING)
   const [preview, setPreview] = useState<Preview | null>(null)
   const stopped = useRef(false)
+  // cancelled before the worker was there, or by a person: nothing is asked until they say so
+  const held = useRef(false)
 
   useEffect(() => {
     let opened: Preview | null = null
     stopped.current = false
+    held.current = false
     setSeen(NOTHING)
     import('@/lib/jobs/browser-pool').then(({ openPreview }) => {
       if (stopped.current) return
@@ -43,14 +46,16 @@ export function usePreview(file: File, recipe: Recipe, materials: Record<string,
 
   const ask = useCallback(() => preview?.ask(recipe, materials), [preview, recipe, materials])
   useEffect(() => {
-    ask()
+    if (!held.current) ask()
   }, [ask])
 
   const cancel = useCallback(() => {
+    held.current = true
     preview?.cancel()
     setSeen((now) => ({ ...now, stage: null, cancelled: true }))
   }, [preview])
   const retry = useCallback(() => {
+    held.current = false
     setSeen((now) => ({ ...now, stage: 'read', failure: null, cancelled: false }))
     ask()
   }, [ask])
