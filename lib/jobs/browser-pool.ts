@@ -50,7 +50,12 @@ export function openPreview(file: File, { onResult, onProgress, onFailure }: Pre
 
   function stop(): void {
     seq++
-    worker?.terminate()
+    if (worker) {
+      // ended while its script loads, a worker reports a fault that is none
+      worker.onmessage = null
+      worker.onerror = null
+      worker.terminate()
+    }
     worker = null
   }
 
