@@ -80,12 +80,12 @@ test('from sign-in to a saved revision by keys alone', async ({ page }) => {
   await page.keyboard.type(fresh('Keys'))
   await page.keyboard.press('Enter')
   await expect(page.getByText('Drop the DXF here')).toBeVisible({ timeout: 20_000 })
-  const choosing = page.waitForEvent('filechooser')
   await expect(async () => {
+    // the page may not be alive yet: the window is awaited before the key is pressed, each time
+    const choosing = page.waitForEvent('filechooser', { timeout: 2000 })
     await page.keyboard.press('o')
-    await page.waitForEvent('filechooser', { timeout: 1000 })
-  }).toPass()
-  await (await choosing).setFiles(drawing('mullion-60x118.dxf'))
+    await (await choosing).setFiles(drawing('mullion-60x118.dxf'))
+  }).toPass({ timeout: 30_000 })
   await page.getByLabel('A dimension you know').focus()
   await page.keyboard.press('Tab')
   await expect(page.getByLabel('Known to be')).toBeFocused()
