@@ -13,6 +13,8 @@ export default defineConfig({
   outputDir: 'test-results',
   workers: 1,
   timeout: 60_000,
+  // a machine that stumbles does not hold up a landing; a flaky test is printed as such and is a defect
+  retries: process.env.CI ? 1 : 0,
   use: {
     ...devices['Desktop Chrome'],
     viewport: { width: 1440, height: 900 },
