@@ -12,6 +12,11 @@ export function DropZone({ several = false, onFiles }: { several?: boolean; onFi
     noKeyboard: true,
   })
   useEffect(() => {
+    // what the first drawing needs is fetched while the person looks for it
+    import('@/lib/jobs/browser-pool').then(({ warmPreview }) => warmPreview())
+    import('./UploadFlow')
+  }, [])
+  useEffect(() => {
     const onPaste = (event: ClipboardEvent) => {
       const files = [...(event.clipboardData?.files ?? [])]
       if (files.length === 0) return
