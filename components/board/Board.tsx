@@ -28,7 +28,7 @@ import { sheetAround } from './zones'
 /** Room around what is fitted: for axes, their names, dimensions and the zones' marks, px. */
 const INSET = { top: 92, right: 84, bottom: 76, left: 96 }
 const NARROW_INSET = { top: 64, right: 50, bottom: 58, left: 74 }
-/** The drawing takes the focus, as any part that is worked by keys. */
+/** The drawing is worked by keys, so it takes the focus. */
 const FOCUSABLE = { tabIndex: 0 }
 /** How near an outline the pointer must be to pick it, px. */
 const REACH = 8

@@ -99,7 +99,7 @@ export const SectionSheet = memo(function SectionSheet({ section, display, hover
   )
 })
 
-/** Plastic neutral axes that lie in a gap: any place between two metals halves the area, and the modulus is the same. */
+/** Plastic neutral axes that lie in a gap: every place between two metals halves the area, and the modulus is the same. */
 function FreeAxes({ section, display }: Omit<Props, 'hover'>) {
   const names = axisNames(display.axes)
   const { length } = writingOf(display)

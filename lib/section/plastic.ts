@@ -17,7 +17,7 @@ export interface PlasticBending {
 
 /**
  * Plastic modulus about an axis parallel to u: the neutral axis halves the area (equal forces of one yield stress), the modulus is
- * the sum of both halves' first moments about it. Source: any text on plastic design.
+ * the sum of both halves' first moments about it. Source: Timoshenko, Strength of Materials II (from memory).
  */
 export function plasticBending(bundles: Bundles, frame: Frame, { minV, maxV }: Extremes): PlasticBending {
   const c = halfAreaHeight(bundles, frame, minV, maxV)

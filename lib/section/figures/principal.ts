@@ -3,7 +3,7 @@ import { momentSpread, thetaSpread } from './spread'
 
 /**
  * I1 ≥ I2, integrated in the principal frame itself: from Ix, Iy, Ixy alone a thin turned strip would lose I2's digits.
- * Source: any text on strength of materials.
+ * Source: Timoshenko, Strength of Materials I (from memory).
  */
 export const i1: Figure = {
   key: 'i1',
